@@ -17,7 +17,7 @@ internal static class CoverageReview
 
     private static IEnumerable<Finding> TooFew(ReviewedTest review)
     {
-        var needed = review.Test.Method?.MinimumSpecimens ?? UsualMinimum;
+        var needed = review.Test.Method?.MinimumSpecimens?.Value ?? UsualMinimum;
         var kept = review.Kept.Count;
         if (kept < needed)
         {
@@ -30,7 +30,7 @@ internal static class CoverageReview
 
     private static IEnumerable<Finding> Spacing(ReviewedTest review)
     {
-        var methods = review.Test.Method?.GreatestSpacingPercent;
+        var methods = review.Test.Method?.GreatestSpacingPercent?.Value;
         var greatest = methods ?? UsualGreatestSpacing;
         var sorted = review.Sorted;
         for (var i = 1; i < sorted.Count; i++)

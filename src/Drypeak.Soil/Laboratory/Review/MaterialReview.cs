@@ -35,7 +35,7 @@ internal static class MaterialReview
 
     private static IEnumerable<Finding> MoldTolerance(ReviewedTest review)
     {
-        if (review.Test.Method is not { MoldVolume: { } nominal, MoldVolumeTolerance: { } tolerance } method)
+        if (review.Test.Method is not { MoldVolume: { Value: var nominal, Tolerance: { } tolerance } } method)
         {
             yield break;
         }
@@ -56,7 +56,7 @@ internal static class MaterialReview
 
     private static IEnumerable<Finding> Particles(MoistureDensityTest test)
     {
-        if (test is { Method: { OversizeSieveMillimeters: { } sieve, OversizeLimitPercent: { } limit } method, ParticlesAbove: { } particles }
+        if (test is { Method: { OversizeSieveMillimeters.Value: var sieve, OversizeLimitPercent.Value: var limit } method, ParticlesAbove: { } particles }
             && particles.SieveMillimeters >= sieve && particles.Fraction * 100 > limit * (1 + 1e-9))
         {
             yield return FindingKinds.ParticlesAboveLimit.At("/particlesAbove",
@@ -71,8 +71,8 @@ internal static class MaterialReview
             yield break;
         }
 
-        var methods = test.Method?.OversizeLimitPercent / 100;
-        var limit = methods ?? OversizeCorrection.LargestShare(oversize.SieveMillimeters ?? test.Method?.OversizeSieveMillimeters);
+        var methods = test.Method?.OversizeLimitPercent?.Value / 100;
+        var limit = methods ?? OversizeCorrection.LargestShare(oversize.SieveMillimeters ?? test.Method?.OversizeSieveMillimeters?.Value);
         if (oversize.Fraction > limit * (1 + 1e-9))
         {
             yield return FindingKinds.OversizeAboveLimit.At("/oversize/percent",
