@@ -40,6 +40,9 @@ public sealed record MoistureDensityTest
     /// <summary>The test method, or null where none is named or it is the caller's own.</summary>
     public TestMethod? Method { get; init; }
 
+    /// <summary>Whether the method is the caller's own.</summary>
+    public bool IsCustomMethod { get; init; }
+
     /// <summary>The compaction of a method of the caller's own, or null.</summary>
     public CustomEffort? CustomEffort { get; init; }
 

@@ -96,7 +96,7 @@ internal static class MaterialReview
 
     private static IEnumerable<Finding> Method(MoistureDensityTest test)
     {
-        if (test.Method is null && test.CustomEffort is null)
+        if (test.Method is null && !test.IsCustomMethod)
         {
             yield return FindingKinds.MethodNotGiven.At("", "No test method was named, so nothing of a method was checked. Name it to have mold, spacing, particles and reporting checked.");
         }
