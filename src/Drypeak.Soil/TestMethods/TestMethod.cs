@@ -14,11 +14,14 @@ public sealed record TestMethod
     /// <summary>The standard: <c>ASTM D698</c>.</summary>
     public required string Standard { get; init; }
 
-    /// <summary>The clause, method or mold within the standard: <c>Method A</c>.</summary>
+    /// <summary>The clause, method or mold within the standard: <c>method A</c>.</summary>
     public required string Clause { get; init; }
 
+    /// <summary>What the method is called in a sentence: <c>ASTM D698, method A</c>.</summary>
+    public string Title => $"{Standard}, {Clause}";
+
     /// <summary>What sets this row apart, for a reader who does not know the letters.</summary>
-    public required string Title { get; init; }
+    public required string Summary { get; init; }
 
     /// <summary>Volume of the mold without collar; from <see cref="MoldDiameter"/> and <see cref="MoldHeight"/> where the method gives only those.</summary>
     public required Sourced<Volume> MoldVolume { get; init; }
