@@ -79,7 +79,8 @@ public abstract record Rounding
         private static int LeadingPlace(double value)
         {
             var text = value.ToString("E16", CultureInfo.InvariantCulture);
-            return int.Parse(text.AsSpan(text.IndexOf('E', StringComparison.Ordinal) + 1), NumberStyles.AllowLeadingSign, CultureInfo.InvariantCulture);
+            var exponent = text.AsSpan(text.IndexOf('E', StringComparison.Ordinal) + 1);
+            return int.Parse(exponent, NumberStyles.AllowLeadingSign, CultureInfo.InvariantCulture);
         }
     }
 
