@@ -68,13 +68,14 @@ public sealed record MoistureDensityAnswer
 
 /// <summary>A test method.</summary>
 /// <param name="Code" example="astm-d698-a">Its code.</param>
-/// <param name="Title" example="Standard effort, 101.6 mm mold, soil passing 4.75 mm">What it is.</param>
+/// <param name="Title" example="ASTM D698, method A">Its name.</param>
+/// <param name="Summary" example="Standard effort, 101.6 mm mold, soil passing 4.75 mm">What it is.</param>
 /// <param name="Standard" example="ASTM D698">The standard; null for custom.</param>
 /// <param name="Effort">Compactive effort.</param>
-public sealed record MethodAnswer(string Code, string Title, string? Standard, EffortAnswer? Effort);
+public sealed record MethodAnswer(string Code, string Title, string? Summary, string? Standard, EffortAnswer? Effort);
 
 /// <summary>Compactive effort, kJ/m³.</summary>
-/// <param name="Computed" example="593.7">From rammer, drop, layers, blows and the mold's volume; null where one is unknown.</param>
+/// <param name="Computed" example="593.5">From rammer, drop, layers, blows and the mold's volume; null where one is unknown.</param>
 /// <param name="Nominal" example="600">As published; null where none is.</param>
 public sealed record EffortAnswer(double? Computed, double? Nominal);
 

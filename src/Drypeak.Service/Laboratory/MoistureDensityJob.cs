@@ -80,7 +80,7 @@ internal static class MoistureDensityJob
         var volume = specimens.Select(specimen => specimen.MoldVolume).FirstOrDefault(volume => volume is { });
         if (test.IsCustomMethod)
         {
-            return new MethodAnswer(MoistureDensityMapping.CustomMethod, "The caller's own method", null,
+            return new MethodAnswer(MoistureDensityMapping.CustomMethod, "The caller's own method", null, null,
                 test.CustomEffort is { } effort
                     ? new EffortAnswer(
                         volume is { } mold ? CompactiveEffort.Of(effort.Rammer, effort.Drop, effort.Layers, effort.BlowsPerLayer, mold).KilojoulesPerCubicMeter : null,
@@ -89,7 +89,7 @@ internal static class MoistureDensityJob
         }
 
         return test.Method is { } method
-            ? new MethodAnswer(method.Code, method.Title, method.Standard,
+            ? new MethodAnswer(method.Code, method.Title, method.Summary, method.Standard,
                 new EffortAnswer(method.Effort?.KilojoulesPerCubicMeter, method.NominalEffort?.Value.KilojoulesPerCubicMeter))
             : null;
     }
