@@ -125,7 +125,7 @@ public sealed class JsonReadingTests
                 "/balance negative",
                 "/ring/diametre unknown-member",
                 "/ring/height height-missing",
-                
+
             ],
             Faults(read));
     }
