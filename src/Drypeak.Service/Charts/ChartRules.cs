@@ -34,6 +34,6 @@ internal sealed class ChartRules : AbstractValidator<CompactionChart>
     public static IReadOnlyList<Fault> Check(CompactionChart chart)
     {
         var faults = Rules.Validate(chart).ToFaults();
-        return faults.Count == 0 && CompactionFigure.Refusal(chart) is { } refusal ? [new Fault("", "not-drawable", refusal)] : faults;
+        return faults.Count == 0 && CompactionFigure.Refusal(chart, FigureSize.Default) is { } refusal ? [new Fault("", "not-drawable", refusal)] : faults;
     }
 }
