@@ -3,7 +3,6 @@ using System.IO.Compression;
 using System.Text.Json;
 using Drypeak.Figures;
 using Drypeak.Service.Contracts;
-using Drypeak.Service.Hosting;
 using Drypeak.Soil;
 
 namespace Drypeak.Service.Charts;

@@ -1,7 +1,6 @@
 using Drypeak.Figures;
 using Drypeak.Service.Contracts;
 using Drypeak.Service.Hosting;
-using Drypeak.Soil;
 using FluentValidation;
 
 namespace Drypeak.Service.Charts;

@@ -1,5 +1,4 @@
 using Drypeak.Figures;
-using Drypeak.Service.Contracts;
 using Drypeak.Soil.Curves;
 using Drypeak.Soil.Laboratory;
 using Drypeak.Soil.Quantities;

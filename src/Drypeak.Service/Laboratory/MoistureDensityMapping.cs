@@ -42,6 +42,7 @@ internal static class MoistureDensityMapping
             WaterDensity = request.WaterDensity is { } given
                 ? Density.From(given, units.Density)
                 : WaterDensity.At(request.WaterTemperature ?? WaterDensity.DefaultTemperature),
+            WaterTemperature = request.WaterDensity is null ? request.WaterTemperature ?? WaterDensity.DefaultTemperature : null,
             Specimens = [.. request.Specimens!.Select((specimen, i) => specimen.ToMeasurement(i, units))],
             Oversize = request.Oversize is { Percent: { } percent } oversize
                 ? new Oversize(percent / 100, oversize.SpecificGravity, WaterContent.FromPercent(oversize.WaterContent ?? 0), oversize.Sieve)

@@ -1,6 +1,5 @@
 using Drypeak.Service.Contracts;
 using Drypeak.Service.Hosting;
-using Drypeak.Soil;
 using Drypeak.Soil.Laboratory;
 using Drypeak.Soil.Phases;
 using Drypeak.Soil.Quantities;

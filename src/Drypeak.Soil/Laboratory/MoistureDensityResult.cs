@@ -1,5 +1,4 @@
 using Drypeak.Soil.Curves;
-using Drypeak.Soil.Quantities;
 
 namespace Drypeak.Soil.Laboratory;
 

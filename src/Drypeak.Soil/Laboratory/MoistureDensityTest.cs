@@ -55,6 +55,9 @@ public sealed record MoistureDensityTest
     /// <summary>Density of the water in the soil.</summary>
     public required Density WaterDensity { get; init; }
 
+    /// <summary>Temperature that <see cref="WaterDensity"/> was taken at, °C; null where the density was given.</summary>
+    public double? WaterTemperature { get; init; }
+
     /// <summary>The specimens, in any order; at least one.</summary>
     public required IReadOnlyList<SpecimenMeasurement> Specimens { get; init; }
 

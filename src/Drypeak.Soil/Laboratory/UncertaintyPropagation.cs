@@ -1,5 +1,4 @@
 using Drypeak.Soil.Curves;
-using Drypeak.Soil.Quantities;
 using MathNet.Numerics.Distributions;
 using MathNet.Numerics.Random;
 
