@@ -1,0 +1,71 @@
+using Drypeak.Figures.Drawing;
+
+namespace Drypeak.Figures.Layout;
+
+/// <summary>The rectangle between the axes, and where numbers stand in it.</summary>
+internal sealed class Plot
+{
+    private const double LeastTickDistance = 44;
+
+    private Plot(Area area, View view, Ticks waterTicks, Ticks densityTicks)
+    {
+        Area = area;
+        Water = new LinearScale(view.WaterContent, area.Left, area.Right);
+        Density = new LinearScale(view.DryDensity, area.Bottom, area.Top);
+        WaterTicks = waterTicks;
+        DensityTicks = densityTicks;
+    }
+
+    public Area Area { get; }
+
+    public LinearScale Water { get; }
+
+    public LinearScale Density { get; }
+
+    public Ticks WaterTicks { get; }
+
+    public Ticks DensityTicks { get; }
+
+    public Place At(ChartPoint point) => new(Water.At(point.WaterContent), Density.At(point.DryDensity));
+
+    /// <summary>The rectangle that the heading, the ticks and the titles of the axes leave.</summary>
+    /// <param name="view">The ranges.</param>
+    /// <param name="headingBottom">px from the top.</param>
+    /// <param name="densityValues">Texts that stand among the labels of the density axis.</param>
+    /// <param name="size">The picture's size.</param>
+    /// <param name="type">Sizes of text and marks.</param>
+    public static Plot Lay(View view, double headingBottom, IEnumerable<string> densityValues, FigureSize size, TypeScale type)
+    {
+        var top = headingBottom + (2.35 * type.AxisTitle);
+        var bottom = size.Height - type.Margin - (1.6 * type.AxisTitle) - Axes.LabelBaseline(type);
+        var densityTicks = Ticks.Within(view.DryDensity, Math.Max(1, (bottom - top) / (LeastTickDistance * type.Unit)));
+
+        var labelWidth = densityTicks.Values
+            .Select(value => EmbeddedFont.Regular.Measure(densityTicks.Label(value), type.Label))
+            .Concat(densityValues.Select(text => EmbeddedFont.SemiBold.Measure(text, type.Value)))
+            .DefaultIfEmpty(0)
+            .Max();
+        var left = Math.Round(Math.Min(type.Margin + labelWidth + Axes.LabelGap(type), size.Width * 0.45)) + 0.5;
+        var right = size.Width - type.Margin;
+        var waterTicks = WaterTicksWithin(view.WaterContent, right - left, type);
+        return new Plot(new Area(left, Math.Round(top) + 0.5, right, Math.Round(bottom) + 0.5), view, waterTicks, densityTicks);
+    }
+
+    /// <summary>As fine as the labels leave room between them.</summary>
+    private static Ticks WaterTicksWithin(Interval range, double width, TypeScale type)
+    {
+        var most = Math.Max(1, width / (LeastTickDistance * 1.5 * type.Unit));
+        while (true)
+        {
+            var ticks = Ticks.Within(range, most);
+            var widest = ticks.Values.Select(value => EmbeddedFont.Regular.Measure(ticks.Label(value), type.Label)).DefaultIfEmpty(0).Max();
+            var distance = width * ticks.Step / range.Span;
+            if (distance >= widest + type.Label || most <= 1)
+            {
+                return ticks;
+            }
+
+            most = Math.Max(1, most * 0.75);
+        }
+    }
+}

@@ -1,0 +1,82 @@
+using System.Buffers.Text;
+using System.IO.Compression;
+using System.Text.Json;
+using Drypeak.Figures;
+using Drypeak.Service.Contracts;
+using Drypeak.Soil;
+
+namespace Drypeak.Service.Charts;
+
+/// <summary>
+/// A chart's address holds the whole chart: JSON, compressed (Brotli, RFC 7932), in base64url (RFC 4648), as the query's <c>d</c>.
+/// It carries what the figure shows, so that a GET draws and does not fit.
+/// </summary>
+internal static class ChartAddress
+{
+    public const string MoistureDensity = "moisture-density";
+
+    /// <summary>A request line longer than this many bytes is refused by many servers, ours among them.</summary>
+    private const int LongestRequestLine = 8192;
+
+    /// <summary>Room in the request line for method, path, version and the picture's size.</summary>
+    private const int RoomForTheRest = 160;
+
+    /// <summary>A chart that inflates beyond this is refused: bytes of JSON. Five hundred specimens with short labels take about 40 kB.</summary>
+    public const int LargestInflated = 256 * 1024;
+
+    private const int BrotliQuality = 5;
+    private const int BrotliWindow = 18;
+
+    /// <summary>Said where a chart is too large for an address.</summary>
+    public static Finding TooLongForALink { get; } = new("no-chart-address", Severity.Note,
+        "The chart holds more than an address can carry, so no links are given. Post the request with Accept: image/svg+xml, image/png or application/pdf to get the picture.",
+        "", "RFC 9110 section 4.1: request lines of 8000 bytes are the most to count on");
+
+    /// <summary>The addresses of a chart's pictures; none where it is too large.</summary>
+    public static LinksContract LinksFor(string job, CompactionChart chart)
+    {
+        var data = Encode(chart);
+        string? Link(string suffix) => data.Length + RoomForTheRest <= LongestRequestLine ? $"/v1/charts/{job}.{suffix}?d={data}" : null;
+        return new LinksContract { Svg = Link("svg"), Png = Link("png"), Pdf = Link("pdf") };
+    }
+
+    /// <summary>The chart as the text of an address.</summary>
+    public static string Encode(CompactionChart chart)
+    {
+        var json = JsonSerializer.SerializeToUtf8Bytes(chart, ServiceJson.Of<CompactionChart>());
+        var packed = new byte[BrotliEncoder.GetMaxCompressedLength(json.Length)];
+        return BrotliEncoder.TryCompress(json, packed, out var length, BrotliQuality, BrotliWindow)
+            ? Base64Url.EncodeToString(packed.AsSpan(0, length))
+            : throw new InvalidOperationException("A buffer of the greatest compressed length was too small.");
+    }
+
+    /// <summary>The JSON in an address's text.</summary>
+    /// <param name="data">The query's <c>d</c>.</param>
+    /// <param name="json">The JSON, up to <see cref="LargestInflated"/> bytes.</param>
+    /// <returns>Null where it could be unpacked, else the fault.</returns>
+    public static Fault? Unpack(string data, out ReadOnlyMemory<byte> json)
+    {
+        json = default;
+        var packed = new byte[Base64Url.GetMaxDecodedLength(data.Length)];
+        if (!Base64Url.IsValid(data) || !Base64Url.TryDecodeFromChars(data, packed, out var packedLength))
+        {
+            return new Fault("/d", "not-readable", "The address is damaged: d is not base64url. Take the link as an answer gave it.");
+        }
+
+        var inflated = new byte[LargestInflated];
+        using var decoder = new BrotliDecoder();
+        var status = decoder.Decompress(packed.AsSpan(0, packedLength), inflated, out var consumed, out var length);
+        if (status == System.Buffers.OperationStatus.DestinationTooSmall)
+        {
+            return new Fault("/d", "inflates-beyond-bound", $"The address inflates beyond {LargestInflated} bytes. Post the request itself with Accept: image/svg+xml instead.");
+        }
+
+        if (status != System.Buffers.OperationStatus.Done || consumed != packedLength)
+        {
+            return new Fault("/d", "not-readable", "The address is damaged or cut short: d does not unpack. Take the link as an answer gave it.");
+        }
+
+        json = inflated.AsMemory(0, length);
+        return null;
+    }
+}

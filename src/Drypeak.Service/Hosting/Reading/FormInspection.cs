@@ -1,0 +1,276 @@
+using System.Buffers;
+using System.Globalization;
+using System.Text.Json;
+using System.Text.Json.Serialization.Metadata;
+
+namespace Drypeak.Service.Hosting;
+
+/// <summary>
+/// Walks a document against the metadata of its contract and collects every fault of form: unknown, repeated, missing and
+/// mistyped members, null where there is none, numbers out of range. Beside it a mended document is written, in which a
+/// stand-in takes each faulty place, so that the rules can be asked about the rest.
+/// </summary>
+internal sealed class FormInspection
+{
+    private readonly JsonSerializerOptions options;
+    private readonly Utf8JsonWriter writer;
+    private readonly List<Fault> faults = [];
+    private readonly List<string> doubtful = [];
+
+    private FormInspection(JsonSerializerOptions options, Utf8JsonWriter writer) => (this.options, this.writer) = (options, writer);
+
+    /// <summary>
+    /// The faults in the order of the document, a missing member after the members that are there; at most one more than
+    /// <see cref="Problems.MaximumFaults"/>, so that it can be said that there are more.
+    /// </summary>
+    public IReadOnlyList<Fault> Faults => faults;
+
+    /// <summary>The document with stand-ins.</summary>
+    public ReadOnlyMemory<byte> Mended { get; private set; }
+
+    private bool IsFull => faults.Count > Problems.MaximumFaults;
+
+    public static FormInspection Of(JsonElement document, JsonTypeInfo contract)
+    {
+        var mended = new ArrayBufferWriter<byte>();
+        using var writer = new Utf8JsonWriter(mended);
+        var inspection = new FormInspection(contract.Options, writer);
+        inspection.Inspect(document, contract, Places.Whole);
+        writer.Flush();
+        inspection.Mended = mended.WrittenMemory;
+        return inspection;
+    }
+
+    /// <summary>
+    /// Whether a fault that a rule has found at a place may only follow from a fault of form: at, below or above a
+    /// faulty place, or at the place of the member that an unknown name was probably meant for.
+    /// </summary>
+    public bool MayExplain(Fault fault) =>
+        doubtful.Exists(place => Places.IsWithin(fault.Place, place) || Places.IsWithin(place, fault.Place));
+
+    private void Inspect(JsonElement value, JsonTypeInfo type, string place)
+    {
+        switch (type.Kind, value.ValueKind)
+        {
+            case (JsonTypeInfoKind.Object, JsonValueKind.Object):
+                InspectMembers(value, type, place);
+                break;
+            case (JsonTypeInfoKind.Enumerable, JsonValueKind.Array):
+                InspectItems(value, type, place);
+                break;
+            case (JsonTypeInfoKind.Dictionary, JsonValueKind.Object):
+                InspectEntries(value, type, place);
+                break;
+            case (JsonTypeInfoKind.None, _):
+                InspectScalar(value, type, place);
+                break;
+            default:
+                Refuse(WrongType(value, type, place), type);
+                break;
+        }
+    }
+
+    private void InspectMembers(JsonElement value, JsonTypeInfo type, string place)
+    {
+        var members = type.Properties.Where(member => member.Set is not null || member.AssociatedParameter is not null).ToDictionary(member => member.Name);
+        var seen = new HashSet<string>();
+        writer.WriteStartObject();
+        foreach (var given in value.EnumerateObject())
+        {
+            var here = Places.Member(place, given.Name);
+            if (!seen.Add(given.Name))
+            {
+                Report(new Fault(here, "repeated-member", $"\"{Received.Shorten(given.Name)}\" stands here more than once. Give it once."));
+            }
+            else if (members.TryGetValue(given.Name, out var member))
+            {
+                writer.WritePropertyName(given.Name);
+                InspectNullable(given.Value, ContractShape.Of(member.PropertyType, options), here, allowsNull: member.IsSetNullable && AcceptsNull(member.PropertyType));
+            }
+            else
+            {
+                ReportUnknown(given.Name, members.Keys, place);
+            }
+        }
+
+        foreach (var missing in members.Values.Where(member => member.IsRequired && !seen.Contains(member.Name)))
+        {
+            var shape = ContractShape.Of(missing.PropertyType, options);
+            writer.WritePropertyName(missing.Name);
+            Refuse(new Fault(Places.Member(place, missing.Name), "missing-member", $"\"{missing.Name}\" is missing. Give it: {ContractShape.Describe(shape)}."), shape);
+        }
+
+        writer.WriteEndObject();
+    }
+
+    private void InspectItems(JsonElement value, JsonTypeInfo type, string place)
+    {
+        var item = ContractShape.Of(type.ElementType!, options);
+        var allowsNull = Nullable.GetUnderlyingType(type.ElementType!) is not null;
+        writer.WriteStartArray();
+        foreach (var (index, given) in value.EnumerateArray().Index())
+        {
+            InspectNullable(given, item, Places.Item(place, index), allowsNull);
+        }
+
+        writer.WriteEndArray();
+    }
+
+    private void InspectEntries(JsonElement value, JsonTypeInfo type, string place)
+    {
+        var entry = ContractShape.Of(type.ElementType!, options);
+        var allowsNull = Nullable.GetUnderlyingType(type.ElementType!) is not null;
+        var seen = new HashSet<string>();
+        writer.WriteStartObject();
+        foreach (var given in value.EnumerateObject())
+        {
+            var here = Places.Member(place, given.Name);
+            if (!seen.Add(given.Name))
+            {
+                Report(new Fault(here, "repeated-member", $"\"{Received.Shorten(given.Name)}\" stands here more than once. Give it once."));
+                continue;
+            }
+
+            writer.WritePropertyName(given.Name);
+            InspectNullable(given.Value, entry, here, allowsNull);
+        }
+
+        writer.WriteEndObject();
+    }
+
+    private void InspectNullable(JsonElement value, JsonTypeInfo type, string place, bool allowsNull)
+    {
+        if (value.ValueKind != JsonValueKind.Null)
+        {
+            Inspect(value, type, place);
+        }
+        else if (allowsNull)
+        {
+            writer.WriteNullValue();
+        }
+        else
+        {
+            Refuse(new Fault(place, "null-not-allowed", $"null cannot stand here. Give {ContractShape.Describe(type)}."), type);
+        }
+    }
+
+    private void InspectScalar(JsonElement value, JsonTypeInfo type, string place)
+    {
+        if (ScalarFault(value, type, place) is { } fault)
+        {
+            Refuse(fault, type);
+        }
+        else
+        {
+            value.WriteTo(writer);
+        }
+    }
+
+    private static Fault? ScalarFault(JsonElement value, JsonTypeInfo type, string place)
+    {
+        if (type.Type == typeof(double))
+        {
+            return value.ValueKind != JsonValueKind.Number ? WrongType(value, type, place)
+                : double.IsFinite(value.GetDouble()) ? null
+                : OutOfRange(value, place, "Numbers may have a magnitude of up to 1.7e308.");
+        }
+
+        if (type.Type == typeof(int) || type.Type == typeof(long))
+        {
+            return value.ValueKind != JsonValueKind.Number || value.GetRawText().AsSpan().ContainsAny('.', 'e', 'E') ? WrongType(value, type, place)
+                : (type.Type == typeof(int) ? value.TryGetInt32(out _) : value.TryGetInt64(out _)) ? null
+                : OutOfRange(value, place, type.Type == typeof(int) ? "Whole numbers here lie between -2147483648 and 2147483647." : "Whole numbers here have up to 18 digits.");
+        }
+
+        if (type.Type == typeof(string))
+        {
+            return value.ValueKind == JsonValueKind.String ? null : WrongType(value, type, place);
+        }
+
+        if (type.Type == typeof(bool))
+        {
+            return value.ValueKind is JsonValueKind.True or JsonValueKind.False ? null : WrongType(value, type, place);
+        }
+
+        throw new NotSupportedException($"A contract has a member of the type {type.Type}, for which there is no reading.");
+    }
+
+    private static Fault WrongType(JsonElement value, JsonTypeInfo type, string place)
+    {
+        var looksLikeNumber = value.ValueKind == JsonValueKind.String
+            && double.TryParse(value.GetString()!.Replace(',', '.'), NumberStyles.Float, CultureInfo.InvariantCulture, out _);
+        var advice = looksLikeNumber && type.Type == typeof(double) ? " Write it without quotes, with a decimal point." : "";
+        return new Fault(place, "wrong-type", $"Expected {ContractShape.Describe(type)}, received {Received.Describe(value)}.{advice}");
+    }
+
+    private static Fault OutOfRange(JsonElement value, string place, string bounds) =>
+        new(place, "number-out-of-range", $"Received {Received.Describe(value)}. {bounds}");
+
+    private void ReportUnknown(string name, IReadOnlyCollection<string> known, string place)
+    {
+        if (IsFull)
+        {
+            return;
+        }
+
+        var meant = NearestName.Of(name, known);
+        var advice = meant is not null ? $"Did you mean \"{meant}\"?" : $"The members here are {string.Join(", ", known)}.";
+        Report(new Fault(Places.Member(place, name), "unknown-member", $"There is no member \"{Received.Shorten(name)}\" here. {advice}"));
+        if (meant is not null)
+        {
+            doubtful.Add(Places.Member(place, meant));
+        }
+    }
+
+    private void Refuse(Fault fault, JsonTypeInfo type)
+    {
+        Report(fault);
+        WriteStandIn(type);
+    }
+
+    private void Report(Fault fault)
+    {
+        if (!IsFull)
+        {
+            faults.Add(fault);
+            doubtful.Add(fault.Place);
+        }
+    }
+
+    /// <summary>The emptiest value of the type that the rules can be shown; for a number a text, see <see cref="ContractShape.LenientOf"/>.</summary>
+    private void WriteStandIn(JsonTypeInfo type)
+    {
+        switch (type.Kind)
+        {
+            case JsonTypeInfoKind.Object:
+                writer.WriteStartObject();
+                foreach (var member in type.Properties.Where(member => member.IsRequired))
+                {
+                    writer.WritePropertyName(member.Name);
+                    WriteStandIn(ContractShape.Of(member.PropertyType, options));
+                }
+
+                writer.WriteEndObject();
+                break;
+            case JsonTypeInfoKind.Enumerable:
+                writer.WriteStartArray();
+                writer.WriteEndArray();
+                break;
+            case JsonTypeInfoKind.Dictionary:
+                writer.WriteStartObject();
+                writer.WriteEndObject();
+                break;
+            case var _ when type.Type == typeof(string) || type.Type == typeof(double):
+                writer.WriteStringValue("");
+                break;
+            case var _ when type.Type == typeof(bool):
+                writer.WriteBooleanValue(false);
+                break;
+            default:
+                writer.WriteNumberValue(0);
+                break;
+        }
+    }
+
+    private static bool AcceptsNull(Type type) => !type.IsValueType || Nullable.GetUnderlyingType(type) is not null;
+}
