@@ -3,7 +3,6 @@ using System.IO.Compression;
 using System.Text.Json;
 using Drypeak.Figures;
 using Drypeak.Service.Contracts;
-using Drypeak.Soil;
 
 namespace Drypeak.Service.Charts;
 
@@ -15,14 +14,8 @@ internal static class ChartAddress
 {
     public const string MoistureDensity = "moisture-density";
 
-    /// <summary>A request line longer than this many bytes is refused by many servers, ours among them.</summary>
-    private const int LongestRequestLine = 8192;
-
-    /// <summary>Room in the request line for method, path, version and the picture's size.</summary>
-    private const int RoomForTheRest = 160;
-
-    /// <summary>A chart that inflates beyond this is refused: bytes of JSON. Five hundred specimens with short labels take about 40 kB.</summary>
-    public const int LargestInflated = 256 * 1024;
+    /// <summary>Room in the address for its path and the picture's size.</summary>
+    private const int RoomForTheRest = 120;
 
     private const int BrotliQuality = 5;
     private const int BrotliWindow = 18;
@@ -33,10 +26,10 @@ internal static class ChartAddress
         "", "RFC 9110 section 4.1: request lines of 8000 bytes are the most to count on");
 
     /// <summary>The addresses of a chart's pictures; none where it is too large.</summary>
-    public static LinksContract LinksFor(string job, CompactionChart chart)
+    public static LinksContract LinksFor(string job, CompactionChart chart, int addressBytes)
     {
         var data = Encode(chart);
-        string? Link(string suffix) => data.Length + RoomForTheRest <= LongestRequestLine ? $"/v1/charts/{job}.{suffix}?d={data}" : null;
+        string? Link(string suffix) => data.Length + RoomForTheRest <= addressBytes ? $"/v1/charts/{job}.{suffix}?d={data}" : null;
         return new LinksContract { Svg = Link("svg"), Png = Link("png"), Pdf = Link("pdf") };
     }
 
@@ -52,9 +45,10 @@ internal static class ChartAddress
 
     /// <summary>The JSON in an address's text.</summary>
     /// <param name="data">The query's <c>d</c>.</param>
-    /// <param name="json">The JSON, up to <see cref="LargestInflated"/> bytes.</param>
+    /// <param name="largest">Bytes that it may inflate to.</param>
+    /// <param name="json">The JSON.</param>
     /// <returns>Null where it could be unpacked, else the fault.</returns>
-    public static Fault? Unpack(string data, out ReadOnlyMemory<byte> json)
+    public static Fault? Unpack(string data, int largest, out ReadOnlyMemory<byte> json)
     {
         json = default;
         var packed = new byte[Base64Url.GetMaxDecodedLength(data.Length)];
@@ -63,12 +57,12 @@ internal static class ChartAddress
             return new Fault("/d", "not-readable", "The address is damaged: d is not base64url. Take the link as an answer gave it.");
         }
 
-        var inflated = new byte[LargestInflated];
+        var inflated = new byte[largest];
         using var decoder = new BrotliDecoder();
         var status = decoder.Decompress(packed.AsSpan(0, packedLength), inflated, out var consumed, out var length);
         if (status == System.Buffers.OperationStatus.DestinationTooSmall)
         {
-            return new Fault("/d", "inflates-beyond-bound", $"The address inflates beyond {LargestInflated} bytes. Post the request itself with Accept: image/svg+xml instead.");
+            return new Fault("/d", "inflates-beyond-bound", $"The address inflates beyond {largest} bytes. Post the request itself with Accept: image/svg+xml instead.");
         }
 
         if (status != System.Buffers.OperationStatus.Done || consumed != packedLength)

@@ -17,14 +17,19 @@ namespace Drypeak.Service.Laboratory;
 internal sealed record MoistureDensityOutcome(MoistureDensityAnswer Answer, CompactionChart Chart);
 
 /// <summary>The laboratory test from contract to contract. The endpoint, the page and a batch line all call this.</summary>
-internal static class MoistureDensityJob
+internal sealed class MoistureDensityJob(Limits limits)
 {
+    private readonly MoistureDensityRules _rules = new(limits);
+
     private const int LinePoints = 41;
     private const double Coverage = 0.95;
     private const double NormalQuantile = 1.959963984540054;
 
-    /// <summary>Computes a request that passed <see cref="MoistureDensityRules.Check"/>.</summary>
-    public static MoistureDensityOutcome Compute(MoistureDensityRequest request)
+    /// <summary>Every broken rule; empty where the request can be computed.</summary>
+    public IReadOnlyList<Fault> Check(MoistureDensityRequest request) => _rules.Check(request);
+
+    /// <summary>Computes a request that passed <see cref="Check"/>.</summary>
+    public MoistureDensityOutcome Compute(MoistureDensityRequest request)
     {
         var test = request.ToTest();
         var faults = new List<Fault>();
@@ -36,7 +41,7 @@ internal static class MoistureDensityJob
 
         var result = MoistureDensity.Analyze(test, specimens);
         var chart = MoistureDensityChart.Of(request, test, result);
-        var links = ChartAddress.LinksFor(ChartAddress.MoistureDensity, chart);
+        var links = ChartAddress.LinksFor(ChartAddress.MoistureDensity, chart, limits.AddressBytes);
         var findings = result.Findings.Select(ToContract);
         if (links is { Svg: null })
         {

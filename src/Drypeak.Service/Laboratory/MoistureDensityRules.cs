@@ -9,14 +9,14 @@ using FluentValidation;
 namespace Drypeak.Service.Laboratory;
 
 /// <summary>All that a laboratory test must keep to be computed.</summary>
-internal static class MoistureDensityRules
+internal sealed class MoistureDensityRules(Limits limits)
 {
-    private static readonly RequestRules Values = new();
+    private readonly RequestRules _values = new(limits);
 
     /// <summary>Every broken rule; empty where the test can be computed.</summary>
-    public static IReadOnlyList<Fault> Check(MoistureDensityRequest request)
+    public IReadOnlyList<Fault> Check(MoistureDensityRequest request)
     {
-        var faults = Values.Validate(request).ToFaults().ToList();
+        var faults = _values.Validate(request).ToFaults().ToList();
         faults.AddRange(Contradictions(request, faults));
         return faults;
     }
@@ -61,10 +61,10 @@ internal static class MoistureDensityRules
         private const double LeastWaterDensity = 950;
         private const double GreatestWaterDensity = 1100;
 
-        public RequestRules()
+        public RequestRules(Limits limits)
         {
-            RuleFor(request => request.Reference).AtMost(Bounds.NameCharacters);
-            RuleFor(request => request.Identification).Custom(CheckIdentification);
+            RuleFor(request => request.Reference).AtMost(limits.NameCharacters);
+            RuleFor(request => request.Identification).Custom((labels, context) => CheckIdentification(labels, limits, context));
             RuleFor(request => request.Method).OneOf([.. TestMethodCatalogue.Codes, MoistureDensityMapping.CustomMethod], "unknown-method");
             RuleFor(request => request.Effort).Null().When(request => request.Method != MoistureDensityMapping.CustomMethod)
                 .WithErrorCode("not-for-this-method").WithMessage("An effort goes with method \"custom\" only; the others bring their own. Leave it out, or name \"custom\".");
@@ -75,34 +75,34 @@ internal static class MoistureDensityRules
             RuleFor(request => request.WaterTemperature).Within(WaterDensity.LowestTemperature, WaterDensity.HighestTemperature, " °C");
             RuleFor(request => request.WaterDensity).Custom(CheckWaterDensity);
 
-            RuleFor(request => request.Specimens).Needed().Counted(Bounds.Specimens);
-            RuleForEach(request => request.Specimens).Needed().SetValidator(new SpecimenRules());
+            RuleFor(request => request.Specimens).Needed().Counted(limits.Specimens);
+            RuleForEach(request => request.Specimens).Needed().SetValidator(new SpecimenRules(limits));
             RuleFor(request => request.Specimens).Custom(CheckLabels);
 
             RuleFor(request => request.Oversize!).SetValidator(new OversizeRules()).When(request => request.Oversize is { });
             RuleFor(request => request.ParticlesAbove!).SetValidator(new ParticlesAboveRules()).When(request => request.ParticlesAbove is { });
-            RuleFor(request => request.Curve!).SetValidator(new CurveRules()).When(request => request.Curve is { });
-            RuleFor(request => request.Lines!).SetValidator(new LinesRules()).When(request => request.Lines is { });
+            RuleFor(request => request.Curve!).SetValidator(new CurveRules(limits)).When(request => request.Curve is { });
+            RuleFor(request => request.Lines!).SetValidator(new LinesRules(limits)).When(request => request.Lines is { });
             RuleFor(request => request.Uncertainty!).SetValidator(new UncertaintyRules()).When(request => request.Uncertainty is { });
         }
 
-        private static void CheckIdentification(IReadOnlyDictionary<string, string>? labels, ValidationContext<MoistureDensityRequest> context)
+        private static void CheckIdentification(IReadOnlyDictionary<string, string>? labels, Limits limits, ValidationContext<MoistureDensityRequest> context)
         {
             if (labels is null)
             {
                 return;
             }
 
-            if (labels.Count > Bounds.IdentificationLabels)
+            if (labels.Count > limits.IdentificationLabels)
             {
-                context.Fail("Identification", "too-many", $"There may be up to {Bounds.IdentificationLabels} labels; there are {labels.Count}.");
+                context.Fail("Identification", "too-many", $"There may be up to {limits.IdentificationLabels} labels; there are {labels.Count}.");
             }
 
             foreach (var (label, text) in labels)
             {
-                if (label.Length > Bounds.NameCharacters || text?.Length > Bounds.TextCharacters)
+                if (label.Length > limits.NameCharacters || text?.Length > limits.TextCharacters)
                 {
-                    context.Fail($"Identification[{label}]", "too-long", $"A label may have up to {Bounds.NameCharacters} characters and its text up to {Bounds.TextCharacters}. Shorten it.");
+                    context.Fail($"Identification[{label}]", "too-long", $"A label may have up to {limits.NameCharacters} characters and its text up to {limits.TextCharacters}. Shorten it.");
                 }
             }
         }
@@ -139,20 +139,20 @@ internal static class MoistureDensityRules
 
     private sealed class SpecimenRules : AbstractValidator<SpecimenContract>
     {
-        public SpecimenRules()
+        public SpecimenRules(Limits limits)
         {
-            RuleFor(specimen => specimen.Label).NotBlank("A label").AtMost(Bounds.NameCharacters);
+            RuleFor(specimen => specimen.Label).NotBlank("A label").AtMost(limits.NameCharacters);
             RuleFor(specimen => specimen.MoldAndWetSoil).Positive();
             RuleFor(specimen => specimen.Mold!).SetValidator(new MoldRules()).When(specimen => specimen.Mold is { });
             RuleFor(specimen => specimen.WetMass).Positive();
             RuleFor(specimen => specimen.WetDensity).Positive();
             RuleFor(specimen => specimen.DryDensity).Positive();
             RuleFor(specimen => specimen.WaterContent).Within(0, 1000, " %");
-            RuleFor(specimen => specimen.Tins).Counted(Bounds.TinsPerSpecimen);
+            RuleFor(specimen => specimen.Tins).Counted(limits.TinsPerSpecimen);
             RuleForEach(specimen => specimen.Tins).Needed().SetValidator(new TinRules());
             RuleFor(specimen => specimen.WetBasis).PercentBelow100();
             RuleFor(specimen => specimen.Carbide!).SetValidator(new CarbideRules()).When(specimen => specimen.Carbide is { });
-            RuleFor(specimen => specimen.SetAside).NotBlank("The reason for setting a specimen aside").AtMost(Bounds.TextCharacters);
+            RuleFor(specimen => specimen.SetAside).NotBlank("The reason for setting a specimen aside").AtMost(limits.TextCharacters);
         }
     }
 
@@ -180,33 +180,33 @@ internal static class MoistureDensityRules
 
     private sealed class CurveRules : AbstractValidator<CurveRequest>
     {
-        public CurveRules()
+        public CurveRules(Limits limits)
         {
             RuleFor(curve => curve.Model).OneOf(MoistureDensityMapping.ModelNames, "unknown-model");
-            RuleFor(curve => curve.Adopted!).SetValidator(new AdoptedRules()).When(curve => curve.Adopted is { });
+            RuleFor(curve => curve.Adopted!).SetValidator(new AdoptedRules(limits)).When(curve => curve.Adopted is { });
         }
     }
 
     private sealed class AdoptedRules : AbstractValidator<AdoptedRequest>
     {
-        public AdoptedRules()
+        public AdoptedRules(Limits limits)
         {
             RuleFor(adopted => adopted.WaterContent).Needed().Within(0, 1000, " %");
             RuleFor(adopted => adopted.MaximumDryDensity).Needed().Positive();
-            RuleFor(adopted => adopted.Reason).Needed().NotBlank("The reason for an adopted peak").AtMost(Bounds.TextCharacters);
+            RuleFor(adopted => adopted.Reason).Needed().NotBlank("The reason for an adopted peak").AtMost(limits.TextCharacters);
         }
     }
 
     private sealed class LinesRules : AbstractValidator<LinesRequest>
     {
-        public LinesRules()
+        public LinesRules(Limits limits)
         {
-            RuleFor(lines => lines.Saturation).Must(list => list is null || list.Count <= Bounds.LinesOfAKind)
-                .WithErrorCode("too-many").WithMessage((_, list) => $"There may be up to {Bounds.LinesOfAKind} lines of a kind; there are {list!.Count}.");
+            RuleFor(lines => lines.Saturation).Must(list => list is null || list.Count <= limits.LinesOfAKind)
+                .WithErrorCode("too-many").WithMessage((_, list) => $"There may be up to {limits.LinesOfAKind} lines of a kind; there are {list!.Count}.");
             RuleForEach(lines => lines.Saturation).Must(value => value is > 0 and <= 100)
                 .WithErrorCode("out-of-range").WithMessage((_, value) => $"A degree of saturation lies over 0 and up to 100 %; {RuleWords.Text(value)} was received.");
-            RuleFor(lines => lines.AirVoids).Must(list => list is null || list.Count <= Bounds.LinesOfAKind)
-                .WithErrorCode("too-many").WithMessage((_, list) => $"There may be up to {Bounds.LinesOfAKind} lines of a kind; there are {list!.Count}.");
+            RuleFor(lines => lines.AirVoids).Must(list => list is null || list.Count <= limits.LinesOfAKind)
+                .WithErrorCode("too-many").WithMessage((_, list) => $"There may be up to {limits.LinesOfAKind} lines of a kind; there are {list!.Count}.");
             RuleForEach(lines => lines.AirVoids).Must(value => value is >= 0 and < 100)
                 .WithErrorCode("out-of-range").WithMessage((_, value) => $"Air voids lie from 0 to below 100 %; {RuleWords.Text(value)} was received.");
         }

@@ -46,6 +46,30 @@ public static class CompactionCurve
         };
     }
 
+    /// <summary>The peak of one model and nothing else, for those who need many.</summary>
+    /// <param name="data">As for <see cref="Analyze"/>.</param>
+    /// <param name="model">The model.</param>
+    /// <returns>Water content (fraction) and dry density (kg/m³) of the peak, or null where the model gives none.</returns>
+    public static CompactionPoint? PeakOf(CompactionData data, CurveModel model)
+    {
+        var points = new TestedPoints(data);
+        if (points.Count < AveragedModel.FewestPoints || !points.HasRange)
+        {
+            return null;
+        }
+
+        var curve = model switch
+        {
+            CurveModel.Averaged => AveragedModel.Fit(points, out _),
+            CurveModel.Saturation => SaturationModel.Fit(points),
+            CurveModel.Parabola => Parabola.Fit(points),
+            CurveModel.Cubic => Cubic.Fit(points),
+            CurveModel.Spline => Spline.Fit(points),
+            _ => throw new ArgumentOutOfRangeException(nameof(model)),
+        };
+        return curve.Optimum is { } optimum ? new CompactionPoint(optimum.WaterContent.Value, optimum.MaximumDryDensity.Value) : null;
+    }
+
     private static FittedCurve[] NotFitted(TestedPoints points)
     {
         var whyNot = points.HasRange ? TooFew : NoRange;
