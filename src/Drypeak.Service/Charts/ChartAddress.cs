@@ -1,8 +1,10 @@
+using System.Buffers;
 using System.Buffers.Text;
 using System.IO.Compression;
 using System.Text.Json;
 using Drypeak.Figures;
 using Drypeak.Service.Contracts;
+using Drypeak.Service.Hosting;
 
 namespace Drypeak.Service.Charts;
 
@@ -43,34 +45,45 @@ internal static class ChartAddress
             : throw new InvalidOperationException("A buffer of the greatest compressed length was too small.");
     }
 
-    /// <summary>The JSON in an address's text.</summary>
+    /// <summary>The chart in an address's text.</summary>
     /// <param name="data">The query's <c>d</c>.</param>
-    /// <param name="largest">Bytes that it may inflate to.</param>
-    /// <param name="json">The JSON.</param>
-    /// <returns>Null where it could be unpacked, else the fault.</returns>
-    public static Fault? Unpack(string data, int largest, out ReadOnlyMemory<byte> json)
+    /// <param name="limits">Bounds of what it may hold.</param>
+    /// <param name="chart">The chart, or null where there is a fault.</param>
+    /// <returns>Every fault; empty where the chart can be drawn.</returns>
+    public static IReadOnlyList<Fault> Decode(string data, Limits limits, out CompactionChart? chart)
     {
-        json = default;
+        chart = null;
         var packed = new byte[Base64Url.GetMaxDecodedLength(data.Length)];
         if (!Base64Url.IsValid(data) || !Base64Url.TryDecodeFromChars(data, packed, out var packedLength))
         {
-            return new Fault("/d", "not-readable", "The address is damaged: d is not base64url. Take the link as an answer gave it.");
+            return [Damaged("d is not base64url")];
         }
 
-        var inflated = new byte[largest];
+        var inflated = new byte[limits.UnpackedAddressBytes];
         using var decoder = new BrotliDecoder();
         var status = decoder.Decompress(packed.AsSpan(0, packedLength), inflated, out var consumed, out var length);
-        if (status == System.Buffers.OperationStatus.DestinationTooSmall)
+        if (status == OperationStatus.DestinationTooSmall)
         {
-            return new Fault("/d", "inflates-beyond-bound", $"The address inflates beyond {largest} bytes. Post the request itself with Accept: image/svg+xml instead.");
+            return [new Fault("/d", "inflates-beyond-bound", $"The address inflates beyond {limits.UnpackedAddressBytes} bytes. Post the request itself with Accept: image/svg+xml instead.")];
         }
 
-        if (status != System.Buffers.OperationStatus.Done || consumed != packedLength)
+        if (status != OperationStatus.Done || consumed != packedLength)
         {
-            return new Fault("/d", "not-readable", "The address is damaged or cut short: d does not unpack. Take the link as an answer gave it.");
+            return [Damaged("d does not unpack")];
         }
 
-        json = inflated.AsMemory(0, length);
-        return null;
+        try
+        {
+            chart = JsonSerializer.Deserialize(inflated.AsSpan(0, length), ServiceJson.Of<CompactionChart>());
+        }
+        catch (JsonException)
+        {
+            return [Damaged("d holds no chart")];
+        }
+
+        return chart is null ? [Damaged("d holds no chart")] : new ChartRules(limits).Check(chart);
     }
+
+    private static Fault Damaged(string how) =>
+        new("/d", "not-readable", $"The address is damaged or cut short: {how}. Take the link as an answer gave it.");
 }

@@ -44,19 +44,9 @@ internal static class ChartEndpoints
             return Problems.InvalidQuery(faults);
         }
 
-        if (ChartAddress.Unpack(data, limits.UnpackedAddressBytes, out var json) is { } damaged)
-        {
-            return Problems.InvalidQuery([.. faults, damaged]);
-        }
-
-        var chart = JsonReading.Read(json, ServiceJson.Of<CompactionChart>(), new ChartRules(limits).Check);
-        if (!chart.Succeeded)
-        {
-            return Problems.InvalidQuery([.. faults, .. chart.Problem.Errors.Select(fault => fault with { Place = "/" + Data, Message = $"{fault.Message} (at {fault.Place} of the chart)" })]);
-        }
-
+        faults.AddRange(ChartAddress.Decode(data, limits, out var chart));
         return faults.Count > 0
             ? Problems.InvalidQuery(faults)
-            : new CachedBytes(format.Draw(chart.Value, options), format.MediaType);
+            : new CachedBytes(format.Draw(chart!, options), format.MediaType);
     }
 }

@@ -11,6 +11,7 @@ internal sealed class ChartRules : AbstractValidator<CompactionChart>
     public ChartRules(Limits limits)
     {
         RuleFor(chart => chart.Reference).AtMost(limits.NameCharacters);
+        RuleFor(chart => chart.DensityUnit).IsInEnum().WithErrorCode("unknown-unit");
         RuleFor(chart => chart.Specimens).Must(list => list.Count >= 1 && list.Count <= limits.Specimens)
             .WithErrorCode("out-of-range").WithMessage($"There must be 1 to {limits.Specimens} specimens.");
         RuleForEach(chart => chart.Specimens).Must(specimen => specimen is { WaterContent: >= 0 and <= RuleWords.Greatest, DryDensity: >= RuleWords.Least and <= RuleWords.Greatest })
@@ -27,12 +28,12 @@ internal sealed class ChartRules : AbstractValidator<CompactionChart>
             .WithErrorCode("out-of-range").WithMessage("Air voids lie from 0 to below 100 %.");
     }
 
-    /// <summary>Every broken rule; what only the figure knows comes last.</summary>
+    /// <summary>Every broken rule, at the place of the address; what only the figure knows is asked last.</summary>
     public IReadOnlyList<Fault> Check(CompactionChart chart)
     {
         var faults = Validate(chart).ToFaults();
-        return faults.Count == 0 && CompactionFigure.Refusal(chart, FigureSize.Default) is { } refusal
-            ? [new Fault("", "not-drawable", refusal)]
-            : faults;
+        return faults.Count > 0 ? [.. faults.Select(fault => fault with { Place = "/d", Message = $"{fault.Message} (at {fault.Place} of the chart)" })]
+            : CompactionFigure.Refusal(chart, FigureSize.Default) is { } refusal ? [new Fault("/d", "not-drawable", refusal)]
+            : [];
     }
 }
