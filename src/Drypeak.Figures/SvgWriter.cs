@@ -99,6 +99,12 @@ public static class SvgWriter
             }
 
             _svg.Append(" fill=\"").Append(_palette[text.Color].Hex).Append('"');
+            if (text.Halo)
+            {
+                AppendStroke(new Stroke(ColorRole.Paper, text.HaloWidth));
+                _svg.Append(" stroke-linejoin=\"round\" paint-order=\"stroke\"");
+            }
+
             if (text.Anchor != TextAnchor.Start)
             {
                 _svg.Append(" text-anchor=\"").Append(text.Anchor == TextAnchor.Middle ? "middle" : "end").Append('"');

@@ -62,6 +62,17 @@ internal sealed class LabelSpace(Area picture)
         return null;
     }
 
+    /// <summary>Places a label that matters: rather in full with a quiet line behind its halo than shortened, and rather shortened than not at all.</summary>
+    /// <param name="wordings">The candidate places of each wording, the fullest wording first.</param>
+    public void PlaceFullest(IEnumerable<IEnumerable<TextRun>> wordings)
+    {
+        _ = wordings.Any(candidates =>
+        {
+            var places = candidates.ToList();
+            return (Place(places, Barriers.All) ?? Place(places, Barriers.All & ~Barriers.PhaseLines)) is not null;
+        });
+    }
+
     private bool IsFree(TextRun text, Barriers barriers, object? owner)
     {
         var bounds = text.LineBox.Bounds;

@@ -26,7 +26,8 @@ internal sealed class SpecimenMarks(CompactionChart chart, Plot plot, TypeScale 
     {
         foreach (var specimen in chart.Specimens)
         {
-            var candidates = MarkLabels.Around(plot.At(specimen.Point), type.MarkRadius, Wording.Specimen(specimen), type.Label, ColorRole.Quiet, WidestLabel);
+            var candidates = Wording.Specimen(specimen)
+                .SelectMany(text => MarkLabels.Around(plot.At(specimen.Point), type.MarkRadius, text, type.Label, ColorRole.Quiet, WidestLabel));
             space.Place(candidates.Select(candidate => candidate with { Name = "specimen-label" }), Barriers.All);
         }
     }
