@@ -1,8 +1,15 @@
+using Drypeak.Service.Charts;
 using Drypeak.Service.Hosting;
+using Drypeak.Service.Laboratory;
 
 var builder = WebApplication.CreateBuilder(args).AddDrypeakHosting();
+builder.Services.AddSingleton<MoistureDensityJob>();
+
 var app = builder.Build();
 app.UseDrypeakHosting(_ => Results.Content("<!doctype html><title>Not found</title>", "text/html"));
+app.MapMoistureDensity();
+app.MapCharts();
+
 if (args is ["openapi", var path])
 {
     await app.ExportOpenApiAsync(path);

@@ -56,11 +56,15 @@ public sealed record Limits
 
     /// <summary>Letters of a reference or a label. Default 200.</summary>
     [Range(1, 10_000)]
-    public int TextLength { get; init; } = 200;
+    public int NameCharacters { get; init; } = 200;
+
+    /// <summary>Letters of a reason or another text. Default 1,000.</summary>
+    [Range(1, 100_000)]
+    public int TextCharacters { get; init; } = 1_000;
 
     /// <summary>Labels in an identification. Default 30.</summary>
     [Range(1, 1_000)]
-    public int IdentificationEntries { get; init; } = 30;
+    public int IdentificationLabels { get; init; } = 30;
 
     /// <summary>Width or height of a chart, px before scaling. Default 4,000.</summary>
     [Range(100, 20_000)]

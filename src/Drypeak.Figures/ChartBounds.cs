@@ -1,0 +1,45 @@
+namespace Drypeak.Figures;
+
+/// <summary>What a figure can be drawn for.</summary>
+internal static class ChartBounds
+{
+    /// <summary>The first thing that is out of bounds, as a sentence, or null.</summary>
+    public static string? Refusal(CompactionChart chart, FigureSize size) =>
+        Refusal(size)
+        ?? Numbers(chart).Where(number => !(Math.Abs(number.Value) <= CompactionChart.LargestNumber))
+            .Select(number => $"{number.What} must be a number between −1e9 and 1e9, not {number.Value}.").FirstOrDefault()
+        ?? (chart.SpecificGravity <= 0 ? $"The specific gravity must be over 0, not {chart.SpecificGravity}." : null)
+        ?? (chart.WaterDensity <= 0 ? $"The density of water must be over 0, not {chart.WaterDensity}." : null)
+        ?? chart.Saturation.Where(percent => percent is not (> 0 and <= 100)).Select(percent => $"A saturation must be over 0 and up to 100 %, not {percent}.").FirstOrDefault()
+        ?? chart.AirVoids.Where(percent => percent is not (>= 0 and < 100)).Select(percent => $"Air voids must be from 0 to below 100 %, not {percent}.").FirstOrDefault();
+
+    private static string? Refusal(FigureSize size)
+    {
+        var (smallest, largest) = (FigureSize.Smallest, FigureSize.Largest);
+        var fits = size.Width >= smallest && size.Width <= largest && size.Height >= smallest && size.Height <= largest;
+        return fits ? null : $"Width and height must be from {smallest} to {largest} px, not {size.Width} and {size.Height}.";
+    }
+
+    private static IEnumerable<(string What, double Value)> Numbers(CompactionChart chart)
+    {
+        var points = chart.Specimens.Select(specimen => ("A specimen's", specimen.Point))
+            .Concat(chart.Curve.Select(point => ("The curve's", point)))
+            .Concat(new[] { chart.Optimum, chart.Adopted, chart.Corrected }.OfType<ChartOptimum>().Select(optimum => ("An optimum's", optimum.Point)));
+        foreach (var (whose, point) in points)
+        {
+            yield return ($"{whose} water content", point.WaterContent);
+            yield return ($"{whose} dry density", point.DryDensity);
+        }
+
+        foreach (var end in new[] { chart.Optimum, chart.Adopted, chart.Corrected }
+            .OfType<ChartOptimum>()
+            .SelectMany(optimum => (optimum.WaterContentInterval ?? []).Concat(optimum.MaximumDryDensityInterval ?? [])))
+        {
+            yield return ("An interval's end", end);
+        }
+
+        yield return ("The specific gravity", chart.SpecificGravity ?? 1);
+        yield return ("The density of water", chart.WaterDensity ?? 1);
+        yield return ("The next specimen's water content", chart.NextSpecimen ?? 0);
+    }
+}

@@ -1,0 +1,69 @@
+namespace Drypeak.Figures.Drawing;
+
+/// <summary>What a color is used for.</summary>
+public enum ColorRole
+{
+    /// <summary>The ground.</summary>
+    Paper,
+    /// <summary>Text, axes, measured points.</summary>
+    Ink,
+    /// <summary>Secondary labels, lines of saturation and air voids.</summary>
+    Quiet,
+    /// <summary>Hairlines.</summary>
+    Rule,
+    /// <summary>The fitted curve.</summary>
+    Water,
+    /// <summary>The optimum.</summary>
+    Clay,
+}
+
+/// <summary>A color of the sRGB space.</summary>
+/// <param name="Red">0 to 255.</param>
+/// <param name="Green">0 to 255.</param>
+/// <param name="Blue">0 to 255.</param>
+public readonly record struct Color(byte Red, byte Green, byte Blue)
+{
+    /// <summary>As SVG writes it: <c>#1F1D1A</c>.</summary>
+    public string Hex => $"#{Red:X2}{Green:X2}{Blue:X2}";
+
+    /// <summary>Relative luminance, 0 to 1 (WCAG 2.2, definition of relative luminance).</summary>
+    public double Luminance => (0.2126 * Linear(Red)) + (0.7152 * Linear(Green)) + (0.0722 * Linear(Blue));
+
+    /// <summary>Contrast ratio of two colors, 1 to 21 (WCAG 2.2, definition of contrast ratio).</summary>
+    public static double Contrast(Color one, Color other)
+    {
+        var (lighter, darker) = (Math.Max(one.Luminance, other.Luminance), Math.Min(one.Luminance, other.Luminance));
+        return (lighter + 0.05) / (darker + 0.05);
+    }
+
+    private static double Linear(byte channel)
+    {
+        var value = channel / 255.0;
+        return value <= 0.04045 ? value / 12.92 : Math.Pow((value + 0.055) / 1.055, 2.4);
+    }
+}
+
+/// <summary>The colors of the roles. Immutable, safe on any thread.</summary>
+public sealed record Palette(Color Paper, Color Ink, Color Quiet, Color Rule, Color Water, Color Clay)
+{
+    /// <summary>Ink on paper, one color for water and one for clay.</summary>
+    public static Palette Light { get; } = new(
+        Paper: new(0xFC, 0xFB, 0xF8),
+        Ink: new(0x1F, 0x1D, 0x1A),
+        Quiet: new(0x5A, 0x55, 0x4C),
+        Rule: new(0xCF, 0xC8, 0xBA),
+        Water: new(0x0B, 0x5B, 0x73),
+        Clay: new(0xA3, 0x43, 0x1B));
+
+    /// <summary>The color of a role.</summary>
+    public Color this[ColorRole role] => role switch
+    {
+        ColorRole.Paper => Paper,
+        ColorRole.Ink => Ink,
+        ColorRole.Quiet => Quiet,
+        ColorRole.Rule => Rule,
+        ColorRole.Water => Water,
+        ColorRole.Clay => Clay,
+        _ => throw new ArgumentOutOfRangeException(nameof(role)),
+    };
+}

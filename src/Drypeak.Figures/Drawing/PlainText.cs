@@ -1,0 +1,65 @@
+using System.Globalization;
+using System.Text;
+
+namespace Drypeak.Figures.Drawing;
+
+/// <summary>Texts from outside made fit for one line of any format.</summary>
+internal static class PlainText
+{
+    private const char Replacement = '\uFFFD';
+    private const string Ellipsis = "…";
+
+    /// <summary>
+    /// One line without anything that XML 1.0 forbids (section 2.2) or that would turn the direction of what follows: line breaks and tabs
+    /// become a space, other control and direction characters go, lone surrogates and noncharacters become U+FFFD.
+    /// </summary>
+    public static string Clean(string text)
+    {
+        var clean = new StringBuilder(text.Length);
+        foreach (var rune in text.EnumerateRunes())
+        {
+            // EnumerateRunes gives U+FFFD for a lone surrogate.
+            if (rune.Value is '\t' or '\n' or '\r' or 0x2028 or 0x2029)
+            {
+                clean.Append(' ');
+            }
+            else if (Rune.IsControl(rune) || IsDirection(rune.Value))
+            {
+                continue;
+            }
+            else if ((rune.Value & 0xFFFE) == 0xFFFE)
+            {
+                clean.Append(Replacement);
+            }
+            else
+            {
+                clean.Append(rune);
+            }
+        }
+
+        return clean.ToString().Trim();
+    }
+
+    /// <summary>The text, or as much of it with an ellipsis as fits into <paramref name="width"/> px; empty where not even that does. Letters are never cut from their accents.</summary>
+    public static string Elide(string text, FontFace face, double size, double width)
+    {
+        if (face.Measure(text, size) <= width)
+        {
+            return text;
+        }
+
+        var starts = StringInfo.ParseCombiningCharacters(text);
+        for (var kept = starts.Length - 1; kept > 0; kept--)
+        {
+            var shortened = string.Concat(text.AsSpan(0, starts[kept]).TrimEnd(), Ellipsis);
+            if (face.Measure(shortened, size) <= width)
+            {
+                return shortened;
+            }
+        }
+
+        return "";
+    }
+
+    private static bool IsDirection(int value) => value is 0x200E or 0x200F or (>= 0x202A and <= 0x202E) or (>= 0x2066 and <= 0x2069);
+}

@@ -1,0 +1,26 @@
+using System.Text;
+using Drypeak.Figures.Drawing;
+
+namespace Drypeak.Figures;
+
+/// <summary>The embedded font, Source Sans 3 under the SIL Open Font License 1.1: the same letters in every picture, on every machine.</summary>
+public static class EmbeddedFont
+{
+    /// <summary>Weight 400.</summary>
+    public static FontFace Regular { get; } = new(400, Read("SourceSans3-Regular.ttf"));
+
+    /// <summary>Weight 600.</summary>
+    public static FontFace SemiBold { get; } = new(600, Read("SourceSans3-SemiBold.ttf"));
+
+    /// <summary>The font's copyright notice and license.</summary>
+    public static string License { get; } = Encoding.UTF8.GetString(Read("LICENSE.txt"));
+
+    private static byte[] Read(string name)
+    {
+        using var stream = typeof(EmbeddedFont).Assembly.GetManifestResourceStream(name)
+            ?? throw new InvalidOperationException($"The resource {name} is missing.");
+        var bytes = new byte[stream.Length];
+        stream.ReadExactly(bytes);
+        return bytes;
+    }
+}

@@ -1,0 +1,81 @@
+using Drypeak.Figures.Drawing;
+
+namespace Drypeak.Figures.Layout;
+
+/// <summary>The lines over the plot: the result, then the test's name and the intervals of the result.</summary>
+/// <param name="Runs">The lines as texts with their places.</param>
+/// <param name="Bottom">Where the heading ends, px from the top.</param>
+internal sealed record Heading(IReadOnlyList<TextRun> Runs, double Bottom)
+{
+    /// <summary>Below this height a picture has room for one line under the title, px.</summary>
+    private const int TallEnoughForTwo = 420;
+
+    public static Heading Lay(Wording wording, FigureSize size, TypeScale type)
+    {
+        var width = size.Width - (2 * type.Margin);
+        var runs = new List<TextRun>();
+        var top = type.Margin * 0.6;
+
+        var (lines, titleSize) = Title(wording.Headline, width, type);
+        foreach (var line in lines)
+        {
+            Add(line, titleSize, EmbeddedFont.SemiBold, ColorRole.Ink);
+        }
+
+        foreach (var line in Subtitles(wording, width, size, type))
+        {
+            Add(line, type.Subtitle, EmbeddedFont.Regular, ColorRole.Quiet);
+        }
+
+        return new Heading(runs, top);
+
+        void Add(string text, double textSize, FontFace face, ColorRole color)
+        {
+            runs.Add(new TextRun(text, new Place(type.Margin, top + (face.Ascent * textSize)), textSize, face, color));
+            top += (face.Ascent + face.Descent) * textSize;
+        }
+    }
+
+    /// <summary>One line if it fits with little shrinking, else two, as large as they fit; a text too long even so is elided.</summary>
+    private static (IReadOnlyList<string> Lines, double Size) Title((string First, string Second) headline, double width, TypeScale type)
+    {
+        const double step = 0.5;
+        var whole = $"{headline.First} {headline.Second}";
+        for (var size = type.Title; size >= Math.Max(type.Title * 0.8, TypeScale.LeastText); size -= step)
+        {
+            if (Fits(whole, size))
+            {
+                return ([whole], size);
+            }
+        }
+
+        for (var size = type.Title; size >= TypeScale.LeastText; size -= step)
+        {
+            if (Fits(headline.First, size) && Fits(headline.Second, size))
+            {
+                return ([headline.First, headline.Second], size);
+            }
+        }
+
+        string Short(string text) => PlainText.Elide(text, EmbeddedFont.SemiBold, TypeScale.LeastText, width);
+        return ([Short(headline.First), Short(headline.Second)], TypeScale.LeastText);
+
+        bool Fits(string text, double size) => EmbeddedFont.SemiBold.Measure(text, size) <= width;
+    }
+
+    private static IEnumerable<string> Subtitles(Wording wording, double width, FigureSize size, TypeScale type)
+    {
+        var lines = new[] { wording.Reference, wording.Intervals }.Where(line => line.Length > 0).ToList();
+        var joined = string.Join("  ·  ", lines);
+        if (lines.Count == 2 && Fits(joined))
+        {
+            return [joined];
+        }
+
+        return lines.Take(size.Height >= TallEnoughForTwo ? 2 : 1)
+            .Select(line => PlainText.Elide(line, EmbeddedFont.Regular, type.Subtitle, width))
+            .Where(line => line.Length > 0);
+
+        bool Fits(string text) => EmbeddedFont.Regular.Measure(text, type.Subtitle) <= width;
+    }
+}

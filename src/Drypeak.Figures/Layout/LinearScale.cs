@@ -1,0 +1,22 @@
+namespace Drypeak.Figures.Layout;
+
+/// <summary>A closed range of numbers with <paramref name="From"/> below <paramref name="To"/>.</summary>
+internal readonly record struct Interval(double From, double To)
+{
+    public double Span => To - From;
+
+    public static Interval Of(double value) => new(value, value);
+
+    public Interval With(double value) => new(Math.Min(From, value), Math.Max(To, value));
+
+    public double Clamp(double value) => Math.Clamp(value, From, To);
+
+    /// <summary>The range about the same middle that spans at least <paramref name="span"/>.</summary>
+    public Interval AtLeast(double span) => Span >= span ? this : new(((From + To) / 2) - (span / 2), ((From + To) / 2) + (span / 2));
+}
+
+/// <summary>Turns numbers of a range into px between two ends.</summary>
+internal readonly record struct LinearScale(Interval Range, double Start, double End)
+{
+    public double At(double value) => Start + ((value - Range.From) / Range.Span * (End - Start));
+}

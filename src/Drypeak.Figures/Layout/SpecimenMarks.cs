@@ -1,0 +1,38 @@
+using Drypeak.Figures.Drawing;
+
+namespace Drypeak.Figures.Layout;
+
+/// <summary>The measured points: discs, rings where set aside. Those set aside lie beneath, so that no fitted point is hidden.</summary>
+internal sealed class SpecimenMarks(CompactionChart chart, Plot plot, TypeScale type)
+{
+    private const double EdgeWidth = 1.25;
+
+    /// <summary>A ring looks as large as a disc where its outer edge is the same.</summary>
+    private double RingRadius => type.MarkRadius - (EdgeWidth * type.Unit / 2);
+
+    private double WidestLabel => Math.Min(140 * type.Unit, plot.Area.Width / 3);
+
+    public FigurePart Draw() => new("specimens", [.. chart.Specimens.OrderBy(specimen => !specimen.SetAside).Select(Mark)]);
+
+    public void Block(LabelSpace space)
+    {
+        foreach (var specimen in chart.Specimens)
+        {
+            space.BlockMark(plot.At(specimen.Point), type.MarkRadius);
+        }
+    }
+
+    public void Label(LabelSpace space)
+    {
+        foreach (var specimen in chart.Specimens)
+        {
+            var candidates = Wording.Specimen(specimen)
+                .SelectMany(text => MarkLabels.Around(plot.At(specimen.Point), type.MarkRadius, text, type.Label, ColorRole.Quiet, WidestLabel));
+            space.Place(candidates.Select(candidate => candidate with { Name = "specimen-label" }), Barriers.All);
+        }
+    }
+
+    private Disc Mark(ChartSpecimen specimen) => specimen.SetAside
+        ? new Disc(plot.At(specimen.Point), RingRadius, null, new Stroke(ColorRole.Ink, EdgeWidth * type.Unit), specimen.Point) { Name = "specimen set-aside" }
+        : new Disc(plot.At(specimen.Point), type.MarkRadius, ColorRole.Ink, null, specimen.Point) { Name = "specimen" };
+}

@@ -1,0 +1,42 @@
+using SkiaSharp;
+
+namespace Drypeak.Figures;
+
+/// <summary>Writes a figure as a PDF of one page with embedded font and real text. Equal figures give equal bytes.</summary>
+public static class PdfWriter
+{
+    /// <summary>Points (1/72 inch) to a px (1/96 inch).</summary>
+    private const float PointsPerPixel = 0.75f;
+
+    /// <summary>A picture has no date of its own: the same for all, so that the same figure is the same file.</summary>
+    private static readonly DateTime FixedDate = new(2000, 1, 1, 0, 0, 0, DateTimeKind.Utc);
+
+    /// <summary>The figure as a PDF file, in its true size.</summary>
+    public static byte[] Write(Figure figure)
+    {
+        var metadata = new SKDocumentPdfMetadata
+        {
+            Title = figure.Title,
+            Subject = figure.Description,
+            Creator = "Drypeak",
+            Creation = FixedDate,
+            Modified = FixedDate,
+        };
+
+        using var stream = new MemoryStream();
+        using (var document = SKDocument.CreatePdf(stream, metadata))
+        {
+            var page = document.BeginPage(figure.Size.Width * PointsPerPixel, figure.Size.Height * PointsPerPixel);
+            page.Scale(PointsPerPixel);
+            using (var canvas = new SkiaCanvas(page, figure.Palette))
+            {
+                figure.DrawOn(canvas);
+            }
+
+            document.EndPage();
+            document.Close();
+        }
+
+        return stream.ToArray();
+    }
+}

@@ -1,0 +1,170 @@
+using System.Globalization;
+using System.Text;
+using Drypeak.Figures.Drawing;
+
+namespace Drypeak.Figures;
+
+/// <summary>
+/// Writes a figure as SVG 1.1: real text, presentation attributes only, no style, script or outside reference, so that it can stand inline
+/// under a strict content security policy. Equal figures give equal bytes.
+/// </summary>
+public static class SvgWriter
+{
+    /// <summary>The figure as an SVG document, UTF-8 without byte order mark.</summary>
+    public static byte[] Write(Figure figure)
+    {
+        var canvas = new SvgCanvas(figure);
+        figure.DrawOn(canvas);
+        return Encoding.UTF8.GetBytes(canvas.Finish());
+    }
+
+    private sealed class SvgCanvas : ICanvas
+    {
+        private readonly Palette _palette;
+        private readonly StringBuilder _svg = new(8192);
+
+        public SvgCanvas(Figure figure)
+        {
+            _palette = figure.Palette;
+
+            // Several figures may stand in one page: their identifiers must differ, and be the same each time.
+            var id = Digest(figure.Title + figure.Description).ToString("x8", CultureInfo.InvariantCulture);
+            var (width, height) = (figure.Size.Width, figure.Size.Height);
+            _svg.Append(CultureInfo.InvariantCulture, $"<svg xmlns=\"http://www.w3.org/2000/svg\" viewBox=\"0 0 {width} {height}\" width=\"{width}\" height=\"{height}\"");
+            _svg.Append(CultureInfo.InvariantCulture, $" role=\"img\" aria-labelledby=\"title-{id} desc-{id}\" font-family=\"'{FontFace.Family}', 'Liberation Sans', Arial, sans-serif\">\n");
+            _svg.Append(CultureInfo.InvariantCulture, $"<title id=\"title-{id}\">{Escaped(figure.Title)}</title>\n");
+            _svg.Append(CultureInfo.InvariantCulture, $"<desc id=\"desc-{id}\">{Escaped(figure.Description)}</desc>\n");
+            _svg.Append(CultureInfo.InvariantCulture, $"<rect class=\"paper\" width=\"{width}\" height=\"{height}\" fill=\"{_palette.Paper.Hex}\"/>\n");
+        }
+
+        public string Finish() => _svg.Append("</svg>\n").ToString();
+
+        public void Begin(string part) => _svg.Append("<g class=\"").Append(part).Append("\">\n");
+
+        public void End() => _svg.Append("</g>\n");
+
+        public void Draw(Lines lines)
+        {
+            Open("path", lines.Name);
+            _svg.Append(" d=\"");
+            foreach (var run in lines.Runs)
+            {
+                var command = 'M';
+                foreach (var place in run)
+                {
+                    _svg.Append(command).Append(Number(place.X)).Append(' ').Append(Number(place.Y));
+                    command = 'L';
+                }
+            }
+
+            _svg.Append("\" fill=\"none\"");
+            AppendStroke(lines.Stroke);
+            if (lines.Stroke.Dash.Count > 0)
+            {
+                _svg.Append(" stroke-dasharray=\"").AppendJoin(' ', lines.Stroke.Dash.Select(Number)).Append('"');
+            }
+
+            _svg.Append(" stroke-linejoin=\"round\"/>\n");
+        }
+
+        public void Draw(Disc disc)
+        {
+            Open("circle", disc.Name);
+            Append("cx", disc.Center.X);
+            Append("cy", disc.Center.Y);
+            Append("r", disc.Radius);
+            _svg.Append(" fill=\"").Append(disc.Fill is { } fill ? _palette[fill].Hex : "none").Append('"');
+            if (disc.Stroke is { } stroke)
+            {
+                AppendStroke(stroke);
+            }
+
+            if (disc.Data is { } data)
+            {
+                _svg.Append(CultureInfo.InvariantCulture, $" data-x=\"{data.WaterContent:R}\" data-y=\"{data.DryDensity:R}\"");
+            }
+
+            _svg.Append("/>\n");
+        }
+
+        public void Draw(TextRun text)
+        {
+            Open("text", text.Name);
+            Append("x", text.At.X);
+            Append("y", text.At.Y);
+            Append("font-size", text.Size);
+            if (text.Face.Weight != EmbeddedFont.Regular.Weight)
+            {
+                Append("font-weight", text.Face.Weight);
+            }
+
+            _svg.Append(" fill=\"").Append(_palette[text.Color].Hex).Append('"');
+            if (text.Halo)
+            {
+                AppendStroke(new Stroke(ColorRole.Paper, text.HaloWidth));
+                _svg.Append(" stroke-linejoin=\"round\" paint-order=\"stroke\"");
+            }
+
+            if (text.Anchor != TextAnchor.Start)
+            {
+                _svg.Append(" text-anchor=\"").Append(text.Anchor == TextAnchor.Middle ? "middle" : "end").Append('"');
+            }
+
+            if (text.Angle != 0)
+            {
+                _svg.Append(CultureInfo.InvariantCulture, $" transform=\"rotate({Number(text.Angle)} {Number(text.At.X)} {Number(text.At.Y)})\"");
+            }
+
+            // Where the reader lacks the font, another takes the same room, so that nothing comes to overlap.
+            if (text.Face.Covers(text.Text))
+            {
+                Append("textLength", text.Width);
+                _svg.Append(" lengthAdjust=\"spacingAndGlyphs\"");
+            }
+
+            _svg.Append('>').Append(Escaped(text.Text)).Append("</text>\n");
+        }
+
+        private void Open(string element, string? name)
+        {
+            _svg.Append('<').Append(element);
+            if (name is not null)
+            {
+                _svg.Append(" class=\"").Append(name).Append('"');
+            }
+        }
+
+        private void Append(string attribute, double value) =>
+            _svg.Append(' ').Append(attribute).Append("=\"").Append(Number(value)).Append('"');
+
+        private void AppendStroke(Stroke stroke)
+        {
+            _svg.Append(" stroke=\"").Append(_palette[stroke.Color].Hex).Append('"');
+            Append("stroke-width", stroke.Width);
+        }
+
+        private static string Number(double value)
+        {
+            var text = value.ToString("0.##", CultureInfo.InvariantCulture);
+            return text == "-0" ? "0" : text;
+        }
+
+        private static string Escaped(string text) =>
+            text.Replace("&", "&amp;", StringComparison.Ordinal)
+                .Replace("<", "&lt;", StringComparison.Ordinal)
+                .Replace(">", "&gt;", StringComparison.Ordinal)
+                .Replace("\"", "&quot;", StringComparison.Ordinal);
+
+        /// <summary>FNV-1a, 32 bit: the same in every process, as the runtime's own hash of a string is not.</summary>
+        private static uint Digest(string text)
+        {
+            var digest = 2166136261u;
+            foreach (var unit in text)
+            {
+                digest = (digest ^ unit) * 16777619u;
+            }
+
+            return digest;
+        }
+    }
+}

@@ -1,0 +1,16 @@
+namespace Drypeak.Soil.Laboratory;
+
+/// <summary>The cautions that go with a laboratory result.</summary>
+public static class Cautions
+{
+    /// <summary>For every compaction test.</summary>
+    public static IReadOnlyList<string> OfLaboratoryTest { get; } =
+    [
+        "This is arithmetic on the data given. Acceptance belongs to the engineer responsible and to the contract.",
+        "Local codes, the current edition of the standard and licensed practice come first.",
+        "Ovens and hot tins burn.",
+    ];
+
+    /// <summary>Where a carbide tester was used.</summary>
+    public const string OfCarbideTester = "Calcium carbide and water make a flammable gas: release it outdoors, away from flames and sparks.";
+}
