@@ -19,10 +19,6 @@ public static class EndpointDescription
     public static RouteHandlerBuilder TakesQuery<T>(this RouteHandlerBuilder endpoint, string name, string description, string example, bool required = false) =>
         endpoint.WithMetadata(new Query(name, typeof(T), description, example, required));
 
-<<<<<<< HEAD
-    /// <summary>A body of a request (status 0) or of an answer.</summary>
-=======
->>>>>>> main
     internal sealed record Body(int Status, string MediaType, Type Type, string? Example);
 
     internal sealed record Query(string Name, Type Type, string Description, string Example, bool Required);
