@@ -31,9 +31,7 @@ internal static class AveragedModel
     public static FittedCurve Fit(TestedPoints points, out NextSpecimen? next)
     {
         Span<PeakNode> nodes = stackalloc PeakNode[PeakNodes.Count];
-        PeakNodes.Fill(points, nodes);
-        var saturation = points.SpecificGravity is { } gs ? SaturationMode.Of(points, gs, Prior) : null;
-        var mixture = new PeakMixture(points, nodes, saturation);
+        var mixture = Weigh(points, nodes);
         next = SpecimenPlan.Next(points, nodes, mixture);
 
         var predictions = NodePredictions.Of(points, nodes);
@@ -55,6 +53,21 @@ internal static class AveragedModel
             Curve = drawing.Curve,
             ChanceOfPeakOutside = mixture.ChanceOutside,
         };
+    }
+
+    /// <summary>The peak alone, or null where it lies probably outside the tested range.</summary>
+    public static PeakEstimate? PeakOf(TestedPoints points)
+    {
+        Span<PeakNode> nodes = stackalloc PeakNode[PeakNodes.Count];
+        var mixture = Weigh(points, nodes);
+        return mixture.ChanceOutside <= GreatestChanceOutside ? mixture.Peak : null;
+    }
+
+    /// <summary>Fills the nodes and weighs them with the saturation model's mode.</summary>
+    public static PeakMixture Weigh(TestedPoints points, Span<PeakNode> nodes)
+    {
+        PeakNodes.Fill(points, nodes);
+        return new(points, nodes, points.SpecificGravity is { } gs ? SaturationMode.Of(points, gs, Prior) : null);
     }
 
     /// <summary>One sentence on why the averaged model stands for the answer.</summary>

@@ -46,6 +46,35 @@ public static class CompactionCurve
         };
     }
 
+    /// <summary>The peak alone, for those who need it thousands of times; the same as the optimum of <see cref="Analyze"/> for the model.</summary>
+    /// <param name="data">As for <see cref="Analyze"/>.</param>
+    /// <param name="model">The model.</param>
+    /// <returns>Optimum and maximum, or null where the model gives none inside the tested range.</returns>
+    public static CompactionPoint? PeakOf(CompactionData data, CurveModel model)
+    {
+        var points = new TestedPoints(data);
+        if (points.Count < AveragedModel.FewestPoints || !points.HasRange)
+        {
+            return null;
+        }
+
+        return model switch
+        {
+            CurveModel.Averaged => Point(AveragedModel.PeakOf(points)),
+            CurveModel.Saturation => Point(SaturationModel.PeakOf(points)),
+            CurveModel.Parabola => Point(Parabola.Fit(points)),
+            CurveModel.Cubic => Point(Cubic.Fit(points)),
+            CurveModel.Spline => Point(Spline.Fit(points)),
+            _ => throw new ArgumentOutOfRangeException(nameof(model), model, "Not a model."),
+        };
+    }
+
+    private static CompactionPoint? Point(in PeakEstimate? peak) =>
+        peak is { } found ? new(found.WaterContent, TestedPoints.ToKilograms(found.Density)) : null;
+
+    private static CompactionPoint? Point(FittedCurve fit) =>
+        fit.Optimum is { } found ? new(found.WaterContent.Value, found.MaximumDryDensity.Value) : null;
+
     private static FittedCurve[] NotFitted(TestedPoints points)
     {
         var whyNot = points.HasRange ? TooFew : NoRange;
