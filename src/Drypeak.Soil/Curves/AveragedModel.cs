@@ -89,7 +89,8 @@ internal static class AveragedModel
         var deviation = TestedPoints.ToKilograms(Math.Sqrt(peak.DensityVariance));
         var density = TestedPoints.ToKilograms(peak.Density);
         return new(
-            new(peak.WaterContent, Math.Sqrt(peak.WaterContentVariance), lower, upper),
+            // Its tails are no halves: only on data like no soil's can they leave the mean out.
+            new(peak.WaterContent, Math.Sqrt(peak.WaterContentVariance), Math.Min(lower, peak.WaterContent), Math.Max(upper, peak.WaterContent)),
             new(density, deviation, density - (HalfLength * deviation), density + (HalfLength * deviation)));
     }
 

@@ -33,7 +33,7 @@ internal static class SpecimenPlan
     private const int MostCandidates = 64;
 
     /// <summary>Nodes less probable than this, relative to the best, change no digit of the plan.</summary>
-    private const double Negligible = 1e-9;
+    private const double Negligible = 1e-6;
 
     /// <summary>The plan for points through which no curve can be drawn yet.</summary>
     public static NextSpecimen Start(TestedPoints points)
