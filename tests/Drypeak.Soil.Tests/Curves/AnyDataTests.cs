@@ -35,7 +35,7 @@ public sealed class AnyDataTests
         Gen.Select(Gen.OneOf(AnyData, LikelyData), Gen.Enum<CurveModel>().Nullable()).Sample((data, asked) =>
         {
             var analysis = CompactionCurve.Analyze(data, asked);
-            Assert.All(Numbers(analysis), number => Assert.True(double.IsFinite(number)));
+            Assert.DoesNotContain(Numbers(analysis), number => !double.IsFinite(number));
             Assert.Equal(4, analysis.Alternatives.Count);
             Assert.Equal(asked ?? CurveModel.Averaged, analysis.Chosen.Model);
         }, iter: 800, print: Print);
@@ -79,7 +79,7 @@ public sealed class AnyDataTests
             var one = Numbers(CompactionCurve.Analyze(data)).ToArray();
             var other = Numbers(CompactionCurve.Analyze(data with { Points = [.. back] })).ToArray();
             Assert.Equal(one.Length, other.Length);
-            Assert.All(one.Zip(other), pair => Assert.Equal(pair.First, pair.Second, Math.Max(1e-9 * Math.Abs(pair.First), 1e-11)));
+            Assert.DoesNotContain(one.Zip(other), pair => Math.Abs(pair.First - pair.Second) > Math.Max(1e-9 * Math.Abs(pair.First), 1e-11));
         }, iter: 300);
 
     [Fact]
@@ -113,7 +113,7 @@ public sealed class AnyDataTests
         var analysis = CompactionCurve.Analyze(data);
         Assert.InRange(analysis.Chosen.Optimum!.WaterContent.Value, 0.145, 0.151);
         Assert.Equal(500, analysis.Chosen.Predictions.Count);
-        Assert.All(Numbers(analysis), number => Assert.True(double.IsFinite(number)));
+        Assert.DoesNotContain(Numbers(analysis), number => !double.IsFinite(number));
     }
 
     [Theory]
