@@ -15,8 +15,7 @@ internal sealed record PageResult<TComponent>(IReadOnlyDictionary<string, object
 
     public async Task ExecuteAsync(HttpContext httpContext)
     {
-        var services = httpContext.RequestServices;
-        await using var renderer = new HtmlRenderer(services, services.GetRequiredService<ILoggerFactory>());
+        await using var renderer = new HtmlRenderer(Components.Services, httpContext.RequestServices.GetRequiredService<ILoggerFactory>());
         var html = await renderer.Dispatcher.InvokeAsync(async () =>
         {
             var page = await renderer.RenderComponentAsync<TComponent>(ParameterView.FromDictionary(new Dictionary<string, object?>(Parameters)));

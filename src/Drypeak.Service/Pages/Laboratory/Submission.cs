@@ -44,7 +44,7 @@ public sealed record Submission(TestForm Form, FormReading? Reading, IReadOnlyLi
         var reading = FormReading.Of(form);
         List<Fault> formFaults = [.. reading.Unreadable, .. reading.Missing];
         var broken = job.Check(reading.Request).Where(fault => !formFaults.Exists(known => FollowsFrom(fault, known, reading)));
-        List<FormFault> faults = [.. formFaults.Concat(broken).Select(fault => FormFault.Of(fault, reading)).Distinct()];
+        List<FormFault> faults = [.. formFaults.Concat(broken).Select(fault => FormFault.Of(fault, reading)).Distinct().Order(FormFault.AsOnThePage)];
         if (faults.Count > 0)
         {
             return new Submission(form, reading, faults, null, null,

@@ -41,7 +41,7 @@ internal static partial class NumberText
         number = 0;
         if (!IsMeantAsNumber(text) || text.Length > LongestNumber)
         {
-            return $"“{Shortened(text)}” is not a number. Write digits with one decimal mark, and units in the header.";
+            return $"“{Shortened(text)}” is not a number. Write digits with one decimal mark and nothing else.";
         }
 
         if (Grouped().IsMatch(text))
@@ -65,7 +65,7 @@ internal static partial class NumberText
         var plain = text.Replace(',', '.').Replace('−', '-');
         return double.TryParse(plain, NumberStyles.AllowLeadingSign | NumberStyles.AllowDecimalPoint, CultureInfo.InvariantCulture, out number)
             ? null
-            : $"“{Shortened(text)}” is not a number. Write digits with one decimal mark, and units in the header.";
+            : $"“{Shortened(text)}” is not a number. Write digits with one decimal mark and nothing else.";
     }
 
     public static string Shortened(string text) => text.Length <= LongestShown ? text : text[..LongestShown] + "…";

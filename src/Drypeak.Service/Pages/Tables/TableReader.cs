@@ -16,7 +16,7 @@ public sealed record TableShape(Separator Separator, DecimalMark? DecimalMark, b
 public sealed record TableReading(TableShape Shape, SpecimenSheet? Sheet, IReadOnlyList<Fault> Faults);
 
 /// <summary>Reads a pasted table of specimens. Nothing is repaired: what has two readings is refused, and says what to write.</summary>
-internal static class TableReader
+public static class TableReader
 {
     /// <summary>Rows that are read; a test may have fewer, which its rules say.</summary>
     private const int MostRows = 2000;
