@@ -47,13 +47,46 @@ internal sealed class MoistureDensityRules(Limits limits)
         for (var i = 0; i < request.Specimens.Count; i++)
         {
             var place = $"/specimens/{i}";
-            if (request.Specimens[i] is { } specimen && Sound(place) && (Sound("/mold") || specimen.Mold is { }))
+            if (request.Specimens[i] is not { } specimen || !Sound(place) || !(Sound("/mold") || specimen.Mold is { }))
             {
-                SpecimenReduction.Reduce(specimen.ToMeasurement(i, units), mold, place, units, contradictions);
+                continue;
+            }
+
+            var measured = specimen.ToMeasurement(i, units);
+            if (MissingOfMold(measured, mold, place) is not { } missing)
+            {
+                SpecimenReduction.Reduce(measured, mold, place, units, contradictions);
+            }
+            else if (!contradictions.Contains(missing))
+            {
+                contradictions.Add(missing);
             }
         }
 
         return contradictions;
+    }
+
+    /// <summary>
+    /// What a specimen's masses need of the mold and do not find: at the mold, so that a mold that all share is complained of once, and not
+    /// at all where its form is at fault.
+    /// </summary>
+    private static Fault? MissingOfMold(SpecimenMeasurement measured, Mold? testMold, string place)
+    {
+        if (measured is { MoldAndWetSoil: null, WetMass: null } or { WetDensity: { } } or { DryDensity: { } })
+        {
+            return null;
+        }
+
+        var mold = measured.Mold?.Over(testMold) ?? testMold;
+        var moldPlace = measured.Mold is null ? "/mold" : place + "/mold";
+        return (mold, measured.WetMass) switch
+        {
+            (null, null) => new Fault(moldPlace, "not-enough-data", "Masses of mold and wet soil need the mold: give mold.mass and mold.volume, for the test or for each specimen."),
+            (null, _) => new Fault(moldPlace, "not-enough-data", "Wet masses need the mold: give mold.volume, for the test or for each specimen."),
+            ({ EmptyMass: null }, null) => new Fault(moldPlace + "/mass", "not-enough-data", "The mass of the empty mold is missing. Give it, or the wet mass alone."),
+            ({ Volume: null, WaterFilling: null, Diameter: null }, _) => new Fault(moldPlace + "/volume", "not-enough-data", "The volume of the mold is missing. Give it, or diameter and height, or empty and withWater."),
+            _ => null,
+        };
     }
 
     private sealed class RequestRules : AbstractValidator<MoistureDensityRequest>
