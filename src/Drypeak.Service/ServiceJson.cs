@@ -29,5 +29,8 @@ internal static class ServiceJson
 [JsonSourceGenerationOptions(JsonSerializerDefaults.Strict, PropertyNamingPolicy = JsonKnownNamingPolicy.CamelCase)]
 [JsonSerializable(typeof(MoistureDensityRequest))]
 [JsonSerializable(typeof(MoistureDensityAnswer))]
+[JsonSerializable(typeof(ComparisonRequest))]
+[JsonSerializable(typeof(ComparisonAnswer))]
+[JsonSerializable(typeof(IReadOnlyList<FindingKindAnswer>))]
 [JsonSerializable(typeof(CompactionChart))]
 internal sealed partial class ContractsJson : JsonSerializerContext;

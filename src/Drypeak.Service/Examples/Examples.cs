@@ -12,6 +12,9 @@ internal static class Examples
     /// <summary>A laboratory test of five specimens, as JSON.</summary>
     public static string MoistureDensityRequest { get; } = Text("moisture-density.json");
 
+    /// <summary>The same soil tested by two laboratories, as JSON.</summary>
+    public static string ComparisonRequest { get; } = Text("comparison.json");
+
     private static string Text(string name)
     {
         using var stream = typeof(Examples).Assembly.GetManifestResourceStream($"Drypeak.Service.Examples.{name}")

@@ -8,8 +8,9 @@ namespace Drypeak.Service.Hosting;
 /// <summary>The log: compact JSON on standard output, one line a request, nothing of what was sent or asked.</summary>
 internal static class RequestLog
 {
-    private const string Template =
-        "{RequestMethod} {RequestPath} answered {StatusCode} in {Elapsed:0.000} ms, {RequestBytes} bytes in, {ResponseBytes} bytes out, {TraceIdentifier}";
+    private const int LongestPath = 200;
+
+    private const string Template = "{RequestMethod:l} {RequestPath:l} answered {StatusCode} in {Elapsed:0.000} ms";
 
     public static void Configure(LoggerConfiguration log) => log
         .MinimumLevel.Information()
@@ -22,7 +23,13 @@ internal static class RequestLog
     public static void Use(IApplicationBuilder app) => app.UseSerilogRequestLogging(options =>
     {
         options.MessageTemplate = Template;
-        options.IncludeQueryInRequestPath = false;
+        options.GetMessageTemplateProperties = (http, path, elapsed, status) =>
+        [
+            new LogEventProperty("RequestMethod", new ScalarValue(Received.Shorten(http.Request.Method))),
+            new LogEventProperty("RequestPath", new ScalarValue(path.Length > LongestPath ? path[..LongestPath] : path)),
+            new LogEventProperty("StatusCode", new ScalarValue(status)),
+            new LogEventProperty("Elapsed", new ScalarValue(elapsed)),
+        ];
         options.GetLevel = (_, _, exception) => exception is null ? LogEventLevel.Information : LogEventLevel.Error;
         options.EnrichDiagnosticContext = (context, http) =>
         {

@@ -1,5 +1,3 @@
-using System.Security.Cryptography;
-using System.Text.Json;
 using Drypeak.Figures;
 using Drypeak.Service.Charts;
 using Drypeak.Service.Contracts;
@@ -23,7 +21,6 @@ internal sealed class MoistureDensityJob(Limits limits)
 
     private const int LinePoints = 41;
     private const double Coverage = 0.95;
-    private const double NormalQuantile = 1.959963984540054;
 
     /// <summary>Every broken rule; empty where the request can be computed.</summary>
     public IReadOnlyList<Fault> Check(MoistureDensityRequest request) => _rules.Check(request);
@@ -31,21 +28,14 @@ internal sealed class MoistureDensityJob(Limits limits)
     /// <summary>Computes a request that passed <see cref="Check"/>.</summary>
     public MoistureDensityOutcome Compute(MoistureDensityRequest request)
     {
-        var test = request.ToTest();
-        var faults = new List<Fault>();
-        var specimens = MoistureDensity.Reduce(test, faults).OfType<Specimen>().ToList();
-        if (faults.Count > 0)
-        {
-            throw new ArgumentException("The request does not keep the rules: " + faults[0].Message, nameof(request));
-        }
-
-        var result = MoistureDensity.Analyze(test, specimens);
+        var (test, result) = Analyze(request);
+        var specimens = result.Specimens;
         var chart = MoistureDensityChart.Of(request, test, result);
         var links = ChartAddress.LinksFor(ChartAddress.MoistureDensity, chart, limits.AddressBytes);
-        var findings = result.Findings.Select(ToContract);
+        var findings = result.Findings.Select(FindingContract.Of);
         if (links is { Svg: null })
         {
-            findings = findings.Append(ToContract(ChartAddress.TooLongForALink));
+            findings = findings.Append(FindingContract.Of(ChartAddress.TooLongForALink));
         }
 
         return new MoistureDensityOutcome(
@@ -73,12 +63,23 @@ internal sealed class MoistureDensityJob(Limits limits)
                 Trace = request.Trace is true ? [.. Working.Of(test, result).Select(ToContract)] : null,
                 Findings = [.. findings],
                 Links = links,
-                Provenance = new ProvenanceContract(ServiceVersion.Text, DigestOf(request)),
+                Provenance = ProvenanceContract.Of(request),
                 Cautions = request.Specimens!.Any(specimen => specimen.Carbide is { })
                     ? [.. Cautions.OfLaboratoryTest, Cautions.OfCarbideTester]
                     : Cautions.OfLaboratoryTest,
             },
             chart);
+    }
+
+    /// <summary>The domain's result of a request that passed <see cref="Check"/>.</summary>
+    public static (MoistureDensityTest Test, MoistureDensityResult Result) Analyze(MoistureDensityRequest request)
+    {
+        var test = request.ToTest();
+        var faults = new List<Fault>();
+        var specimens = MoistureDensity.Reduce(test, faults).OfType<Specimen>().ToList();
+        return faults.Count == 0
+            ? (test, MoistureDensity.Analyze(test, specimens))
+            : throw new ArgumentException("The request does not keep the rules: " + faults[0].Message, nameof(request));
     }
 
     private static MethodAnswer? MethodOf(MoistureDensityTest test, IReadOnlyList<Specimen> specimens)
@@ -115,7 +116,7 @@ internal sealed class MoistureDensityJob(Limits limits)
             specimen.SetAside);
     }
 
-    private static OptimumAnswer ToAnswer(FittedOptimum optimum, MoistureDensityTest test, PropagatedUncertainty? propagated)
+    public static OptimumAnswer ToAnswer(FittedOptimum optimum, MoistureDensityTest test, PropagatedUncertainty? propagated)
     {
         var w = new WaterContent(optimum.WaterContent.Value);
         var density = new Density(optimum.MaximumDryDensity.Value);
@@ -123,8 +124,8 @@ internal sealed class MoistureDensityJob(Limits limits)
         var saturation = test.SpecificGravity is { } gravity && PhaseRelations.VoidRatio(density, gravity.Value, test.WaterDensity) is (> 0 and var voidRatio)
             ? PhaseRelations.Saturation(w, voidRatio, gravity.Value) * 100
             : (double?)null;
-        var water = Widened(optimum.WaterContent, propagated?.WaterContent, 0.01);
-        var maximum = Widened(optimum.MaximumDryDensity, propagated?.MaximumDryDensity, unit);
+        var water = ToAnswer(optimum.WaterContent, 0.01);
+        var maximum = ToAnswer(optimum.MaximumDryDensity, unit);
         return new OptimumAnswer(
             w.Percent,
             density.In(test.Units.Density),
@@ -141,24 +142,9 @@ internal sealed class MoistureDensityJob(Limits limits)
             Reported(test, w, density));
     }
 
-    /// <summary>The curve's own uncertainty and the measurements', independent of one another, in the answer's unit.</summary>
-    private static UncertaintyAnswer? Widened(Estimate estimate, double? measurements, double unit)
-    {
-        if (estimate.StandardUncertainty is not { } own)
-        {
-            return measurements is { } alone
-                ? new UncertaintyAnswer(alone / unit, [(estimate.Value - (NormalQuantile * alone)) / unit, (estimate.Value + (NormalQuantile * alone)) / unit], Coverage)
-                : null;
-        }
-
-        var further = NormalQuantile * (measurements ?? 0);
-        double[]? interval = estimate is { Lower: { } lower, Upper: { } upper }
-            ? [(estimate.Value - Hypotenuse(estimate.Value - lower, further)) / unit, (estimate.Value + Hypotenuse(upper - estimate.Value, further)) / unit]
-            : null;
-        return new UncertaintyAnswer(Hypotenuse(own, measurements ?? 0) / unit, interval, Coverage);
-    }
-
-    private static double Hypotenuse(double a, double b) => b == 0 ? a : Math.Sqrt((a * a) + (b * b));
+    private static UncertaintyAnswer? ToAnswer(Estimate estimate, double unit) => estimate.StandardUncertainty is { } standard
+        ? new UncertaintyAnswer(standard / unit, estimate is { Lower: { } lower, Upper: { } upper } ? [lower / unit, upper / unit] : null, Coverage)
+        : null;
 
     private static ReportedAnswer Reported(MoistureDensityTest test, WaterContent w, Density density) =>
         new(Reporting.WaterContent(test.Method, w), Reporting.DryDensity(test.Method, density, test.Units.Density));
@@ -237,13 +223,6 @@ internal sealed class MoistureDensityJob(Limits limits)
         ];
     }
 
-    private static FindingContract ToContract(Finding finding) =>
-        new(finding.Code, finding.Severity.ToString().ToLowerInvariant(), finding.Message, finding.Place, finding.Basis);
-
     private static TraceStep ToContract(WorkingStep step) =>
         new(step.Quantity, step.Formula, step.Substitution, step.Value, step.Unit, step.Source, step.MathMl);
-
-    /// <summary>Over the request as it was read, so that white space and the order of members do not matter.</summary>
-    private static string DigestOf(MoistureDensityRequest request) =>
-        "sha256:" + Convert.ToHexStringLower(SHA256.HashData(JsonSerializer.SerializeToUtf8Bytes(request, ServiceJson.Of<MoistureDensityRequest>())));
 }

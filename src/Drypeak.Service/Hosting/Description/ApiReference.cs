@@ -60,6 +60,7 @@ public static class ApiReference
         options.SupportNonNullableReferenceTypes();
         options.NonNullableReferenceTypesAsRequired();
         options.UseAllOfToExtendReferenceSchemas();
+        options.MapType<JsonObject>(() => new OpenApiSchema { Type = JsonSchemaType.Object });
         options.OperationFilter<DescribedOperation>();
         options.DocumentFilter<NullableReferences>();
         options.IncludeXmlComments(typeof(ApiReference).Assembly);

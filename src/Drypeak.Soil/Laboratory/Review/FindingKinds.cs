@@ -153,7 +153,7 @@ public static class FindingKinds
         "A point is far from what the others say.",
         "It pulls the curve, and with it the optimum.",
         "Check its weighings; make it again; set it aside only with a reason.",
-        "Leave-one-out prediction: six points and more and over three standard uncertainties, or an inner point off by over 60 kg/m³");
+        "Leave-one-out prediction: from six points on, off by over three standard uncertainties; among fewer, an inner point off by over 60 kg/m³ and 2.5 of them");
 
     /// <summary>Tins that disagree.</summary>
     public static readonly FindingKind TinsDisagree = new("tins-disagree", Severity.Warning,
