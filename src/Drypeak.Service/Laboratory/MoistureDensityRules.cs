@@ -17,8 +17,28 @@ internal sealed class MoistureDensityRules(Limits limits)
     public IReadOnlyList<Fault> Check(MoistureDensityRequest request)
     {
         var faults = _values.Validate(request).ToFaults().ToList();
+        faults.AddRange(IdentificationFaults(request.Identification ?? new Dictionary<string, string>()));
         faults.AddRange(Contradictions(request, faults));
         return faults;
+    }
+
+    /// <summary>The labels are the caller's: no path of property names could hold them, so their places are built here.</summary>
+    private IEnumerable<Fault> IdentificationFaults(IReadOnlyDictionary<string, string> labels)
+    {
+        const string place = "/identification";
+        if (labels.Count > limits.IdentificationLabels)
+        {
+            yield return new Fault(place, "too-many", $"There may be up to {limits.IdentificationLabels} labels; there are {labels.Count}.");
+        }
+
+        foreach (var (label, text) in labels)
+        {
+            if (label.Length > limits.NameCharacters || text?.Length > limits.TextCharacters)
+            {
+                yield return new Fault(Places.Member(place, label), "too-long",
+                    $"A label may have up to {limits.NameCharacters} characters and its text up to {limits.TextCharacters}. Shorten it.");
+            }
+        }
     }
 
     /// <summary>What is given twice and does not agree, and what is missing: only where the single values are sound.</summary>
@@ -97,7 +117,6 @@ internal sealed class MoistureDensityRules(Limits limits)
         public RequestRules(Limits limits)
         {
             RuleFor(request => request.Reference).AtMost(limits.NameCharacters);
-            RuleFor(request => request.Identification).Custom((labels, context) => CheckIdentification(labels, limits, context));
             RuleFor(request => request.Method).OneOf([.. TestMethodCatalogue.Codes, MoistureDensityMapping.CustomMethod], "unknown-method");
             RuleFor(request => request.Effort).Null().When(request => request.Method != MoistureDensityMapping.CustomMethod)
                 .WithErrorCode("not-for-this-method").WithMessage("An effort goes with method \"custom\" only; the others bring their own. Leave it out, or name \"custom\".");
@@ -117,27 +136,6 @@ internal sealed class MoistureDensityRules(Limits limits)
             RuleFor(request => request.Curve!).SetValidator(new CurveRules(limits)).When(request => request.Curve is { });
             RuleFor(request => request.Lines!).SetValidator(new LinesRules(limits)).When(request => request.Lines is { });
             RuleFor(request => request.Uncertainty!).SetValidator(new UncertaintyRules()).When(request => request.Uncertainty is { });
-        }
-
-        private static void CheckIdentification(IReadOnlyDictionary<string, string>? labels, Limits limits, ValidationContext<MoistureDensityRequest> context)
-        {
-            if (labels is null)
-            {
-                return;
-            }
-
-            if (labels.Count > limits.IdentificationLabels)
-            {
-                context.Fail("Identification", "too-many", $"There may be up to {limits.IdentificationLabels} labels; there are {labels.Count}.");
-            }
-
-            foreach (var (label, text) in labels)
-            {
-                if (label.Length > limits.NameCharacters || text?.Length > limits.TextCharacters)
-                {
-                    context.Fail($"Identification[{label}]", "too-long", $"A label may have up to {limits.NameCharacters} characters and its text up to {limits.TextCharacters}. Shorten it.");
-                }
-            }
         }
 
         private static void CheckWaterDensity(double? value, ValidationContext<MoistureDensityRequest> context)

@@ -3,7 +3,9 @@ using System.Net.Http.Headers;
 using System.Text;
 using System.Text.Json;
 using Drypeak.Service.Tests.Laboratory;
+using Microsoft.AspNetCore.Hosting;
 using Microsoft.AspNetCore.Mvc.Testing;
+using Serilog;
 using Xunit;
 
 [assembly: AssemblyFixture(typeof(RunningService))]
@@ -15,7 +17,8 @@ public sealed class RunningService : IDisposable
 {
     public const string MoistureDensity = "/v1/moisture-density";
 
-    private readonly WebApplicationFactory<Program> _service = new();
+    private readonly WebApplicationFactory<Program> _service = new WebApplicationFactory<Program>()
+        .WithWebHostBuilder(host => host.UseEnvironment("Production").ConfigureServices(services => services.AddSerilog(log => log.MinimumLevel.Fatal())));
 
     public RunningService()
     {
