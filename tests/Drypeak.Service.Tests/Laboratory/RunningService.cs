@@ -17,8 +17,7 @@ public sealed class RunningService : IDisposable
 {
     public const string MoistureDensity = "/v1/moisture-density";
 
-    private readonly WebApplicationFactory<Program> _service = new WebApplicationFactory<Program>()
-        .WithWebHostBuilder(host => host.UseEnvironment("Production").ConfigureServices(services => services.AddSerilog(log => log.MinimumLevel.Fatal())));
+    private readonly QuietService _service = new();
 
     public RunningService()
     {
@@ -79,5 +78,12 @@ public sealed class RunningService : IDisposable
     {
         Client.Dispose();
         _service.Dispose();
+    }
+
+    /// <summary>As in production, but for the log.</summary>
+    private sealed class QuietService : WebApplicationFactory<Program>
+    {
+        protected override void ConfigureWebHost(IWebHostBuilder builder) =>
+            builder.UseEnvironment("Production").ConfigureServices(services => services.AddSerilog(log => log.MinimumLevel.Fatal()));
     }
 }
