@@ -12,6 +12,9 @@ namespace Drypeak.Service.Hosting;
 /// </summary>
 internal sealed class FormInspection
 {
+    /// <summary>Contracts may contain themselves (a field test a laboratory test, a lot field tests): stand-ins end here.</summary>
+    private const int DeepestStandIn = 3;
+
     private readonly JsonSerializerOptions options;
     private readonly Utf8JsonWriter writer;
     private readonly List<Fault> faults = [];
@@ -74,6 +77,7 @@ internal sealed class FormInspection
     {
         var members = type.Properties.Where(member => member.Set is not null || member.AssociatedParameter is not null).ToDictionary(member => member.Name);
         var seen = new HashSet<string>();
+        var meant = new HashSet<string>();
         writer.WriteStartObject();
         foreach (var given in value.EnumerateObject())
         {
@@ -87,17 +91,21 @@ internal sealed class FormInspection
                 writer.WritePropertyName(given.Name);
                 InspectNullable(given.Value, ContractShape.Of(member.PropertyType, options), here, allowsNull: member.IsSetNullable && AcceptsNull(member.PropertyType));
             }
-            else
+            else if (ReportUnknown(given.Name, members.Keys, place) is { } name)
             {
-                ReportUnknown(given.Name, members.Keys, place);
+                meant.Add(name);
             }
         }
 
-        foreach (var missing in members.Values.Where(member => member.IsRequired && !seen.Contains(member.Name)))
+        foreach (var absent in members.Values.Where(member => !seen.Contains(member.Name) && (member.IsRequired || meant.Contains(member.Name))))
         {
-            var shape = ContractShape.Of(missing.PropertyType, options);
-            writer.WritePropertyName(missing.Name);
-            Refuse(new Fault(Places.Member(place, missing.Name), "missing-member", $"\"{missing.Name}\" is missing. Give it: {ContractShape.Describe(shape)}."), shape);
+            var shape = ContractShape.Of(absent.PropertyType, options);
+            writer.WritePropertyName(absent.Name);
+            WriteStandIn(shape);
+            if (absent.IsRequired)
+            {
+                Report(new Fault(Places.Member(place, absent.Name), "missing-member", $"\"{absent.Name}\" is missing. Give it: {ContractShape.Describe(shape)}."));
+            }
         }
 
         writer.WriteEndObject();
@@ -206,11 +214,12 @@ internal sealed class FormInspection
     private static Fault OutOfRange(JsonElement value, string place, string bounds) =>
         new(place, "number-out-of-range", $"Received {Received.Describe(value)}. {bounds}");
 
-    private void ReportUnknown(string name, IReadOnlyCollection<string> known, string place)
+    /// <returns>The name that was probably meant, or null.</returns>
+    private string? ReportUnknown(string name, IReadOnlyCollection<string> known, string place)
     {
         if (IsFull)
         {
-            return;
+            return null;
         }
 
         var meant = NearestName.Of(name, known);
@@ -220,6 +229,8 @@ internal sealed class FormInspection
         {
             doubtful.Add(Places.Member(place, meant));
         }
+
+        return meant;
     }
 
     private void Refuse(Fault fault, JsonTypeInfo type)
@@ -237,23 +248,32 @@ internal sealed class FormInspection
         }
     }
 
-    /// <summary>The emptiest value of the type that the rules can be shown; for a number a text, see <see cref="ContractShape.LenientOf"/>.</summary>
-    private void WriteStandIn(JsonTypeInfo type)
+    /// <summary>
+    /// A value that counts as given, and of which nothing is known: an object with all its members, a list of one item.
+    /// What the rules say of it is dropped; what stands elsewhere and needs it finds that it is there. For a number a text
+    /// is written, see <see cref="ContractShape.LenientOf"/>.
+    /// </summary>
+    private void WriteStandIn(JsonTypeInfo type, int depth = 0)
     {
         switch (type.Kind)
         {
             case JsonTypeInfoKind.Object:
                 writer.WriteStartObject();
-                foreach (var member in type.Properties.Where(member => member.IsRequired))
+                foreach (var member in type.Properties.Where(member => member.IsRequired || depth < DeepestStandIn))
                 {
                     writer.WritePropertyName(member.Name);
-                    WriteStandIn(ContractShape.Of(member.PropertyType, options));
+                    WriteStandIn(ContractShape.Of(member.PropertyType, options), depth + 1);
                 }
 
                 writer.WriteEndObject();
                 break;
             case JsonTypeInfoKind.Enumerable:
                 writer.WriteStartArray();
+                if (depth < DeepestStandIn)
+                {
+                    WriteStandIn(ContractShape.Of(type.ElementType!, options), depth + 1);
+                }
+
                 writer.WriteEndArray();
                 break;
             case JsonTypeInfoKind.Dictionary:
