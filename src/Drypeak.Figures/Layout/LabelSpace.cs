@@ -19,7 +19,7 @@ internal enum Barriers
 /// The room that is left for labels. Labels are placed in the order of their importance, each at the first of its candidate places that is
 /// free; a label without a free place is left out. No two texts ever share room, and none leaves the picture.
 /// </summary>
-/// <param name="picture">The whole picture.</param>
+/// <param name="picture">The picture, less a narrow edge.</param>
 internal sealed class LabelSpace(Area picture)
 {
     private readonly List<TextRun> _placed = [];

@@ -39,6 +39,10 @@ internal static class SaturationModel
         };
     }
 
+    /// <summary>The peak alone.</summary>
+    public static PeakEstimate? PeakOf(TestedPoints points) =>
+        points.SpecificGravity is { } gs ? SaturationMode.Of(points, gs, Prior).Peak : null;
+
     /// <summary>
     /// Each point from the others to first order about the mode: the misfit over 1 − h, with the leverage h that the point has beside the priors.
     /// </summary>

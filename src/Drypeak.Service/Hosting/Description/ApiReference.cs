@@ -76,5 +76,6 @@ public static class ApiReference
         options.OperationFilter<DescribedOperation>();
         options.DocumentFilter<NullableReferences>();
         options.IncludeXmlComments(typeof(ApiReference).Assembly);
+        options.IncludeXmlComments(typeof(Fault).Assembly);
     }
 }
