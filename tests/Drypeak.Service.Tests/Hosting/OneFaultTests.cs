@@ -1,17 +1,13 @@
-using System.Text;
 using System.Text.Json;
 using System.Text.Json.Nodes;
-using Microsoft.AspNetCore.Mvc.Testing;
-using Serilog;
+using Drypeak.Service.Tests.Laboratory;
 using Xunit;
 
 namespace Drypeak.Service.Tests.Hosting;
 
 /// <summary>One fault of form in a right request is one fault in the answer: no rule adds what only follows from it.</summary>
-public sealed class OneFaultTests
+public sealed class OneFaultTests(RunningService service)
 {
-    private static CancellationToken Stop => TestContext.Current.CancellationToken;
-
     [Fact]
     public async Task Each_member_of_a_right_request_that_is_mistyped_gives_that_fault_alone() =>
         await AssertFaults(Mistyped(Example()).Select(each => (each.Text, new[] { $"{each.Place} wrong-type" })));
@@ -21,19 +17,13 @@ public sealed class OneFaultTests
         await AssertFaults(Misspelled(Example()).Select(each => (each.Text, new[] { $"{each.Place[..^1]} unknown-member", $"{each.Place} missing-member" })));
 
     /// <summary>Sends each text; its faults have to be some of those that are allowed, the first of them among them.</summary>
-    private static async Task AssertFaults(IEnumerable<(string Text, string[] Allowed)> requests)
+    private async Task AssertFaults(IEnumerable<(string Text, string[] Allowed)> requests)
     {
-        await using var bare = new WebApplicationFactory<Program>();
-        await using var factory = bare.WithWebHostBuilder(host => host.ConfigureServices(services => services.AddSerilog(log => log.MinimumLevel.Fatal())));
-        factory.UseKestrel(0);
-        factory.StartServer();
-        using var client = factory.CreateClient();
         var wrong = new List<string>();
         foreach (var (text, allowed) in requests)
         {
-            using var content = new StringContent(text, Encoding.UTF8, "application/json");
-            using var response = await client.PostAsync("/v1/moisture-density", content, Stop);
-            var answer = JsonSerializer.Deserialize<JsonElement>(await response.Content.ReadAsStringAsync(Stop));
+            using var response = await service.PostAsync(text);
+            var answer = JsonElement.Parse(await RunningService.TextOf(response));
             string[] faults = answer.TryGetProperty("errors", out var errors)
                 ? [.. errors.EnumerateArray().Select(fault => $"{fault.GetProperty("pointer")} {fault.GetProperty("code")}")]
                 : [];
