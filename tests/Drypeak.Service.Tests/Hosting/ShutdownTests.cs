@@ -1,6 +1,9 @@
 using System.Net;
 using System.Net.Sockets;
+using Drypeak.Service.Hosting;
 using Microsoft.AspNetCore.Builder;
+using Microsoft.Extensions.DependencyInjection;
+using Microsoft.Extensions.Hosting;
 using Xunit;
 
 namespace Drypeak.Service.Tests.Hosting;
@@ -29,5 +32,16 @@ public sealed class ShutdownTests
 
         Assert.Equal("answered", await answer);
         await stopped.WaitAsync(TimeSpan.FromSeconds(5), TestContext.Current.CancellationToken);
+    }
+
+    [Fact]
+    public async Task A_service_that_was_told_to_stop_is_not_ready_and_says_when_to_ask_again()
+    {
+        await using var service = await TestService.StartAsync();
+        service.Services.GetRequiredService<IHostApplicationLifetime>().StopApplication();
+        using var response = await service.Client.GetAsync("/health/ready", TestContext.Current.CancellationToken);
+        Assert.Equal(HttpStatusCode.ServiceUnavailable, response.StatusCode);
+        Assert.Equal(TimeSpan.FromSeconds(1), response.Headers.RetryAfter?.Delta);
+        Assert.Equal(Problem.MediaType, response.Content.Headers.ContentType?.MediaType);
     }
 }
