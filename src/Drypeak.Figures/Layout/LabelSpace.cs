@@ -22,6 +22,9 @@ internal enum Barriers
 /// <param name="picture">The picture, less a narrow edge.</param>
 internal sealed class LabelSpace(Area picture)
 {
+    /// <summary>Between two texts, px: readers of SVG round the height of a line up.</summary>
+    private const double LineGap = 1;
+
     private readonly List<TextRun> _placed = [];
     private readonly List<Area> _taken = [];
     private readonly List<(Barriers Kind, Place From, Place To, object? Owner)> _segments = [];
@@ -54,7 +57,7 @@ internal sealed class LabelSpace(Area picture)
             if (candidate.Text.Length > 0 && IsFree(candidate, barriers, owner))
             {
                 _placed.Add(candidate);
-                _taken.Add(candidate.LineBox.Bounds);
+                _taken.Add(candidate.LineBox.Grown(LineGap).Bounds);
                 return candidate;
             }
         }
