@@ -6,7 +6,6 @@
 const answer = document.getElementById('answer');
 if (answer?.dataset.address) {
   history.replaceState(null, '', answer.dataset.address);
-  answer.scrollIntoView({ block: 'nearest' });
 }
 
 const grid = document.querySelector('table.cells');

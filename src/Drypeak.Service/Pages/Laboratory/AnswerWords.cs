@@ -69,7 +69,7 @@ internal static class AnswerWords
         parts.AddRange(table.Shape.SpecimensAcross ? ["a column each"] : []);
         parts.AddRange(table.Shape.HasHeader ? [] : ["columns by their number: " + string.Join(", ", sheet.Columns.Select(column => column.Heading))]);
         parts.AddRange(sheet.Columns.Where(column => column.Unit is { } unit && unit != ColumnUnits.Of(column.Kind.Measure, units))
-            .Select(column => $"{column.Heading} turned from {column.Unit} into {ColumnUnits.Of(column.Kind.Measure, units)}"));
+            .Select(column => $"{column.Heading} turned from {ColumnUnits.Symbol(column.Unit!)} into {ColumnUnits.Symbol(ColumnUnits.Of(column.Kind.Measure, units))}"));
         return string.Join(", ", parts);
     }
 

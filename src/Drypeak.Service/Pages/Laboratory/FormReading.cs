@@ -1,6 +1,7 @@
 using Drypeak.Service.Contracts;
 using Drypeak.Service.Laboratory;
 using Drypeak.Service.Pages.Tables;
+using Drypeak.Soil.Quantities;
 
 namespace Drypeak.Service.Pages.Laboratory;
 
@@ -29,6 +30,9 @@ public sealed class FormReading
 
     /// <summary>What the form lacks to be a request.</summary>
     public IReadOnlyList<Fault> Missing => _missing;
+
+    /// <summary>The form's units. A unit that is none is a fault of its own; the cells are then read as if nothing had been chosen.</summary>
+    public UnitSet Units { get; private set; } = new();
 
     /// <summary>The pasted table, or null where the grid was used.</summary>
     public TableReading? Table { get; private set; }
@@ -65,7 +69,8 @@ public sealed class FormReading
             Density = _form[Field.DensityUnit],
             Length = _form[Field.LengthUnit],
         };
-        ReadSpecimens(units);
+        Units = UnitsAreKnown(units) ? units.ToUnitSet() : new();
+        ReadSpecimens();
         var request = new MoistureDensityRequest
         {
             Reference = Text(Field.Reference),
@@ -86,7 +91,7 @@ public sealed class FormReading
         return request;
     }
 
-    private void ReadSpecimens(UnitsContract units)
+    private void ReadSpecimens()
     {
         var text = _form[Field.Table];
         var rows = _form.FilledRows;
@@ -101,17 +106,15 @@ public sealed class FormReading
             _missing.Add(new Fault(Field.Table.Place, "two-tables", "There are specimens in the pasted table and in the grid. Clear one of the two."));
         }
 
-        // A unit that is none is a fault of its own; the cells are then read as if the form had its first units.
-        var meant = UnitsAreKnown(units) ? units.ToUnitSet() : new();
         if (!string.IsNullOrWhiteSpace(text))
         {
-            Table = TableReader.Read(text, meant, _mark);
+            Table = TableReader.Read(text, Units, _mark);
             Sheet = Table.Sheet;
             _unreadable.AddRange(Table.Faults);
         }
         else
         {
-            Sheet = SpecimenSheet.Read(TestForm.GridColumns, [.. rows.Select(GridRow)], meant, _mark);
+            Sheet = SpecimenSheet.Read(TestForm.GridColumns, [.. rows.Select(GridRow)], Units, _mark);
             _unreadable.AddRange(Sheet.Faults);
         }
     }

@@ -54,6 +54,9 @@ internal static class ColumnUnits
         _ => "",
     };
 
+    /// <summary>A unit's code as readers write it.</summary>
+    public static string Symbol(string code) => code.EndsWith('3') ? code[..^1] + "³" : code;
+
     /// <summary>A number of the column's own unit in the form's unit.</summary>
     public static double InFormUnits(double number, Column column, UnitSet units)
     {
