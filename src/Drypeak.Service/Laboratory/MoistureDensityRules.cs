@@ -1,7 +1,6 @@
 using Drypeak.Service.Contracts;
 using Drypeak.Service.Hosting;
 using Drypeak.Soil.Laboratory;
-using Drypeak.Soil.Quantities;
 using Drypeak.Soil.TestMethods;
 using FluentValidation;
 
