@@ -24,10 +24,16 @@ internal sealed class PerturbedChain
             var byMass = specimen.MoldVolume is { };
             var weighedInMold = byMass && measured.MoldAndWetSoil is { };
             (int? Mass, int? Volume) mold = (null, null);
-            if (byMass && (measured.Mold ?? test.Mold) is { } itsMold && !molds.TryGetValue(itsMold, out mold))
+            if (byMass && (measured.Mold ?? test.Mold) is { } itsMold)
             {
-                mold = (weighedInMold ? Input("mass", u.Mass?.Kilograms) : null, Input("volume", u.Volume?.CubicMeters));
-                molds.Add(itsMold, mold);
+                if (!molds.TryGetValue(itsMold, out mold))
+                {
+                    mold.Volume = Input("volume", u.Volume?.CubicMeters);
+                }
+
+                // The mold's mass comes in with the first specimen that was weighed in it, which need not be the driest.
+                mold.Mass ??= weighedInMold ? Input("mass", u.Mass?.Kilograms) : null;
+                molds[itsMold] = mold;
             }
 
             _specimens.Add(new Perturbed(
