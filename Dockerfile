@@ -10,7 +10,8 @@ COPY src/Drypeak.Service/*.csproj src/Drypeak.Service/packages.lock.json src/Dry
 RUN dotnet restore src/Drypeak.Service --locked-mode
 
 COPY src/ src/
-RUN dotnet publish src/Drypeak.Service --no-restore -c Release -o /app
+ARG TARGETARCH=amd64
+RUN dotnet publish src/Drypeak.Service --no-restore -c Release -a $TARGETARCH --self-contained false -o /app
 
 FROM mcr.microsoft.com/dotnet/aspnet:10.0
 WORKDIR /app

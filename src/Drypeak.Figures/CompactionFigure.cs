@@ -34,7 +34,7 @@ public static class CompactionFigure
         var densityValues = wording.Result is { } shown ? [wording.BareDensity(shown)] : Array.Empty<string>();
         var plot = Plot.Lay(View.Of(chart, lines), heading.Bottom, densityValues, size, type);
         var axes = new Axes(plot, wording, size, type);
-        var space = new LabelSpace(new Area(0, 0, size.Width, size.Height));
+        var space = new LabelSpace(new Area(0, 0, size.Width, size.Height).Grown(-1));
 
         var specimens = new SpecimenMarks(chart, plot, type);
         var optima = new OptimumMarks(chart, wording, plot, type);
@@ -59,7 +59,8 @@ public static class CompactionFigure
         var next = NextSpecimenMark.Draw(chart.NextSpecimen, plot, type, space);
         var phaseLines = courses.ConvertAll(drawn => new Lines(
             LineLabels.Place(drawn.Line, drawn.Course!, type.Label, drawn.Line.Stroke(type).Color, space),
-            drawn.Line.Stroke(type)) { Name = drawn.Line.Name });
+            drawn.Line.Stroke(type))
+        { Name = drawn.Line.Name });
         if (chart.Specimens.Count <= MostLabeledSpecimens)
         {
             specimens.Label(space);

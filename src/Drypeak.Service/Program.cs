@@ -1,16 +1,18 @@
 using Drypeak.Service.Charts;
 using Drypeak.Service.Hosting;
 using Drypeak.Service.Laboratory;
+using Drypeak.Service.Pages;
 
 var builder = WebApplication.CreateBuilder(args).AddDrypeakHosting();
 builder.Services.AddSingleton<MoistureDensityJob>().AddSingleton<ComparisonJob>();
 
 var app = builder.Build();
-app.UseDrypeakHosting(_ => Results.Content("<!doctype html><title>Not found</title>", "text/html"));
+app.UseDrypeakHosting(PageEndpoints.NotFound);
 app.MapMoistureDensity();
 app.MapComparison();
 app.MapFindingKinds();
 app.MapCharts();
+app.MapPages();
 
 if (args is ["openapi", var path])
 {

@@ -7,6 +7,9 @@ namespace Drypeak.Figures.Layout;
 /// <param name="Bottom">Where the heading ends, px from the top.</param>
 internal sealed record Heading(IReadOnlyList<TextRun> Runs, double Bottom)
 {
+    /// <summary>Between two lines, px: readers of SVG round the height of a line up.</summary>
+    private const double LineGap = 1.5;
+
     /// <summary>Below this height a picture has room for one line under the title, px.</summary>
     private const int TallEnoughForTwo = 420;
 
@@ -32,7 +35,7 @@ internal sealed record Heading(IReadOnlyList<TextRun> Runs, double Bottom)
         void Add(string text, double textSize, FontFace face, ColorRole color)
         {
             runs.Add(new TextRun(text, new Place(type.Margin, top + (face.Ascent * textSize)), textSize, face, color));
-            top += (face.Ascent + face.Descent) * textSize;
+            top += ((face.Ascent + face.Descent) * textSize) + LineGap;
         }
     }
 

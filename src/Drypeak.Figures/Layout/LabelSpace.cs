@@ -19,9 +19,12 @@ internal enum Barriers
 /// The room that is left for labels. Labels are placed in the order of their importance, each at the first of its candidate places that is
 /// free; a label without a free place is left out. No two texts ever share room, and none leaves the picture.
 /// </summary>
-/// <param name="picture">The whole picture.</param>
+/// <param name="picture">The picture, less a narrow edge.</param>
 internal sealed class LabelSpace(Area picture)
 {
+    /// <summary>Between two texts, px: readers of SVG round the height of a line up.</summary>
+    private const double LineGap = 1;
+
     private readonly List<TextRun> _placed = [];
     private readonly List<Area> _taken = [];
     private readonly List<(Barriers Kind, Place From, Place To, object? Owner)> _segments = [];
@@ -54,7 +57,7 @@ internal sealed class LabelSpace(Area picture)
             if (candidate.Text.Length > 0 && IsFree(candidate, barriers, owner))
             {
                 _placed.Add(candidate);
-                _taken.Add(candidate.LineBox.Bounds);
+                _taken.Add(candidate.LineBox.Grown(LineGap).Bounds);
                 return candidate;
             }
         }

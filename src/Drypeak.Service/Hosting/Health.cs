@@ -7,9 +7,9 @@ public static class Health
 {
     public static void Map(IEndpointRouteBuilder endpoints)
     {
-        endpoints.MapGet("/health/live", Live).WithTags("Health")
+        endpoints.MapRead("/health/live", Live).WithTags("Health")
             .Gives<HealthAnswer>("application/json", """{ "status": "live" }""");
-        endpoints.MapGet("/health/ready", Ready).WithTags("Health")
+        endpoints.MapRead("/health/ready", Ready).WithTags("Health")
             .Gives<HealthAnswer>("application/json", """{ "status": "ready" }""").Refuses(503);
     }
 

@@ -39,10 +39,8 @@ internal static class MoistureDensityMapping
             SpecificGravity = request.SpecificGravity is { Value: { } value } gravity
                 ? new SpecificGravity(value, gravity.Determined == "measured")
                 : null,
-            WaterDensity = request.WaterDensity is { } given
-                ? Density.From(given, units.Density)
-                : WaterDensity.At(request.WaterTemperature ?? WaterDensity.DefaultTemperature),
-            WaterTemperature = request.WaterDensity is null ? request.WaterTemperature ?? WaterDensity.DefaultTemperature : null,
+            WaterDensity = request.Water(),
+            WaterTemperature = request.Temperature(),
             Specimens = [.. request.Specimens!.Select((specimen, i) => specimen.ToMeasurement(i, units))],
             Oversize = request.Oversize is { Percent: { } percent } oversize
                 ? new Oversize(percent / 100, oversize.SpecificGravity, WaterContent.FromPercent(oversize.WaterContent ?? 0), oversize.Sieve)

@@ -1,8 +1,6 @@
 using Drypeak.Service.Contracts;
 using Drypeak.Service.Hosting;
 using Drypeak.Soil.Laboratory;
-using Drypeak.Soil.Phases;
-using Drypeak.Soil.Quantities;
 using Drypeak.Soil.TestMethods;
 using FluentValidation;
 
@@ -46,23 +44,12 @@ internal sealed class MoistureDensityRules(Limits limits)
     {
         var contradictions = new List<Fault>();
         bool Sound(string place) => !faults.Exists(fault => fault.Place == place || fault.Place.StartsWith(place + "/", StringComparison.Ordinal));
-        if (!Sound("/units") || !Sound("/waterTemperature") || !Sound("/waterDensity") || request.Specimens is null)
+        if (!Sound("/units") || request.Specimens is null)
         {
             return contradictions;
         }
 
         var units = request.Units.ToUnitSet();
-        if (request is { WaterDensity: { } given, WaterTemperature: { } temperature })
-        {
-            var (density, tabulated) = (Density.From(given, units.Density), WaterDensity.At(temperature));
-            var apart = Math.Abs((density.KilogramsPerCubicMeter / tabulated.KilogramsPerCubicMeter) - 1);
-            if (apart > SpecimenReduction.DensityTolerance * (1 + 1e-9))
-            {
-                contradictions.Add(new Fault("/waterDensity", "contradiction",
-                    $"The density of water given is {ReaderText.Of(density, units.Density)}, but at {RuleWords.Text(temperature)} °C it is {ReaderText.Of(tabulated, units.Density)}: {ReaderText.Percent(apart, 2)} apart, where {ReaderText.Percent(SpecimenReduction.DensityTolerance)} is allowed. Leave one out."));
-            }
-        }
-
         var mold = Sound("/mold") ? request.Mold.ToMold(units) : null;
         for (var i = 0; i < request.Specimens.Count; i++)
         {
@@ -111,9 +98,6 @@ internal sealed class MoistureDensityRules(Limits limits)
 
     private sealed class RequestRules : AbstractValidator<MoistureDensityRequest>
     {
-        private const double LeastWaterDensity = 950;
-        private const double GreatestWaterDensity = 1100;
-
         public RequestRules(Limits limits)
         {
             RuleFor(request => request.Reference).AtMost(limits.NameCharacters);
@@ -124,8 +108,7 @@ internal sealed class MoistureDensityRules(Limits limits)
             RuleFor(request => request.Units!).SetValidator(new UnitsRules()).When(request => request.Units is { });
             RuleFor(request => request.Mold!).SetValidator(new MoldRules()).When(request => request.Mold is { });
             RuleFor(request => request.SpecificGravity!).SetValidator(new SpecificGravityRules()).When(request => request.SpecificGravity is { });
-            RuleFor(request => request.WaterTemperature).Within(WaterDensity.LowestTemperature, WaterDensity.HighestTemperature, " °C");
-            RuleFor(request => request.WaterDensity).Custom(CheckWaterDensity);
+            Include(new WaterRules());
 
             RuleFor(request => request.Specimens).Needed().Counted(limits.Specimens);
             RuleForEach(request => request.Specimens).Needed().SetValidator(new SpecimenRules(limits));
@@ -136,22 +119,6 @@ internal sealed class MoistureDensityRules(Limits limits)
             RuleFor(request => request.Curve!).SetValidator(new CurveRules(limits)).When(request => request.Curve is { });
             RuleFor(request => request.Lines!).SetValidator(new LinesRules(limits)).When(request => request.Lines is { });
             RuleFor(request => request.Uncertainty!).SetValidator(new UncertaintyRules()).When(request => request.Uncertainty is { });
-        }
-
-        private static void CheckWaterDensity(double? value, ValidationContext<MoistureDensityRequest> context)
-        {
-            var name = context.InstanceToValidate.Units?.Density;
-            if (value is not { } number || (name is { } && !UnitNames.Density.ContainsKey(name)))
-            {
-                return;
-            }
-
-            var unit = context.InstanceToValidate.Units.DensityUnit();
-            if (Density.From(number, unit).KilogramsPerCubicMeter is not (>= LeastWaterDensity and <= GreatestWaterDensity))
-            {
-                context.Fail("WaterDensity", "out-of-range",
-                    $"The density of water must lie between {ReaderText.Of(new Density(LeastWaterDensity), unit)} and {ReaderText.Of(new Density(GreatestWaterDensity), unit)}; {RuleWords.Text(number)} {unit.Symbol()} was received.");
-            }
         }
 
         private static void CheckLabels(IReadOnlyList<SpecimenContract>? specimens, ValidationContext<MoistureDensityRequest> context)

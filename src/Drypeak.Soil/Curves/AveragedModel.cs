@@ -31,9 +31,7 @@ internal static class AveragedModel
     public static FittedCurve Fit(TestedPoints points, out NextSpecimen? next)
     {
         Span<PeakNode> nodes = stackalloc PeakNode[PeakNodes.Count];
-        PeakNodes.Fill(points, nodes);
-        var saturation = points.SpecificGravity is { } gs ? SaturationMode.Of(points, gs, Prior) : null;
-        var mixture = new PeakMixture(points, nodes, saturation);
+        var mixture = Weigh(points, nodes);
         next = SpecimenPlan.Next(points, nodes, mixture);
 
         var predictions = NodePredictions.Of(points, nodes);
@@ -57,6 +55,21 @@ internal static class AveragedModel
         };
     }
 
+    /// <summary>The peak alone, or null where it lies probably outside the tested range.</summary>
+    public static PeakEstimate? PeakOf(TestedPoints points)
+    {
+        Span<PeakNode> nodes = stackalloc PeakNode[PeakNodes.Count];
+        var mixture = Weigh(points, nodes);
+        return mixture.ChanceOutside <= GreatestChanceOutside ? mixture.Peak : null;
+    }
+
+    /// <summary>Fills the nodes and weighs them with the saturation model's mode.</summary>
+    public static PeakMixture Weigh(TestedPoints points, Span<PeakNode> nodes)
+    {
+        PeakNodes.Fill(points, nodes);
+        return new(points, nodes, points.SpecificGravity is { } gs ? SaturationMode.Of(points, gs, Prior) : null);
+    }
+
     /// <summary>One sentence on why the averaged model stands for the answer.</summary>
     public static string Why(FittedCurve fit, TestedPoints points)
     {
@@ -76,7 +89,8 @@ internal static class AveragedModel
         var deviation = TestedPoints.ToKilograms(Math.Sqrt(peak.DensityVariance));
         var density = TestedPoints.ToKilograms(peak.Density);
         return new(
-            new(peak.WaterContent, Math.Sqrt(peak.WaterContentVariance), lower, upper),
+            // Its tails are no halves: only on data like no soil's can they leave the mean out.
+            new(peak.WaterContent, Math.Sqrt(peak.WaterContentVariance), Math.Min(lower, peak.WaterContent), Math.Max(upper, peak.WaterContent)),
             new(density, deviation, density - (HalfLength * deviation), density + (HalfLength * deviation)));
     }
 

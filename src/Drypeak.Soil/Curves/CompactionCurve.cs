@@ -46,10 +46,10 @@ public static class CompactionCurve
         };
     }
 
-    /// <summary>The peak of one model and nothing else, for those who need many.</summary>
+    /// <summary>The peak alone, for those who need it thousands of times; the same as the optimum of <see cref="Analyze"/> for the model.</summary>
     /// <param name="data">As for <see cref="Analyze"/>.</param>
     /// <param name="model">The model.</param>
-    /// <returns>Water content (fraction) and dry density (kg/m³) of the peak, or null where the model gives none.</returns>
+    /// <returns>Optimum and maximum, or null where the model gives none inside the tested range.</returns>
     public static CompactionPoint? PeakOf(CompactionData data, CurveModel model)
     {
         var points = new TestedPoints(data);
@@ -58,17 +58,22 @@ public static class CompactionCurve
             return null;
         }
 
-        var curve = model switch
+        return model switch
         {
-            CurveModel.Averaged => AveragedModel.Fit(points, out _),
-            CurveModel.Saturation => SaturationModel.Fit(points),
-            CurveModel.Parabola => Parabola.Fit(points),
-            CurveModel.Cubic => Cubic.Fit(points),
-            CurveModel.Spline => Spline.Fit(points),
-            _ => throw new ArgumentOutOfRangeException(nameof(model)),
+            CurveModel.Averaged => Point(AveragedModel.PeakOf(points)),
+            CurveModel.Saturation => Point(SaturationModel.PeakOf(points)),
+            CurveModel.Parabola => Point(Parabola.Fit(points)),
+            CurveModel.Cubic => Point(Cubic.Fit(points)),
+            CurveModel.Spline => Point(Spline.Fit(points)),
+            _ => throw new ArgumentOutOfRangeException(nameof(model), model, "Not a model."),
         };
-        return curve.Optimum is { } optimum ? new CompactionPoint(optimum.WaterContent.Value, optimum.MaximumDryDensity.Value) : null;
     }
+
+    private static CompactionPoint? Point(in PeakEstimate? peak) =>
+        peak is { } found ? new(found.WaterContent, TestedPoints.ToKilograms(found.Density)) : null;
+
+    private static CompactionPoint? Point(FittedCurve fit) =>
+        fit.Optimum is { } found ? new(found.WaterContent.Value, found.MaximumDryDensity.Value) : null;
 
     private static FittedCurve[] NotFitted(TestedPoints points)
     {

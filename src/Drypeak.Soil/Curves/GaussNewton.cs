@@ -21,7 +21,8 @@ internal readonly record struct MinimizationOutcome(bool IsStationary, double Su
 
 /// <summary>
 /// Nonlinear least squares by damped Gauss–Newton steps (K. Levenberg, Quarterly of Applied Mathematics 2 (1944) 164–168;
-/// D. W. Marquardt, SIAM Journal 11 (1963) 431–441). Each step is a linear least-squares problem by reflections.
+/// D. W. Marquardt, SIAM Journal 11 (1963) 431–441). Each step is a linear least-squares problem by reflections. Where the residuals stay large
+/// such steps crawl; once they do, Newton steps with the gradient's own differences are tried between them.
 /// It ends at a stationary point, where every column of the Jacobian is at right angles to the residuals, and not at a small
 /// change of the sum: an answer must not depend on the way by which it was reached.
 /// </summary>
@@ -34,6 +35,15 @@ internal static class GaussNewton
 
     /// <summary>Below this relative change the sum of squares is rounding, and the gradient decides whether a step was good.</summary>
     private const double RoundingOfSum = 1e-12;
+
+    /// <summary>A step after which more than this share of the slope is left was slow.</summary>
+    private const double Slow = 0.3;
+
+    /// <summary>Slope from which on Newton steps are tried.</summary>
+    private const double GreatestNewtonSlope = 0.1;
+
+    /// <summary>Step of the differences of the gradient, as a share of the change in a parameter that would outweigh the residuals.</summary>
+    private const double Difference = 1e-4;
 
     private const double FirstDamping = 1e-3;
     private const double LeastDamping = 1e-15;
@@ -60,7 +70,7 @@ internal static class GaussNewton
         var trial = work[(size - width)..];
 
         now.At(model, parameters);
-        var damping = FirstDamping;
+        var (damping, newtonBelow, isNewton) = (FirstDamping, GreatestNewtonSlope, false);
         for (var tried = 0; tried < mostSteps; tried++)
         {
             if (now.Slope <= RightAngle)
@@ -68,8 +78,17 @@ internal static class GaussNewton
                 return new(true, now.Sum, tried);
             }
 
-            now.WriteDampedSystem(damping, matrix, side);
-            if (LeastSquares.Solve(matrix, side, step))
+            if (isNewton)
+            {
+                now.WriteNewtonSystem(model, parameters, ref next, trial, matrix, side);
+            }
+            else
+            {
+                now.WriteDampedSystem(damping, matrix, side);
+            }
+
+            var systemRows = isNewton ? width : rows;
+            if (LeastSquares.Solve(matrix[..(systemRows * width)], side[..systemRows], step))
             {
                 if (!Move(parameters, step, longestStep, trial))
                 {
@@ -79,22 +98,29 @@ internal static class GaussNewton
                 next.At(model, trial);
                 if (next.IsBetterThan(now))
                 {
+                    damping = isNewton ? damping : Math.Max(damping / 10, LeastDamping);
+                    isNewton |= next.Slope > Slow * now.Slope && next.Slope < newtonBelow;
                     trial.CopyTo(parameters);
                     var former = now;
                     now = next;
                     next = former;
-                    damping = Math.Max(damping / 10, LeastDamping);
                     continue;
                 }
             }
 
-            if (damping > GreatestDamping)
+            if (isNewton)
+            {
+                (isNewton, newtonBelow) = (false, now.Slope / 2);
+            }
+            else if (damping > GreatestDamping)
             {
                 // The step is down to rounding and nothing improves: as stationary as the arithmetic allows.
                 return new(true, now.Sum, tried);
             }
-
-            damping *= 10;
+            else
+            {
+                damping *= 10;
+            }
         }
 
         return new(false, now.Sum, mostSteps);
@@ -139,9 +165,9 @@ internal static class GaussNewton
             model.Evaluate(parameters, residuals, jacobian);
             Sum = LeastSquares.Dot(residuals, residuals);
             Slope = 0;
-            for (var column = jacobian; column.Length > 0; column = column[count..])
+            for (var j = 0; j < parameters.Length; j++)
             {
-                var (along, length) = (LeastSquares.Dot(column[..count], residuals), LeastSquares.Length(column[..count]));
+                var (along, length) = (LeastSquares.Dot(Column(j), residuals), LeastSquares.Length(Column(j)));
                 Slope = along == 0 ? Slope : Math.Max(Slope, Math.Abs(along) / (length * Math.Sqrt(Sum)));
             }
         }
@@ -149,6 +175,47 @@ internal static class GaussNewton
         /// <summary>Whether the sum is less or, where sums differ by rounding only, the slope.</summary>
         public readonly bool IsBetterThan(in Evaluation other) =>
             Sum < other.Sum * (1 - RoundingOfSum) || (Sum <= other.Sum * (1 + RoundingOfSum) && Slope < other.Slope);
+
+        /// <summary>Newton's equations: the second derivatives by central differences of the gradient, and the gradient to be cancelled.</summary>
+        /// <param name="model">The model.</param>
+        /// <param name="parameters">Where this evaluation stands.</param>
+        /// <param name="beside">Room for an evaluation beside it.</param>
+        /// <param name="place">Room for its parameters.</param>
+        /// <param name="matrix">Gets the second derivatives, column by column.</param>
+        /// <param name="side">Gets the gradient, sign turned.</param>
+        public readonly void WriteNewtonSystem<TModel>(
+            in TModel model, ReadOnlySpan<double> parameters, ref Evaluation beside, Span<double> place, Span<double> matrix, Span<double> side)
+            where TModel : IResiduals, allows ref struct
+        {
+            var width = parameters.Length;
+            parameters.CopyTo(place);
+            for (var j = 0; j < width; j++)
+            {
+                var h = Difference * Math.Sqrt(Sum) / LeastSquares.Length(Column(j));
+                var column = matrix.Slice(j * width, width);
+                column.Clear();
+                place[j] = parameters[j] + h;
+                beside.At(model, place);
+                beside.AddGradient(1 / (2 * h), column);
+                place[j] = parameters[j] - h;
+                beside.At(model, place);
+                beside.AddGradient(-1 / (2 * h), column);
+                place[j] = parameters[j];
+            }
+
+            side.Clear();
+            AddGradient(-1, side[..width]);
+        }
+
+        private readonly void AddGradient(double scale, Span<double> sum)
+        {
+            for (var j = 0; j < sum.Length; j++)
+            {
+                sum[j] += scale * LeastSquares.Dot(Column(j), residuals);
+            }
+        }
+
+        private readonly ReadOnlySpan<double> Column(int j) => jacobian.Slice(j * count, count);
 
         /// <summary>The linear problem of the next step: the residuals to be cancelled, and a row a parameter that holds it back.</summary>
         public readonly void WriteDampedSystem(double damping, Span<double> matrix, Span<double> side)
@@ -163,7 +230,7 @@ internal static class GaussNewton
             var width = jacobian.Length / count;
             for (var j = 0; j < width; j++)
             {
-                var column = jacobian.Slice(j * count, count);
+                var column = Column(j);
                 var target = matrix.Slice(j * side.Length, side.Length);
                 column.CopyTo(target);
                 target[count + j] = Math.Sqrt(damping) * LeastSquares.Length(column);

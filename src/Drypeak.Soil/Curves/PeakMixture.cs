@@ -80,7 +80,14 @@ internal readonly ref struct PeakMixture
             masses[i / LegShapes.Pairs.Length] += nodes[i].Weight;
         }
 
-        return (Quantile(masses, LowerTail), Quantile(masses, 1 - UpperTail));
+        var whole = OfModeBelow(points.Wettest) - OfModeBelow(points.Driest);
+        for (var place = 0; place < masses.Length; place++)
+        {
+            var (left, right) = Cell(place);
+            whole += masses[place] * (right - left) / PeakNodes.Spacing(points);
+        }
+
+        return (Quantile(masses, whole, LowerTail), Quantile(masses, whole, 1 - UpperTail));
     }
 
     /// <summary>Weight of a pair of leg shapes, in the units of <see cref="Total"/>.</summary>
@@ -199,22 +206,40 @@ internal readonly ref struct PeakMixture
     /// The water content below which a share of the posterior lies: a place's mass spread evenly over its cell, the mode's as its normal,
     /// both cut off at the ends of the tested range.
     /// </summary>
-    private double Quantile(ReadOnlySpan<double> masses, double share)
+    private double Quantile(ReadOnlySpan<double> masses, double whole, double share)
     {
         var spacing = PeakNodes.Spacing(points);
-        var toGo = share * Below(masses, spacing, points.Wettest);
-        var (lower, upper) = (points.Driest, points.Wettest);
-
-        // Halve until no digit is left: the distribution is continuous and rises.
-        while (true)
+        var (toGo, below) = ((share * whole) + OfModeBelow(points.Driest), 0.0);
+        for (var place = 0; place < masses.Length; place++)
         {
-            var middle = lower + ((upper - lower) / 2);
-            if (middle <= lower || middle >= upper)
+            var (left, right) = Cell(place);
+            var slope = masses[place] / spacing;
+            if (left < right && below + (slope * (right - left)) + OfModeBelow(right) >= toGo)
             {
-                return middle;
+                return Crossing(left, right, below, slope, toGo);
             }
 
-            if (Below(masses, spacing, middle) < toGo)
+            below += slope * (right - left);
+        }
+
+        return points.Wettest;
+    }
+
+    /// <summary>The cell of a place, cut off at the ends of the tested range; empty beyond them.</summary>
+    private (double Left, double Right) Cell(int place)
+    {
+        var (center, half) = (nodes[place * LegShapes.Pairs.Length].Peak, PeakNodes.Spacing(points) / 2);
+        var left = Math.Clamp(center - half, points.Driest, points.Wettest);
+        return (left, Math.Clamp(center + half, left, points.Wettest));
+    }
+
+    /// <summary>Halves a cell until no digit is left: the distribution is continuous and rises.</summary>
+    private double Crossing(double left, double right, double below, double slope, double toGo)
+    {
+        var (lower, upper) = (left, right);
+        while (lower + ((upper - lower) / 2) is var middle && middle > lower && middle < upper)
+        {
+            if (below + (slope * (middle - left)) + OfModeBelow(middle) < toGo)
             {
                 lower = middle;
             }
@@ -223,28 +248,14 @@ internal readonly ref struct PeakMixture
                 upper = middle;
             }
         }
+
+        return upper;
     }
 
-    private double Below(ReadOnlySpan<double> masses, double spacing, double waterContent)
-    {
-        var sum = 0.0;
-        for (var place = 0; place < masses.Length; place++)
-        {
-            var left = nodes[place * LegShapes.Pairs.Length].Peak - (spacing / 2);
-            if (left >= waterContent)
-            {
-                break;
-            }
-
-            var from = Math.Max(left, points.Driest);
-            sum += masses[place] * Math.Max(0, Math.Min(waterContent, left + spacing) - from) / spacing;
-        }
-
-        return Saturation?.Peak is { } top ? sum + (SaturationWeight * (Below(top, waterContent) - Below(top, points.Driest))) : sum;
-    }
-
-    private static double Below(in PeakEstimate peak, double waterContent) =>
-        0.5 * SpecialFunctions.Erfc((peak.WaterContent - waterContent) / Math.Sqrt(2 * peak.WaterContentVariance));
+    /// <summary>Mass of the mode below a water content, as a normal.</summary>
+    private double OfModeBelow(double waterContent) => Saturation?.Peak is { } top
+        ? SaturationWeight * 0.5 * SpecialFunctions.Erfc((top.WaterContent - waterContent) / Math.Sqrt(2 * top.WaterContentVariance))
+        : 0;
 
     private static double Square(double value) => value * value;
 }

@@ -153,12 +153,13 @@ internal static class PeakNodes
     {
         public static LevelPrior At(TestedPoints points, double peak)
         {
-            if (points.SpecificGravity is null)
+            if (points.SpecificGravity is not { } gs)
             {
                 return new(0, 1 / (LevelDeviation * LevelDeviation));
             }
 
-            var solidsAndWater = points.ZeroAirVoids(peak);
+            // A place of the grid may lie below no water at all; the line must not run away there.
+            var solidsAndWater = points.ZeroAirVoids(Math.Max(peak, -0.5 / gs));
             var deviation = AirVoidsDeviation * solidsAndWater;
             return new(((1 - AirVoids) * solidsAndWater) - points.HighestDensity, 1 / (deviation * deviation));
         }

@@ -13,13 +13,14 @@ internal sealed class Polynomial : ICurve
     private readonly double[] coefficients;
     private readonly double[] inverse;
 
-    private Polynomial(TestedPoints points, int degree)
+    private Polynomial(double[] waterContents, double[] densities, int degree)
     {
-        (middle, half) = ((points.Driest + points.Wettest) / 2, points.Range / 2);
-        mean = points.Densities.Average();
+        var (driest, wettest) = (waterContents.Min(), waterContents.Max());
+        (middle, half) = ((driest + wettest) / 2, (wettest - driest) / 2);
+        mean = densities.Average();
         coefficients = new double[degree + 1];
         inverse = new double[coefficients.Length * coefficients.Length];
-        DegreesOfFreedom = points.Count - coefficients.Length;
+        DegreesOfFreedom = densities.Length - coefficients.Length;
     }
 
     /// <summary>Points less coefficients.</summary>
@@ -32,10 +33,14 @@ internal sealed class Polynomial : ICurve
     public ReadOnlySpan<double> Coefficients => coefficients;
 
     /// <summary>Fits, or returns null where the water contents are too few or too near for the degree.</summary>
-    public static Polynomial? Fit(TestedPoints points, int degree)
+    public static Polynomial? Fit(TestedPoints points, int degree) =>
+        points.DistinctCount > degree ? Fit(points.WaterContents, points.Densities, degree) : null;
+
+    /// <summary>Fits any values, or returns null where the water contents are too few or too near for the degree.</summary>
+    public static Polynomial? Fit(double[] waterContents, double[] densities, int degree)
     {
-        var fit = new Polynomial(points, degree);
-        return points.DistinctCount > degree && fit.Solve(points) ? fit : null;
+        var fit = new Polynomial(waterContents, densities, degree);
+        return fit.Solve(waterContents, densities) ? fit : null;
     }
 
     /// <summary>t of a water content.</summary>
@@ -104,27 +109,34 @@ internal sealed class Polynomial : ICurve
         return LeaveOneOut.From(points, predictions, []);
     }
 
+    /// <summary>The coefficient of w^k, w unscaled, with its standard error (not a number where no degree of freedom is left).</summary>
+    public (double Value, double StandardError) Unscaled(int k)
+    {
+        // ((w − middle)/half)^j holds C(j, k)·(−middle)^(j−k)/half^j of w^k.
+        Span<double> weights = stackalloc double[coefficients.Length];
+        weights.Clear();
+        var value = k == 0 ? mean : 0;
+        double binomial = 1;
+        for (var j = k; j < coefficients.Length; j++)
+        {
+            weights[j] = binomial * Math.Pow(-middle, j - k) / Math.Pow(half, j);
+            value += weights[j] * coefficients[j];
+            binomial = binomial * (j + 1) / (j + 1 - k);
+        }
+
+        return (value, Math.Sqrt(NoiseVariance * UnitVariance(weights)));
+    }
+
     /// <summary>The coefficients for water content in %, densities in kg/m³, with standard errors.</summary>
     public CurveParameter[] Parameters()
     {
         var parameters = new CurveParameter[coefficients.Length];
-        Span<double> weights = stackalloc double[coefficients.Length];
         for (var k = 0; k < parameters.Length; k++)
         {
-            // (w/half − middle/half)^j holds C(j, k)·(−middle)^(j−k)/half^j of w^k.
-            weights.Clear();
-            var value = k == 0 ? mean : 0;
-            double binomial = 1;
-            for (var j = k; j < parameters.Length; j++)
-            {
-                weights[j] = binomial * Math.Pow(-middle, j - k) / Math.Pow(half, j) / Math.Pow(100, k);
-                value += weights[j] * coefficients[j];
-                binomial = binomial * (j + 1) / (j + 1 - k);
-            }
-
-            double? error = DegreesOfFreedom > 0 ? TestedPoints.ToKilograms(Math.Sqrt(NoiseVariance * UnitVariance(weights))) : null;
+            var (value, error) = Unscaled(k);
             var (name, unit, meaning) = Names[k];
-            parameters[k] = new(name, TestedPoints.ToKilograms(value), unit, error, meaning);
+            var scale = TestedPoints.ToKilograms(1) / Math.Pow(100, k);
+            parameters[k] = new(name, scale * value, unit, DegreesOfFreedom > 0 ? scale * error : null, meaning);
         }
 
         return parameters;
@@ -145,9 +157,9 @@ internal sealed class Polynomial : ICurve
             : null;
     }
 
-    private bool Solve(TestedPoints points)
+    private bool Solve(double[] waterContents, double[] densities)
     {
-        var (rows, columns) = (points.Count, coefficients.Length);
+        var (rows, columns) = (densities.Length, coefficients.Length);
         var size = rows * (columns + 1);
         Span<double> work = size <= 512 ? stackalloc double[size] : new double[size];
         var matrix = work[..(rows * columns)];
@@ -155,13 +167,13 @@ internal sealed class Polynomial : ICurve
         Span<double> powers = stackalloc double[columns];
         for (var i = 0; i < rows; i++)
         {
-            Powers(Scaled(points.WaterContents[i]), powers);
+            Powers(Scaled(waterContents[i]), powers);
             for (var k = 0; k < columns; k++)
             {
                 matrix[(k * rows) + i] = powers[k];
             }
 
-            side[i] = points.Densities[i] - mean;
+            side[i] = densities[i] - mean;
         }
 
         if (!LeastSquares.Solve(matrix, side, coefficients))

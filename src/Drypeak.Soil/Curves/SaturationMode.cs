@@ -57,14 +57,13 @@ internal sealed class SaturationMode
     private readonly double[] parameters = new double[Parameters];
     private readonly double[] inverse = new double[Parameters * Parameters];
 
-    private SaturationMode(TestedPoints points, double specificGravity, in SaturationPrior prior)
+    private SaturationMode(TestedPoints points, double specificGravity, in SaturationPrior prior, ReadOnlySpan<double> start)
     {
-        SaturationPrior.Centers(points.Wettest, parameters);
+        start.CopyTo(parameters);
         var residuals = new Residuals(points, specificGravity, prior);
         SumOfSquares = GaussNewton.Minimize(residuals, parameters, LongestStep, MostSteps).SumOfSquares;
         LogDeterminant = residuals.InvertInformation(parameters, inverse);
         Curve = new LiSegoCurve(parameters, specificGravity, points.WaterDensity);
-        Peak = FindPeak(points);
     }
 
     public LiSegoCurve Curve { get; }
@@ -79,10 +78,21 @@ internal sealed class SaturationMode
     public double LogDeterminant { get; }
 
     /// <summary>The highest place of the curve over the tested range, or null where that is at an end.</summary>
-    public PeakEstimate? Peak { get; }
+    public PeakEstimate? Peak { get; private set; }
 
-    public static SaturationMode Of(TestedPoints points, double specificGravity, in SaturationPrior prior) =>
-        new(points, specificGravity, prior);
+    /// <summary>Fits the points from the priors' centers.</summary>
+    public static SaturationMode Of(TestedPoints points, double specificGravity, in SaturationPrior prior)
+    {
+        Span<double> centers = stackalloc double[Parameters];
+        SaturationPrior.Centers(points.Wettest, centers);
+        var mode = new SaturationMode(points, specificGravity, prior, centers);
+        mode.Peak = mode.FindPeak(points);
+        return mode;
+    }
+
+    /// <summary>Fits other points from where this fit ended, without looking for a peak.</summary>
+    public SaturationMode Refit(TestedPoints others, double specificGravity, in SaturationPrior prior) =>
+        new(others, specificGravity, prior, parameters);
 
     /// <summary>Variance of a function of the parameters with this gradient.</summary>
     public double Variance(ReadOnlySpan<double> gradient) => LeastSquares.Variance(inverse, gradient);

@@ -10,6 +10,9 @@ internal static class SaturationModel
     private static readonly SaturationPrior Prior = new(0.45, 0.2, 0.8, 0.8, 0.010);
 
     public const string NoSpecificGravity = "The specific gravity is missing: the saturation model needs it to turn saturation into density.";
+    /// <summary>Up to so many points the leave-one-out predictions are refits.</summary>
+    private const int MostRefits = 12;
+
     private const string NoPeak = "The curve has no maximum inside the tested range.";
 
     /// <summary>Fits the points, at least <see cref="AveragedModel.FewestPoints"/> and with a range.</summary>
@@ -22,7 +25,7 @@ internal static class SaturationModel
 
         var mode = SaturationMode.Of(points, gs, Prior);
         var drawing = CurveDrawing.Of(points, mode.Curve, mode.Peak?.WaterContent);
-        var predictions = Predictions(points, mode);
+        var predictions = Predictions(points, gs, mode);
         return new()
         {
             Model = CurveModel.Saturation,
@@ -39,19 +42,26 @@ internal static class SaturationModel
         };
     }
 
+    /// <summary>The peak alone.</summary>
+    public static PeakEstimate? PeakOf(TestedPoints points) =>
+        points.SpecificGravity is { } gs ? SaturationMode.Of(points, gs, Prior).Peak : null;
+
     /// <summary>
-    /// Each point from the others to first order about the mode: the misfit over 1 − h, with the leverage h that the point has beside the priors.
+    /// Each point from the others: by refits where the points are few and each may carry the curve; where they are many, to first order about the
+    /// mode, by the misfit over 1 − h with the leverage h that the point has beside the priors.
     /// </summary>
-    private static LeaveOneOut Predictions(TestedPoints points, SaturationMode mode)
+    private static LeaveOneOut Predictions(TestedPoints points, double gs, SaturationMode mode)
     {
         Span<double> gradient = stackalloc double[LiSegoCurve.Parameters];
         var (predictions, deviations) = (new double[points.Count], new double[points.Count]);
         for (var i = 0; i < points.Count; i++)
         {
-            var misfit = points.Densities[i] - mode.Curve.Density(points.WaterContents[i], gradient);
-            var free = 1 - (mode.Variance(gradient) / (Prior.Noise * Prior.Noise));
-            predictions[i] = points.Densities[i] - (misfit / free);
-            deviations[i] = Prior.Noise / Math.Sqrt(free);
+            var isRefitted = points.Count <= MostRefits;
+            var fit = isRefitted ? mode.Refit(points.Without(i), gs, Prior) : mode;
+            var density = fit.Curve.Density(points.WaterContents[i], gradient);
+            var relative = fit.Variance(gradient) / (Prior.Noise * Prior.Noise);
+            predictions[i] = isRefitted ? density : points.Densities[i] - ((points.Densities[i] - density) / (1 - relative));
+            deviations[i] = Prior.Noise * Math.Sqrt(isRefitted ? 1 + relative : 1 / (1 - relative));
         }
 
         return LeaveOneOut.From(points, predictions, deviations);

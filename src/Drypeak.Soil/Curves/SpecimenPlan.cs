@@ -24,8 +24,11 @@ internal static class SpecimenPlan
     /// <summary>A water content nearer than this to one tested repeats it.</summary>
     private const double Repeats = 0.0025;
 
-    /// <summary>With the peak bracketed, a specimen that would lessen the standard uncertainty by less than this share is not asked for.</summary>
-    private const double LeastGain = 0.05;
+    /// <summary>
+    /// With the peak bracketed, a specimen that would lessen the standard uncertainty by less than this is not asked for: 0.025 % water, by which an
+    /// interval of four standard uncertainties shortens by the 0.1 % to which an optimum is reported.
+    /// </summary>
+    private const double LeastGain = 0.00025;
 
     private const int EnoughOnASide = 2;
 
@@ -33,7 +36,7 @@ internal static class SpecimenPlan
     private const int MostCandidates = 64;
 
     /// <summary>Nodes less probable than this, relative to the best, change no digit of the plan.</summary>
-    private const double Negligible = 1e-9;
+    private const double Negligible = 1e-6;
 
     /// <summary>The plan for points through which no curve can be drawn yet.</summary>
     public static NextSpecimen Start(TestedPoints points)
@@ -59,7 +62,7 @@ internal static class SpecimenPlan
         var window = Window.For(mixture.Peak.WaterContent, drier, points.Count - drier);
         var now = Math.Sqrt(mixture.OfNodes.WaterContentVariance);
         var (best, after) = Best(points, nodes, mixture.OfNodes, window);
-        if (window.IsBracketed && after > (1 - LeastGain) * now)
+        if (window.IsBracketed && now - after < LeastGain)
         {
             return null;
         }

@@ -17,15 +17,12 @@ internal sealed class TestedPoints
     private readonly int[] places;
 
     public TestedPoints(CompactionData data)
+        : this(Sorted(data.Points), data.SpecificGravity, data.WaterDensity / KilogramsInMegagram)
     {
-        var points = data.Points;
-        var sorted = new (double W, double Y, int Place)[points.Count];
-        for (var i = 0; i < sorted.Length; i++)
-        {
-            sorted[i] = (points[i].WaterContent, points[i].DryDensity / KilogramsInMegagram, i);
-        }
+    }
 
-        Array.Sort(sorted);
+    private TestedPoints((double W, double Y, int Place)[] sorted, double? specificGravity, double waterDensity)
+    {
         WaterContents = new double[sorted.Length];
         Densities = new double[sorted.Length];
         places = new int[sorted.Length];
@@ -35,8 +32,8 @@ internal sealed class TestedPoints
         }
 
         Distinct = NumberDistinct(WaterContents);
-        WaterDensity = data.WaterDensity / KilogramsInMegagram;
-        SpecificGravity = data.SpecificGravity;
+        WaterDensity = waterDensity;
+        SpecificGravity = specificGravity;
         HighestDensity = Densities.Max();
         for (var i = 0; i < Count && !AnyAboveZeroAirVoids; i++)
         {
@@ -86,6 +83,19 @@ internal sealed class TestedPoints
     public bool IsAboveZeroAirVoids(double waterContent, double density) =>
         density > ZeroAirVoids(waterContent) * (1 + Rounding);
 
+    /// <summary>The points but one.</summary>
+    public TestedPoints Without(int left)
+    {
+        var kept = new (double W, double Y, int Place)[Count - 1];
+        for (var i = 0; i < kept.Length; i++)
+        {
+            var from = i < left ? i : i + 1;
+            kept[i] = (WaterContents[from], Densities[from], i);
+        }
+
+        return new(kept, SpecificGravity, WaterDensity);
+    }
+
     /// <summary>Mg/m³ to kg/m³.</summary>
     public static double ToKilograms(double density) => density * KilogramsInMegagram;
 
@@ -106,6 +116,18 @@ internal sealed class TestedPoints
 
     /// <summary>How many water contents can be told apart.</summary>
     public int DistinctCount => Distinct[^1] + 1;
+
+    private static (double W, double Y, int Place)[] Sorted(IReadOnlyList<CompactionPoint> points)
+    {
+        var sorted = new (double W, double Y, int Place)[points.Count];
+        for (var i = 0; i < sorted.Length; i++)
+        {
+            sorted[i] = (points[i].WaterContent, points[i].DryDensity / KilogramsInMegagram, i);
+        }
+
+        Array.Sort(sorted);
+        return sorted;
+    }
 
     private static int[] NumberDistinct(ReadOnlySpan<double> waterContents)
     {

@@ -1,4 +1,5 @@
 using System.Net;
+using System.Net.Sockets;
 using System.Text;
 using System.Text.Json;
 using Drypeak.Service.Hosting;
@@ -119,6 +120,8 @@ public sealed class HttpTests : IAsyncLifetime
     [InlineData("GET", "/failure", 500)]
     [InlineData("GET", "/health/live", 200)]
     [InlineData("GET", "/health/ready", 200)]
+    [InlineData("HEAD", "/health/ready", 200)]
+    [InlineData("HEAD", "/openapi/v1.json", 200)]
     [InlineData("GET", "/kept", 200)]
     [InlineData("GET", "/openapi/v1.json", 200)]
     [InlineData("GET", "/reference/index.html", 200)]
@@ -209,6 +212,19 @@ public sealed class HttpTests : IAsyncLifetime
         Assert.Equal(CachedBytes.ForEver, Header(response, "Cache-Control"));
         Assert.Equal("Accept", Header(response, "Vary"));
         Assert.Equal(status == 200 ? "kept" : "", await response.Content.ReadAsStringAsync(Stop));
+    }
+
+    [Fact]
+    public async Task A_body_that_breaks_the_protocol_is_a_problem_too()
+    {
+        using var connection = new TcpClient();
+        await connection.ConnectAsync(IPAddress.Loopback, service.Client.BaseAddress!.Port, Stop);
+        var stream = connection.GetStream();
+        await stream.WriteAsync("POST /weighings HTTP/1.1\r\nHost: a\r\nContent-Type: application/json\r\nTransfer-Encoding: chunked\r\n\r\nno number\r\n"u8.ToArray(), Stop);
+        using var reader = new StreamReader(stream);
+        var answer = await reader.ReadToEndAsync(Stop);
+        Assert.StartsWith("HTTP/1.1 400 ", answer, StringComparison.Ordinal);
+        Assert.Contains(ProblemKind.BadRequest.Uri, answer, StringComparison.Ordinal);
     }
 
     private static HttpRequestMessage Post(byte[] body, string? contentType)

@@ -55,8 +55,7 @@ public sealed class AveragedCheckValues
     {
         var points = new TestedPoints(A);
         Span<PeakNode> nodes = stackalloc PeakNode[PeakNodes.Count];
-        PeakNodes.Fill(points, nodes);
-        var mixture = new PeakMixture(points, nodes, SaturationMode.Of(points, 2.70, AveragedModel.Prior));
+        var mixture = AveragedModel.Weigh(points, nodes);
         Near(14.221554, 100 * mixture.OfNodes.WaterContent, 6);
         Near(1.858898, mixture.OfNodes.Density, 6);
         Near(14.227515, 100 * mixture.Saturation!.Peak!.Value.WaterContent, 6);
@@ -98,8 +97,7 @@ public sealed class AveragedCheckValues
 
         var points = new TestedPoints(E);
         Span<PeakNode> nodes = stackalloc PeakNode[PeakNodes.Count];
-        PeakNodes.Fill(points, nodes);
-        var mixture = new PeakMixture(points, nodes, SaturationMode.Of(points, 2.70, AveragedModel.Prior));
+        var mixture = AveragedModel.Weigh(points, nodes);
         Near(13.535524, 100 * mixture.Peak.WaterContent, 6);
         Near(0.02294, mixture.UpperTail, 5);
     }

@@ -10,6 +10,11 @@ public static class ApiReference
     /// <summary>The page; everything it needs is in the program.</summary>
     public const string Address = "/reference";
 
+    private const string StyleSheetAddress = Address + "/drypeak.css";
+
+    /// <summary>There is one document: no bar to choose it from.</summary>
+    private static readonly byte[] StyleSheet = ".swagger-ui .topbar { display: none; }\n"u8.ToArray();
+
     internal static void AddApiDescription(this IServiceCollection services)
     {
         services.AddEndpointsApiExplorer();
@@ -20,13 +25,18 @@ public static class ApiReference
 
     internal static void Use(WebApplication app)
     {
-        app.MapGet(ApiDescription.Address, Document).WithTags("Description")
+        app.MapRead(ApiDescription.Address, Document).WithTags("Description")
             .Gives<JsonObject>("application/json", """{ "openapi": "3.1.1" }""");
+        app.MapRead(StyleSheetAddress, () => new CachedBytes(StyleSheet, "text/css") { CacheControl = CachedBytes.Revalidated })
+            .ExcludeFromDescription();
         app.UseSwaggerUI(page =>
         {
             page.RoutePrefix = Address.TrimStart('/');
             page.DocumentTitle = "Drypeak: API reference";
             page.SwaggerEndpoint(ApiDescription.Address, "Drypeak v1");
+            page.InjectStylesheet(StyleSheetAddress);
+            page.EnableDeepLinking();
+            page.DefaultModelsExpandDepth(0);
         });
     }
 
@@ -61,8 +71,11 @@ public static class ApiReference
         options.NonNullableReferenceTypesAsRequired();
         options.UseAllOfToExtendReferenceSchemas();
         options.MapType<JsonObject>(() => new OpenApiSchema { Type = JsonSchemaType.Object });
+        // HEAD is GET without the body (RFC 9110, section 9.3.2): describing it would say everything twice.
+        options.DocInclusionPredicate((_, api) => api.HttpMethod != HttpMethods.Head);
         options.OperationFilter<DescribedOperation>();
         options.DocumentFilter<NullableReferences>();
         options.IncludeXmlComments(typeof(ApiReference).Assembly);
+        options.IncludeXmlComments(typeof(Fault).Assembly);
     }
 }

@@ -3,6 +3,10 @@ namespace Drypeak.Service.Hosting;
 /// <summary>What an endpoint says of itself in the API description, where its signature does not: it reads its body itself.</summary>
 public static class EndpointDescription
 {
+    /// <summary>An address to read from, by GET and, as RFC 9110, section 9.1, asks, by HEAD.</summary>
+    public static RouteHandlerBuilder MapRead(this IEndpointRouteBuilder endpoints, string pattern, Delegate handler) =>
+        endpoints.MapMethods(pattern, [HttpMethods.Get, HttpMethods.Head], handler);
+
     /// <summary>The request's body, with a whole example that the endpoint accepts.</summary>
     public static RouteHandlerBuilder Takes<T>(this RouteHandlerBuilder endpoint, string mediaType, string example) =>
         endpoint.WithMetadata(new Body(0, mediaType, typeof(T), example));
