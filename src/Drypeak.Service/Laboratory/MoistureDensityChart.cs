@@ -1,0 +1,58 @@
+using Drypeak.Figures;
+using Drypeak.Soil.Curves;
+using Drypeak.Soil.Laboratory;
+using Drypeak.Soil.Quantities;
+using Drypeak.Soil.TestMethods;
+
+namespace Drypeak.Service.Laboratory;
+
+/// <summary>What the chart of a laboratory test shows.</summary>
+internal static class MoistureDensityChart
+{
+    /// <summary>Digits of the drawn curve and of intervals: finer than any picture, and short in an address.</summary>
+    private const int DrawnDigits = 6;
+
+    public static CompactionChart Of(MoistureDensityRequest request, MoistureDensityTest test, MoistureDensityResult result)
+    {
+        var unit = test.Units.Density;
+        return new CompactionChart
+        {
+            Reference = request.Reference,
+            DensityUnit = unit,
+            Specimens = [.. result.Specimens.Select(specimen => new ChartSpecimen(
+                specimen.WaterContent.Percent, specimen.DryDensity.In(unit), specimen.Label, specimen.SetAside is { }))],
+            Curve = [.. (result.Curve?.Chosen.Curve ?? []).Select(point => new ChartPoint(
+                Drawn(point.WaterContent * 100), Drawn(new Density(point.DryDensity).In(unit))))],
+            Optimum = result.Optimum is { } optimum ? Peak(test, optimum) : null,
+            Adopted = test.Adopted is { } adopted ? Peak(test, adopted.WaterContent, adopted.MaximumDryDensity) : null,
+            Corrected = result.Corrected is { } corrected ? Peak(test, corrected.WaterContent, corrected.DryDensity) : null,
+            SpecificGravity = test.SpecificGravity?.Value,
+            WaterDensity = test.SpecificGravity is { } ? test.WaterDensity.KilogramsPerCubicMeter : null,
+            Saturation = request.Lines?.Saturation ?? [],
+            AirVoids = request.Lines?.AirVoids ?? [],
+            NextSpecimen = result.Curve?.Next is { } next ? Drawn(next.WaterContent * 100) : null,
+        };
+    }
+
+    private static ChartOptimum Peak(MoistureDensityTest test, FittedOptimum optimum) =>
+        Peak(test, new WaterContent(optimum.WaterContent.Value), new Density(optimum.MaximumDryDensity.Value)) with
+        {
+            WaterContentInterval = optimum.WaterContent is { Lower: { } driest, Upper: { } wettest }
+                ? [Drawn(driest * 100), Drawn(wettest * 100)]
+                : null,
+            MaximumDryDensityInterval = optimum.MaximumDryDensity is { Lower: { } least, Upper: { } greatest }
+                ? [Drawn(new Density(least).In(test.Units.Density)), Drawn(new Density(greatest).In(test.Units.Density))]
+                : null,
+        };
+
+    private static ChartOptimum Peak(MoistureDensityTest test, WaterContent w, Density density) => new(
+        w.Percent,
+        density.In(test.Units.Density),
+        Reporting.WaterContent(test.Method, w),
+        Reporting.DryDensity(test.Method, density, test.Units.Density),
+        null,
+        null);
+
+    private static double Drawn(double value) =>
+        value == 0 ? 0 : Math.Round(value, Math.Clamp(DrawnDigits - 1 - (int)Math.Floor(Math.Log10(Math.Abs(value))), 0, 15));
+}

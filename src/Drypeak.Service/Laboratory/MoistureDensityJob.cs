@@ -1,0 +1,225 @@
+using Drypeak.Figures;
+using Drypeak.Service.Charts;
+using Drypeak.Service.Contracts;
+using Drypeak.Service.Hosting;
+using Drypeak.Soil.Curves;
+using Drypeak.Soil.Laboratory;
+using Drypeak.Soil.Laboratory.Workings;
+using Drypeak.Soil.Phases;
+using Drypeak.Soil.Quantities;
+using Drypeak.Soil.TestMethods;
+
+namespace Drypeak.Service.Laboratory;
+
+/// <summary>A laboratory test computed: what is answered, and what its chart shows.</summary>
+internal sealed record MoistureDensityOutcome(MoistureDensityAnswer Answer, CompactionChart Chart);
+
+/// <summary>The laboratory test from contract to contract. The endpoint, the page and a batch line all call this.</summary>
+internal sealed class MoistureDensityJob(Limits limits)
+{
+    private readonly MoistureDensityRules _rules = new(limits);
+
+    private const int LinePoints = 41;
+    private const double Coverage = 0.95;
+
+    /// <summary>Every broken rule; empty where the request can be computed.</summary>
+    public IReadOnlyList<Fault> Check(MoistureDensityRequest request) => _rules.Check(request);
+
+    /// <summary>Computes a request that passed <see cref="Check"/>.</summary>
+    public MoistureDensityOutcome Compute(MoistureDensityRequest request)
+    {
+        var (test, result) = Analyze(request);
+        var specimens = result.Specimens;
+        var chart = MoistureDensityChart.Of(request, test, result);
+        var links = ChartAddress.LinksFor(ChartAddress.MoistureDensity, chart, limits.AddressBytes);
+        var findings = result.Findings.Select(FindingContract.Of);
+        if (links is { Svg: null })
+        {
+            findings = findings.Append(FindingContract.Of(ChartAddress.TooLongForALink));
+        }
+
+        return new MoistureDensityOutcome(
+            new MoistureDensityAnswer
+            {
+                Reference = request.Reference,
+                Identification = request.Identification,
+                Method = MethodOf(test, specimens),
+                Units = test.Units.ToContract(),
+                Specimens = [.. specimens.Select(specimen => ToAnswer(specimen, test))],
+                Optimum = result.Optimum is { } optimum ? ToAnswer(optimum, test, result.Propagated) : null,
+                Adopted = test.Adopted is { } adopted
+                    ? new AdoptedAnswer(adopted.WaterContent.Percent, adopted.MaximumDryDensity.In(test.Units.Density), adopted.Reason, Reported(test, adopted.WaterContent, adopted.MaximumDryDensity))
+                    : null,
+                OversizeGiven = test.Oversize is { },
+                Corrected = result.Corrected is { } corrected
+                    ? new CorrectedAnswer(corrected.WaterContent.Percent, corrected.DryDensity.In(test.Units.Density), Reported(test, corrected.WaterContent, corrected.DryDensity))
+                    : null,
+                Curve = result.Curve is { } curve ? ToAnswer(curve, test, specimens) : null,
+                ZeroAirVoids = Line(test, specimens, w => PhaseRelations.OnZeroAirVoidsLine(w, test.SpecificGravity!.Value, test.WaterDensity)),
+                Lines = LinesOf(request.Lines, test, specimens),
+                NextSpecimen = result.Curve?.Next is { } next
+                    ? new NextSpecimenAnswer(Math.Round(next.WaterContent * 200) / 2, next.Reason, next.StandardUncertaintyNow * 100, next.StandardUncertaintyAfter * 100)
+                    : null,
+                Trace = request.Trace is true ? [.. Working.Of(test, result).Select(TraceStep.Of)] : null,
+                Findings = [.. findings],
+                Links = links,
+                Provenance = ProvenanceContract.Of(request),
+                Cautions = request.Specimens!.Any(specimen => specimen.Carbide is { })
+                    ? [.. Cautions.OfLaboratoryTest, Cautions.OfCarbideTester]
+                    : Cautions.OfLaboratoryTest,
+            },
+            chart);
+    }
+
+    /// <summary>The domain's result of a request that passed <see cref="Check"/>.</summary>
+    public static (MoistureDensityTest Test, MoistureDensityResult Result) Analyze(MoistureDensityRequest request)
+    {
+        var test = request.ToTest();
+        var faults = new List<Fault>();
+        var specimens = MoistureDensity.Reduce(test, faults).OfType<Specimen>().ToList();
+        return faults.Count == 0
+            ? (test, MoistureDensity.Analyze(test, specimens))
+            : throw new ArgumentException("The request does not keep the rules: " + faults[0].Message, nameof(request));
+    }
+
+    private static MethodAnswer? MethodOf(MoistureDensityTest test, IReadOnlyList<Specimen> specimens)
+    {
+        var volume = specimens.Select(specimen => specimen.MoldVolume).FirstOrDefault(volume => volume is { });
+        if (test.IsCustomMethod)
+        {
+            return new MethodAnswer(MoistureDensityMapping.CustomMethod, "The caller's own method", null, null,
+                test.CustomEffort is { } effort
+                    ? new EffortAnswer(
+                        volume is { } mold ? CompactiveEffort.Of(effort.Rammer, effort.Drop, effort.Layers, effort.BlowsPerLayer, mold).KilojoulesPerCubicMeter : null,
+                        null)
+                    : null);
+        }
+
+        return test.Method is { } method
+            ? new MethodAnswer(method.Code, method.Title, method.Summary, method.Standard,
+                new EffortAnswer(method.Effort?.KilojoulesPerCubicMeter, method.NominalEffort?.Value.KilojoulesPerCubicMeter))
+            : null;
+    }
+
+    private static SpecimenAnswer ToAnswer(Specimen specimen, MoistureDensityTest test)
+    {
+        var phases = specimen.PhasesWith(test.SpecificGravity?.Value, test.WaterDensity);
+        return new SpecimenAnswer(
+            specimen.Label,
+            specimen.WaterContent.Percent,
+            specimen.WetDensity.In(test.Units.Density),
+            specimen.DryDensity.In(test.Units.Density),
+            phases?.VoidRatio,
+            phases?.Porosity * 100,
+            phases?.Saturation * 100,
+            phases?.AirVoids * 100,
+            specimen.SetAside);
+    }
+
+    public static OptimumAnswer ToAnswer(FittedOptimum optimum, MoistureDensityTest test, PropagatedUncertainty? propagated)
+    {
+        var w = new WaterContent(optimum.WaterContent.Value);
+        var density = new Density(optimum.MaximumDryDensity.Value);
+        var unit = test.Units.Density.InKilogramsPerCubicMeter();
+        var saturation = test.SpecificGravity is { } gravity && PhaseRelations.VoidRatio(density, gravity.Value, test.WaterDensity) is (> 0 and var voidRatio)
+            ? PhaseRelations.Saturation(w, voidRatio, gravity.Value) * 100
+            : (double?)null;
+        var water = ToAnswer(optimum.WaterContent, 0.01);
+        var maximum = ToAnswer(optimum.MaximumDryDensity, unit);
+        return new OptimumAnswer(
+            w.Percent,
+            density.In(test.Units.Density),
+            saturation,
+            water is null && maximum is null ? null : new OptimumUncertaintyAnswer
+            {
+                WaterContent = water,
+                MaximumDryDensity = maximum,
+                Trials = propagated?.Trials,
+                Contributions = propagated is null
+                    ? null
+                    : [.. propagated.Contributions.Select(part => new ContributionAnswer(part.Quantity, part.Share, part.OfWaterContent, part.OfMaximumDryDensity))],
+            },
+            Reported(test, w, density));
+    }
+
+    private static UncertaintyAnswer? ToAnswer(Estimate estimate, double unit) => estimate.StandardUncertainty is { } standard
+        ? new UncertaintyAnswer(standard / unit, estimate is { Lower: { } lower, Upper: { } upper } ? [lower / unit, upper / unit] : null, Coverage)
+        : null;
+
+    private static ReportedAnswer Reported(MoistureDensityTest test, WaterContent w, Density density) =>
+        new(Reporting.WaterContent(test.Method, w), Reporting.DryDensity(test.Method, density, test.Units.Density));
+
+    private static CurveAnswer ToAnswer(CurveAnalysis curve, MoistureDensityTest test, IReadOnlyList<Specimen> specimens)
+    {
+        var unit = test.Units.Density.InKilogramsPerCubicMeter();
+        var chosen = curve.Chosen;
+        var kept = specimens.Where(specimen => specimen.SetAside is null).ToList();
+        return new CurveAnswer
+        {
+            Model = chosen.Model.Name(),
+            Chosen = curve.Why,
+            Parameters = chosen.Parameters.ToDictionary(
+                parameter => parameter.Name,
+                parameter => InCallersUnit(parameter, test.Units.Density)),
+            RootMeanSquareError = chosen.RootMeanSquareError / unit,
+            LeaveOneOutError = chosen.LeaveOneOutError / unit,
+            DegreesOfFreedom = chosen.DegreesOfFreedom,
+            ChanceOfPeakOutside = chosen.ChanceOfPeakOutside,
+            Residuals =
+            [
+                .. chosen.Fitted.Select((fitted, i) => new ResidualAnswer(
+                    kept[i].Label,
+                    fitted / unit,
+                    (kept[i].DryDensity.KilogramsPerCubicMeter - fitted) / unit,
+                    i < chosen.Predictions.Count ? chosen.Predictions[i].DryDensity / unit : null,
+                    i < chosen.Predictions.Count ? chosen.Predictions[i].StandardUncertainty / unit : null)),
+            ],
+            Points = [.. chosen.Curve.Select(point => new[] { point.WaterContent * 100, point.DryDensity / unit })],
+            Alternatives =
+            [
+                .. curve.Alternatives.Select(model => new AlternativeAnswer(
+                    model.Model.Name(),
+                    model.Admissible,
+                    model.WhyNot,
+                    model.Optimum is { } optimum ? ToAnswer(optimum, test, null) : null,
+                    model.RootMeanSquareError / unit,
+                    model.LeaveOneOutError / unit)),
+            ],
+        };
+    }
+
+    private static ParameterAnswer InCallersUnit(CurveParameter parameter, DensityUnit unit) => parameter.Unit == DensityUnit.KilogramPerCubicMeter.Symbol()
+        ? new ParameterAnswer(
+            new Density(parameter.Value).In(unit), unit.Symbol(),
+            parameter.StandardError is { } error ? new Density(error).In(unit) : null, parameter.Meaning)
+        : new ParameterAnswer(parameter.Value, parameter.Unit, parameter.StandardError, parameter.Meaning);
+
+    private static IReadOnlyList<LineAnswer> LinesOf(LinesRequest? lines, MoistureDensityTest test, IReadOnlyList<Specimen> specimens) =>
+        test.SpecificGravity is not { Value: var gravity } ? [] :
+        [
+            .. (lines?.Saturation ?? []).Select(percent => new LineAnswer("saturation", percent,
+                Line(test, specimens, w => PhaseRelations.OnSaturationLine(w, percent / 100, gravity, test.WaterDensity)))),
+            .. (lines?.AirVoids ?? []).Select(percent => new LineAnswer("airVoids", percent,
+                Line(test, specimens, w => PhaseRelations.OnAirVoidsLine(w, percent / 100, gravity, test.WaterDensity)))),
+        ];
+
+    /// <summary>A line over the specimens' range and a little beyond; empty without a specific gravity.</summary>
+    private static IReadOnlyList<double[]> Line(MoistureDensityTest test, IReadOnlyList<Specimen> specimens, Func<WaterContent, Density> line)
+    {
+        if (test.SpecificGravity is null)
+        {
+            return [];
+        }
+
+        var least = specimens.Min(specimen => specimen.WaterContent.Percent);
+        var greatest = specimens.Max(specimen => specimen.WaterContent.Percent);
+        var margin = Math.Max(1, (greatest - least) / 5);
+        var from = Math.Max(0, least - margin);
+        return
+        [
+            .. Enumerable.Range(0, LinePoints)
+                .Select(i => WaterContent.FromPercent(from + ((greatest + margin - from) * i / (LinePoints - 1))))
+                .Select(w => new[] { w.Percent, line(w).In(test.Units.Density) }),
+        ];
+    }
+}

@@ -1,0 +1,240 @@
+namespace Drypeak.Soil.Curves;
+
+/// <summary>A model whose squared residuals are to be made least.</summary>
+internal interface IResiduals
+{
+    /// <summary>Number of residuals, at least the number of parameters.</summary>
+    int Count { get; }
+
+    /// <summary>Residuals and their derivatives.</summary>
+    /// <param name="parameters">Where.</param>
+    /// <param name="residuals">One a row.</param>
+    /// <param name="jacobian">∂residual/∂parameter, a column a parameter, one after the other.</param>
+    void Evaluate(ReadOnlySpan<double> parameters, Span<double> residuals, Span<double> jacobian);
+}
+
+/// <summary>How a minimization went.</summary>
+/// <param name="IsStationary">Whether the gradient vanished; else the steps ran out.</param>
+/// <param name="SumOfSquares">At the end.</param>
+/// <param name="Steps">Steps tried.</param>
+internal readonly record struct MinimizationOutcome(bool IsStationary, double SumOfSquares, int Steps);
+
+/// <summary>
+/// Nonlinear least squares by damped Gauss–Newton steps (K. Levenberg, Quarterly of Applied Mathematics 2 (1944) 164–168;
+/// D. W. Marquardt, SIAM Journal 11 (1963) 431–441). Each step is a linear least-squares problem by reflections. Where the residuals stay large
+/// such steps crawl; once they do, Newton steps with the gradient's own differences are tried between them.
+/// It ends at a stationary point, where every column of the Jacobian is at right angles to the residuals, and not at a small
+/// change of the sum: an answer must not depend on the way by which it was reached.
+/// </summary>
+internal static class GaussNewton
+{
+    private const int MostOnStack = 2048;
+
+    /// <summary>Largest cosine between a column of the Jacobian and the residuals that counts as a right angle.</summary>
+    private const double RightAngle = 1e-11;
+
+    /// <summary>Below this relative change the sum of squares is rounding, and the gradient decides whether a step was good.</summary>
+    private const double RoundingOfSum = 1e-12;
+
+    /// <summary>A step after which more than this share of the slope is left was slow.</summary>
+    private const double Slow = 0.3;
+
+    /// <summary>Slope from which on Newton steps are tried.</summary>
+    private const double GreatestNewtonSlope = 0.1;
+
+    /// <summary>Step of the differences of the gradient, as a share of the change in a parameter that would outweigh the residuals.</summary>
+    private const double Difference = 1e-4;
+
+    private const double FirstDamping = 1e-3;
+    private const double LeastDamping = 1e-15;
+    private const double GreatestDamping = 1e12;
+
+    /// <summary>Minimizes from a starting point.</summary>
+    /// <param name="model">The residuals.</param>
+    /// <param name="parameters">The starting point; on return the best found.</param>
+    /// <param name="longestStep">Largest change of any one parameter in a step; infinite for none.</param>
+    /// <param name="mostSteps">Steps after which to give up.</param>
+    public static MinimizationOutcome Minimize<TModel>(
+        in TModel model, Span<double> parameters, double longestStep = double.PositiveInfinity, int mostSteps = 1000)
+        where TModel : IResiduals, allows ref struct
+    {
+        var (count, width) = (model.Count, parameters.Length);
+        var (each, rows) = (count * (width + 1), count + width);
+        var size = (2 * each) + (rows * (width + 1)) + (2 * width);
+        Span<double> work = size <= MostOnStack ? stackalloc double[size] : new double[size];
+        var now = new Evaluation(work[..each], count);
+        var next = new Evaluation(work.Slice(each, each), count);
+        var matrix = work.Slice(2 * each, rows * width);
+        var side = work.Slice((2 * each) + (rows * width), rows);
+        var step = work.Slice(size - (2 * width), width);
+        var trial = work[(size - width)..];
+
+        now.At(model, parameters);
+        var (damping, newtonBelow, isNewton) = (FirstDamping, GreatestNewtonSlope, false);
+        for (var tried = 0; tried < mostSteps; tried++)
+        {
+            if (now.Slope <= RightAngle)
+            {
+                return new(true, now.Sum, tried);
+            }
+
+            if (isNewton)
+            {
+                now.WriteNewtonSystem(model, parameters, ref next, trial, matrix, side);
+            }
+            else
+            {
+                now.WriteDampedSystem(damping, matrix, side);
+            }
+
+            var systemRows = isNewton ? width : rows;
+            if (LeastSquares.Solve(matrix[..(systemRows * width)], side[..systemRows], step))
+            {
+                if (!Move(parameters, step, longestStep, trial))
+                {
+                    return new(true, now.Sum, tried);
+                }
+
+                next.At(model, trial);
+                if (next.IsBetterThan(now))
+                {
+                    damping = isNewton ? damping : Math.Max(damping / 10, LeastDamping);
+                    isNewton |= next.Slope > Slow * now.Slope && next.Slope < newtonBelow;
+                    trial.CopyTo(parameters);
+                    var former = now;
+                    now = next;
+                    next = former;
+                    continue;
+                }
+            }
+
+            if (isNewton)
+            {
+                (isNewton, newtonBelow) = (false, now.Slope / 2);
+            }
+            else if (damping > GreatestDamping)
+            {
+                // The step is down to rounding and nothing improves: as stationary as the arithmetic allows.
+                return new(true, now.Sum, tried);
+            }
+            else
+            {
+                damping *= 10;
+            }
+        }
+
+        return new(false, now.Sum, mostSteps);
+    }
+
+    /// <summary>Goes one step, shortened so that no parameter changes by more than allowed.</summary>
+    /// <returns>False where the step changes no digit.</returns>
+    private static bool Move(ReadOnlySpan<double> from, ReadOnlySpan<double> step, double longest, Span<double> to)
+    {
+        var greatest = 0.0;
+        foreach (var change in step)
+        {
+            greatest = Math.Max(greatest, Math.Abs(change));
+        }
+
+        var share = greatest > longest ? longest / greatest : 1;
+        var moves = false;
+        for (var i = 0; i < step.Length; i++)
+        {
+            to[i] = from[i] + (share * step[i]);
+            moves |= to[i] != from[i];
+        }
+
+        return moves;
+    }
+
+    /// <summary>Residuals and Jacobian at one place.</summary>
+    private ref struct Evaluation(Span<double> work, int count)
+    {
+        private readonly Span<double> residuals = work[..count];
+        private readonly Span<double> jacobian = work[count..];
+
+        /// <summary>Sum of squared residuals.</summary>
+        public double Sum { get; private set; }
+
+        /// <summary>Greatest cosine between a column of the Jacobian and the residuals.</summary>
+        public double Slope { get; private set; }
+
+        public void At<TModel>(in TModel model, ReadOnlySpan<double> parameters)
+            where TModel : IResiduals, allows ref struct
+        {
+            model.Evaluate(parameters, residuals, jacobian);
+            Sum = LeastSquares.Dot(residuals, residuals);
+            Slope = 0;
+            for (var j = 0; j < parameters.Length; j++)
+            {
+                var (along, length) = (LeastSquares.Dot(Column(j), residuals), LeastSquares.Length(Column(j)));
+                Slope = along == 0 ? Slope : Math.Max(Slope, Math.Abs(along) / (length * Math.Sqrt(Sum)));
+            }
+        }
+
+        /// <summary>Whether the sum is less or, where sums differ by rounding only, the slope.</summary>
+        public readonly bool IsBetterThan(in Evaluation other) =>
+            Sum < other.Sum * (1 - RoundingOfSum) || (Sum <= other.Sum * (1 + RoundingOfSum) && Slope < other.Slope);
+
+        /// <summary>Newton's equations: the second derivatives by central differences of the gradient, and the gradient to be cancelled.</summary>
+        /// <param name="model">The model.</param>
+        /// <param name="parameters">Where this evaluation stands.</param>
+        /// <param name="beside">Room for an evaluation beside it.</param>
+        /// <param name="place">Room for its parameters.</param>
+        /// <param name="matrix">Gets the second derivatives, column by column.</param>
+        /// <param name="side">Gets the gradient, sign turned.</param>
+        public readonly void WriteNewtonSystem<TModel>(
+            in TModel model, ReadOnlySpan<double> parameters, ref Evaluation beside, Span<double> place, Span<double> matrix, Span<double> side)
+            where TModel : IResiduals, allows ref struct
+        {
+            var width = parameters.Length;
+            parameters.CopyTo(place);
+            for (var j = 0; j < width; j++)
+            {
+                var h = Difference * Math.Sqrt(Sum) / LeastSquares.Length(Column(j));
+                var column = matrix.Slice(j * width, width);
+                column.Clear();
+                place[j] = parameters[j] + h;
+                beside.At(model, place);
+                beside.AddGradient(1 / (2 * h), column);
+                place[j] = parameters[j] - h;
+                beside.At(model, place);
+                beside.AddGradient(-1 / (2 * h), column);
+                place[j] = parameters[j];
+            }
+
+            side.Clear();
+            AddGradient(-1, side[..width]);
+        }
+
+        private readonly void AddGradient(double scale, Span<double> sum)
+        {
+            for (var j = 0; j < sum.Length; j++)
+            {
+                sum[j] += scale * LeastSquares.Dot(Column(j), residuals);
+            }
+        }
+
+        private readonly ReadOnlySpan<double> Column(int j) => jacobian.Slice(j * count, count);
+
+        /// <summary>The linear problem of the next step: the residuals to be cancelled, and a row a parameter that holds it back.</summary>
+        public readonly void WriteDampedSystem(double damping, Span<double> matrix, Span<double> side)
+        {
+            matrix.Clear();
+            side.Clear();
+            for (var i = 0; i < count; i++)
+            {
+                side[i] = -residuals[i];
+            }
+
+            var width = jacobian.Length / count;
+            for (var j = 0; j < width; j++)
+            {
+                var column = Column(j);
+                var target = matrix.Slice(j * side.Length, side.Length);
+                column.CopyTo(target);
+                target[count + j] = Math.Sqrt(damping) * LeastSquares.Length(column);
+            }
+        }
+    }
+}

@@ -1,0 +1,210 @@
+using Drypeak.Soil.Phases;
+using Drypeak.Soil.Quantities;
+
+namespace Drypeak.Soil.Laboratory;
+
+/// <summary>
+/// From weighings to dry density: ρ = m/V, ρd = ρ/(1 + w) with w on dry mass (ASTM D698-12 § 11; BS 1377-4:1990 cl. 3.3.5; from memory).
+/// A specimen may begin at any stage. What is given at two stages must agree, or it is a fault that says by how much.
+/// </summary>
+public static class SpecimenReduction
+{
+    /// <summary>Densities and volumes given twice may differ by this fraction.</summary>
+    public const double DensityTolerance = 0.002;
+
+    /// <summary>Water contents given twice may differ by this, as a fraction (0.1 percentage points).</summary>
+    public const double WaterContentTolerance = 0.001;
+
+    /// <summary>Room for the arithmetic at an inclusive limit.</summary>
+    private const double Arithmetic = 1e-9;
+
+    /// <summary>Reduces one specimen.</summary>
+    /// <param name="measured">The specimen.</param>
+    /// <param name="testMold">The test's mold, or null.</param>
+    /// <param name="place">JSON pointer of the specimen, for faults.</param>
+    /// <param name="units">The units that faults speak.</param>
+    /// <param name="faults">Receives each contradiction, and what is missing.</param>
+    /// <returns>The specimen, or null where there is a fault.</returns>
+    public static Specimen? Reduce(SpecimenMeasurement measured, Mold? testMold, string place, UnitSet units, ICollection<Fault> faults)
+    {
+        var before = faults.Count;
+        var mold = measured.Mold?.Over(testMold) ?? testMold;
+        var moldPlace = measured.Mold is null ? "/mold" : place + "/mold";
+
+        var givenWater = WaterContentOf(measured, place, faults);
+        var volume = VolumeOf(mold, moldPlace, units, faults);
+        var wetMass = WetMassOf(measured, mold, place, units, faults);
+        var massDensity = wetMass is { } mass && volume is { } v ? mass / v : (Density?)null;
+        var wet = Agreeing(
+            [(massDensity, "mass and volume", ""), (measured.WetDensity, "the wet density given", "/wetDensity")],
+            "wet density", place, units, faults);
+
+        if (givenWater is null && wet is { } && measured.DryDensity is { } dryGiven)
+        {
+            givenWater = new WaterContent((wet.Value.KilogramsPerCubicMeter / dryGiven.KilogramsPerCubicMeter) - 1);
+            if (givenWater.Value.Fraction < 0)
+            {
+                faults.Add(new Fault(place + "/dryDensity", "contradiction",
+                    $"The dry density, {ReaderText.Of(dryGiven, units.Density)}, is greater than the wet density, {ReaderText.Of(wet.Value, units.Density)}. Correct one of them."));
+            }
+        }
+
+        if (faults.Count > before)
+        {
+            return null;
+        }
+
+        if (givenWater is not { } w)
+        {
+            faults.Add(new Fault(place, "not-enough-data",
+                "The water content is missing. Give waterContent, tins, wetBasis or carbide; or a wet and a dry density."));
+            return null;
+        }
+
+        var dry = Agreeing(
+            [(wet is { } wetDensity ? PhaseRelations.DryDensity(wetDensity, w) : null, "wet density and water content", ""),
+             (measured.DryDensity, "the dry density given", "/dryDensity")],
+            "dry density", place, units, faults);
+        if (faults.Count > before)
+        {
+            return null;
+        }
+
+        if (dry is not { } dryDensity)
+        {
+            faults.Add(new Fault(place, "not-enough-data", Missing(measured, mold, wetMass, volume)));
+            return null;
+        }
+
+        return new Specimen(measured.Label, w, wet ?? PhaseRelations.WetDensity(dryDensity, w), dryDensity,
+            massDensity is null ? null : volume, measured.SetAside);
+    }
+
+    /// <summary>The mold's volume: as given, from its dimensions, or by water; null where unknown.</summary>
+    public static Volume? VolumeOf(Mold? mold, string place, UnitSet units, ICollection<Fault> faults)
+    {
+        if (mold is null)
+        {
+            return null;
+        }
+
+        ReadOnlySpan<(Volume? Volume, string Name)> ways =
+        [
+            (mold.Volume, "the volume given"),
+            (mold.WaterFilling?.Volume, "the water that fills it"),
+            (mold is { Diameter: { } diameter, Height: { } height } ? Volume.OfCylinder(diameter, height) : null, "diameter and height"),
+        ];
+
+        (Volume Volume, string Name)? first = null;
+        foreach (var (volume, name) in ways)
+        {
+            if (volume is not { } other)
+            {
+                continue;
+            }
+
+            if (first is not { } taken)
+            {
+                first = (other, name);
+            }
+            else if (Math.Abs((other.CubicMeters / taken.Volume.CubicMeters) - 1) is var apart && apart > DensityTolerance * (1 + Arithmetic))
+            {
+                var fault = new Fault(place, "contradiction",
+                    $"By {taken.Name} the mold holds {ReaderText.Of(taken.Volume, units.Volume)}, by {name} {ReaderText.Of(other, units.Volume)}: {ReaderText.Percent(apart, 2)} apart, where {ReaderText.Percent(DensityTolerance)} is allowed. Correct one, or leave one out.");
+                if (!faults.Contains(fault))
+                {
+                    faults.Add(fault);
+                }
+            }
+        }
+
+        return first?.Volume;
+    }
+
+    private static WaterContent? WaterContentOf(SpecimenMeasurement measured, string place, ICollection<Fault> faults)
+    {
+        ReadOnlySpan<(WaterContent? Water, string Name, string Member)> ways =
+        [
+            (measured.Tins.Count > 0 ? new WaterContent(measured.Tins.Average(tin => tin.WaterContent.Fraction)) : null, "the tins", "/tins"),
+            (measured.WaterContent, "the water content given", "/waterContent"),
+            (measured.WaterContentFromWetBasis, "the number on wet mass", "/wetBasis"),
+            (measured.WaterContentFromCarbide, "the carbide tester", "/carbide"),
+        ];
+
+        (WaterContent Water, string Name)? first = null;
+        foreach (var (water, name, member) in ways)
+        {
+            if (water is not { } other)
+            {
+                continue;
+            }
+
+            if (first is not { } taken)
+            {
+                first = (other, name);
+            }
+            else if (Math.Abs(other.Fraction - taken.Water.Fraction) is var apart && apart > WaterContentTolerance * (1 + Arithmetic))
+            {
+                faults.Add(new Fault(place + member, "contradiction",
+                    $"The water content is {ReaderText.Of(taken.Water)} by {taken.Name}, but {ReaderText.Of(other)} by {name}: {ReaderText.Fixed(apart * 100, 2)} percentage points apart, where {ReaderText.Fixed(WaterContentTolerance * 100, 1)} is allowed. Correct one, or leave one out."));
+            }
+        }
+
+        return first?.Water;
+    }
+
+    private static Mass? WetMassOf(SpecimenMeasurement measured, Mold? mold, string place, UnitSet units, ICollection<Fault> faults)
+    {
+        var byDifference = measured.MoldAndWetSoil is { } full && mold?.EmptyMass is { } empty ? full - empty : (Mass?)null;
+        if (byDifference is { Kilograms: <= 0 } and { } difference)
+        {
+            faults.Add(new Fault(place + "/moldAndWetSoil", "contradiction",
+                $"Mold and wet soil, {ReaderText.Of(measured.MoldAndWetSoil!.Value, units.Mass)}, are not heavier than the empty mold, {ReaderText.Of(mold!.EmptyMass!.Value, units.Mass)}. Look for a mass in another unit."));
+            return null;
+        }
+
+        if (byDifference is { } derived && measured.WetMass is { } given
+            && Math.Abs((given.Kilograms / derived.Kilograms) - 1) is var apart && apart > DensityTolerance * (1 + Arithmetic))
+        {
+            faults.Add(new Fault(place + "/wetMass", "contradiction",
+                $"The wet mass given is {ReaderText.Of(given, units.Mass)}, but mold and wet soil less the mold are {ReaderText.Of(derived, units.Mass)}: {ReaderText.Percent(apart, 2)} apart, where {ReaderText.Percent(DensityTolerance)} is allowed. Correct one, or leave one out."));
+        }
+
+        return byDifference ?? measured.WetMass;
+    }
+
+    /// <summary>The first density of those given, each of the others held against it.</summary>
+    private static Density? Agreeing(
+        ReadOnlySpan<(Density? Density, string Name, string Member)> ways, string quantity, string place, UnitSet units, ICollection<Fault> faults)
+    {
+        (Density Density, string Name)? first = null;
+        foreach (var (density, name, member) in ways)
+        {
+            if (density is not { } other)
+            {
+                continue;
+            }
+
+            if (first is not { } taken)
+            {
+                first = (other, name);
+            }
+            else if (Math.Abs((other.KilogramsPerCubicMeter / taken.Density.KilogramsPerCubicMeter) - 1) is var apart && apart > DensityTolerance * (1 + Arithmetic))
+            {
+                faults.Add(new Fault(place + member, "contradiction",
+                    $"The {quantity} is {ReaderText.Of(taken.Density, units.Density)} by {taken.Name}, but {name} is {ReaderText.Of(other, units.Density)}: {ReaderText.Percent(apart, 2)} apart, where {ReaderText.Percent(DensityTolerance)} is allowed. Correct one, or leave one out."));
+            }
+        }
+
+        return first?.Density;
+    }
+
+    private static string Missing(SpecimenMeasurement measured, Mold? mold, Mass? wetMass, Volume? volume) => (measured.MoldAndWetSoil, wetMass, volume) switch
+    {
+        ({ }, null, _) => "The mass of the mold is missing: give mold.mass, for the test or for the specimen.",
+        (_, { }, null) => mold is null
+            ? "The volume of the mold is missing: give mold.volume, or mold.diameter and mold.height."
+            : "The mold's volume is missing: give mold.volume, mold.diameter and mold.height, or mold.empty and mold.withWater.",
+        _ => "Nothing gives the density: give moldAndWetSoil or wetMass (with a mold), wetDensity or dryDensity.",
+    };
+}
