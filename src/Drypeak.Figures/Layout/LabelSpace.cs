@@ -65,6 +65,15 @@ internal sealed class LabelSpace(Area picture)
         return null;
     }
 
+    /// <summary>Places texts that have one place each, over whatever is drawn there; one whose place another text has is left out.</summary>
+    public void PlaceEach(IEnumerable<TextRun> texts)
+    {
+        foreach (var text in texts)
+        {
+            Place([text], Barriers.None);
+        }
+    }
+
     /// <summary>Places a label that matters: rather in full with a quiet line behind its halo than shortened, and rather shortened than not at all.</summary>
     /// <param name="wordings">The candidate places of each wording, the fullest wording first.</param>
     public void PlaceFullest(IEnumerable<IEnumerable<TextRun>> wordings)
