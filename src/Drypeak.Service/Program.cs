@@ -10,6 +10,8 @@ var app = builder.Build();
 app.UseDrypeakHosting(PageEndpoints.NotFound);
 app.MapMoistureDensity();
 app.MapComparison();
+app.MapSaturationLines();
+app.MapOversizeCorrection();
 app.MapFindingKinds();
 app.MapCharts();
 app.MapPages();

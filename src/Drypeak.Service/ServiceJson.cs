@@ -32,5 +32,9 @@ internal static class ServiceJson
 [JsonSerializable(typeof(ComparisonRequest))]
 [JsonSerializable(typeof(ComparisonAnswer))]
 [JsonSerializable(typeof(IReadOnlyList<FindingKindAnswer>))]
+[JsonSerializable(typeof(SaturationLinesRequest))]
+[JsonSerializable(typeof(SaturationLinesAnswer))]
+[JsonSerializable(typeof(OversizeCorrectionRequest))]
+[JsonSerializable(typeof(OversizeCorrectionAnswer))]
 [JsonSerializable(typeof(CompactionChart))]
 internal sealed partial class ContractsJson : JsonSerializerContext;

@@ -19,14 +19,10 @@ internal sealed class ChartRules : AbstractValidator<CompactionChart>
             .WithErrorCode("out-of-range").WithMessage("A specimen's water content and dry density must be possible.");
         RuleFor(chart => chart.SpecificGravity).Within(0.1, SpecificGravityRules.Greatest);
         RuleFor(chart => chart.WaterDensity).Within(500, 1500, " kg/m³");
-        RuleFor(chart => chart.Saturation).Cascade(CascadeMode.Stop).Needed().Must(list => list.Count <= limits.LinesOfAKind)
-            .WithErrorCode("too-many").WithMessage($"There may be up to {limits.LinesOfAKind} lines of a kind.");
-        RuleForEach(chart => chart.Saturation).Must(value => value is > 0 and <= 100)
-            .WithErrorCode("out-of-range").WithMessage("A degree of saturation lies over 0 and up to 100 %.");
-        RuleFor(chart => chart.AirVoids).Cascade(CascadeMode.Stop).Needed().Must(list => list.Count <= limits.LinesOfAKind)
-            .WithErrorCode("too-many").WithMessage($"There may be up to {limits.LinesOfAKind} lines of a kind.");
-        RuleForEach(chart => chart.AirVoids).Must(value => value is >= 0 and < 100)
-            .WithErrorCode("out-of-range").WithMessage("Air voids lie from 0 to below 100 %.");
+        RuleFor(chart => chart.Saturation).Needed().LinesOfAKind(limits.LinesOfAKind);
+        RuleForEach(chart => chart.Saturation).Saturation();
+        RuleFor(chart => chart.AirVoids).Needed().LinesOfAKind(limits.LinesOfAKind);
+        RuleForEach(chart => chart.AirVoids).AirVoids();
     }
 
     /// <summary>Every broken rule, at the place of the address; what only the figure knows is asked last.</summary>

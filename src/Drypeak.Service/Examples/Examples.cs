@@ -15,6 +15,12 @@ internal static class Examples
     /// <summary>The same soil tested by two laboratories, as JSON.</summary>
     public static string ComparisonRequest { get; } = Text("comparison.json");
 
+    /// <summary>Lines for a chart, as JSON.</summary>
+    public static string SaturationLinesRequest { get; } = Text("saturation-lines.json");
+
+    /// <summary>The fines of a stony fill corrected to all of it, as JSON.</summary>
+    public static string OversizeCorrectionRequest { get; } = Text("oversize-correction.json");
+
     private static string Text(string name)
     {
         using var stream = typeof(Examples).Assembly.GetManifestResourceStream($"Drypeak.Service.Examples.{name}")

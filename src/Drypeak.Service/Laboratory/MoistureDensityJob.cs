@@ -60,7 +60,7 @@ internal sealed class MoistureDensityJob(Limits limits)
                 NextSpecimen = result.Curve?.Next is { } next
                     ? new NextSpecimenAnswer(Math.Round(next.WaterContent * 200) / 2, next.Reason, next.StandardUncertaintyNow * 100, next.StandardUncertaintyAfter * 100)
                     : null,
-                Trace = request.Trace is true ? [.. Working.Of(test, result).Select(ToContract)] : null,
+                Trace = request.Trace is true ? [.. Working.Of(test, result).Select(TraceStep.Of)] : null,
                 Findings = [.. findings],
                 Links = links,
                 Provenance = ProvenanceContract.Of(request),
@@ -222,7 +222,4 @@ internal sealed class MoistureDensityJob(Limits limits)
                 .Select(w => new[] { w.Percent, line(w).In(test.Units.Density) }),
         ];
     }
-
-    private static TraceStep ToContract(WorkingStep step) =>
-        new(step.Quantity, step.Formula, step.Substitution, step.Value, step.Unit, step.Source, step.MathMl);
 }
