@@ -32,5 +32,12 @@ internal static class ServiceJson
 [JsonSerializable(typeof(ComparisonRequest))]
 [JsonSerializable(typeof(ComparisonAnswer))]
 [JsonSerializable(typeof(IReadOnlyList<FindingKindAnswer>))]
+[JsonSerializable(typeof(SaturationLinesRequest))]
+[JsonSerializable(typeof(SaturationLinesAnswer))]
+[JsonSerializable(typeof(OversizeCorrectionRequest))]
+[JsonSerializable(typeof(OversizeCorrectionAnswer))]
+[JsonSerializable(typeof(EffortSeriesRequest))]
+[JsonSerializable(typeof(EffortSeriesAnswer))]
+[JsonSerializable(typeof(IReadOnlyList<TestMethodAnswer>))]
 [JsonSerializable(typeof(CompactionChart))]
 internal sealed partial class ContractsJson : JsonSerializerContext;

@@ -13,7 +13,7 @@ internal static class ChartEndpoints
         var charts = app.MapGroup("/v1/charts").WithTags("Charts");
         foreach (var format in ChartFormat.All)
         {
-            var chart = charts.MapMethods($"/{ChartAddress.MoistureDensity}.{format.Suffix}", [HttpMethods.Get, HttpMethods.Head], (HttpContext context, Limits limits) => Draw(context, limits, format))
+            var chart = charts.MapRead($"/{ChartAddress.MoistureDensity}.{format.Suffix}", (HttpContext context, Limits limits) => Draw(context, limits, format))
                 .WithName($"moisture-density-chart-{format.Suffix}")
                 .WithSummary($"The chart of a laboratory test as {format.Suffix.ToUpperInvariant()}")
                 .WithDescription("The address comes from an answer's links and holds all that the picture shows. The same address gives the same bytes, with a strong ETag.")

@@ -96,3 +96,19 @@ internal sealed class OversizeRules : AbstractValidator<OversizeContract>
         RuleFor(oversize => oversize.Sieve).Positive();
     }
 }
+
+/// <summary>Rules of lines in the plane of water content and dry density.</summary>
+internal static class LineRules
+{
+    public static IRuleBuilderOptions<T, IReadOnlyList<double>?> LinesOfAKind<T>(this IRuleBuilder<T, IReadOnlyList<double>?> rule, int greatest) =>
+        rule.Must(list => list is null || list.Count <= greatest)
+            .WithErrorCode("too-many").WithMessage((_, list) => $"There may be up to {greatest} lines of a kind; there are {list!.Count}.");
+
+    public static IRuleBuilderOptions<T, double> Saturation<T>(this IRuleBuilder<T, double> rule) =>
+        rule.Must(value => value is > 0 and <= 100)
+            .WithErrorCode("out-of-range").WithMessage((_, value) => $"A degree of saturation lies over 0 and up to 100 %; {RuleWords.Text(value)} was received.");
+
+    public static IRuleBuilderOptions<T, double> AirVoids<T>(this IRuleBuilder<T, double> rule) =>
+        rule.Must(value => value is >= 0 and < 100)
+            .WithErrorCode("out-of-range").WithMessage((_, value) => $"Air voids lie from 0 to below 100 %; {RuleWords.Text(value)} was received.");
+}

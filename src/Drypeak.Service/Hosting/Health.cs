@@ -7,9 +7,9 @@ public static class Health
 {
     public static void Map(IEndpointRouteBuilder endpoints)
     {
-        endpoints.MapRead("/health/live", Live).WithTags("Health")
+        endpoints.MapRead("/health/live", Live).WithTags("Health").WithName("live")
             .Gives<HealthAnswer>("application/json", """{ "status": "live" }""");
-        endpoints.MapRead("/health/ready", Ready).WithTags("Health")
+        endpoints.MapRead("/health/ready", Ready).WithTags("Health").WithName("ready")
             .Gives<HealthAnswer>("application/json", """{ "status": "ready" }""").Refuses(503);
     }
 

@@ -13,7 +13,7 @@ internal static class FindingKindsEndpoint
     ];
 
     public static void MapFindingKinds(this IEndpointRouteBuilder app) =>
-        app.MapGet("/v1/findings", () => Results.Json(Kinds, ServiceJson.Of<IReadOnlyList<FindingKindAnswer>>()))
+        app.MapRead("/v1/findings", () => Results.Json(Kinds, ServiceJson.Of<IReadOnlyList<FindingKindAnswer>>()))
             .WithTags("Catalogues")
             .WithName("findings")
             .WithSummary("Every kind of finding")

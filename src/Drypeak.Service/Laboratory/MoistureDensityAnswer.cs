@@ -1,5 +1,6 @@
 using System.Text.Json.Serialization;
 using Drypeak.Service.Contracts;
+using Drypeak.Soil.Laboratory.Workings;
 
 namespace Drypeak.Service.Laboratory;
 
@@ -238,4 +239,8 @@ public sealed record NextSpecimenAnswer(double WaterContent, string Reason, doub
 /// <param name="Unit" example="Mg/m³">Its unit; empty for a ratio.</param>
 /// <param name="Source" example="ASTM D698">Where the formula stands.</param>
 /// <param name="Mathml" example="&lt;math&gt;…&lt;/math&gt;">The formula as MathML.</param>
-public sealed record TraceStep(string Quantity, string Formula, string? Substitution, double Value, string Unit, string Source, string Mathml);
+public sealed record TraceStep(string Quantity, string Formula, string? Substitution, double Value, string Unit, string Source, string Mathml)
+{
+    internal static TraceStep Of(WorkingStep step) =>
+        new(step.Quantity, step.Formula, step.Substitution, step.Value, step.Unit, step.Source, step.MathMl);
+}

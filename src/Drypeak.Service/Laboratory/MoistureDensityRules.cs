@@ -199,14 +199,10 @@ internal sealed class MoistureDensityRules(Limits limits)
     {
         public LinesRules(Limits limits)
         {
-            RuleFor(lines => lines.Saturation).Must(list => list is null || list.Count <= limits.LinesOfAKind)
-                .WithErrorCode("too-many").WithMessage((_, list) => $"There may be up to {limits.LinesOfAKind} lines of a kind; there are {list!.Count}.");
-            RuleForEach(lines => lines.Saturation).Must(value => value is > 0 and <= 100)
-                .WithErrorCode("out-of-range").WithMessage((_, value) => $"A degree of saturation lies over 0 and up to 100 %; {RuleWords.Text(value)} was received.");
-            RuleFor(lines => lines.AirVoids).Must(list => list is null || list.Count <= limits.LinesOfAKind)
-                .WithErrorCode("too-many").WithMessage((_, list) => $"There may be up to {limits.LinesOfAKind} lines of a kind; there are {list!.Count}.");
-            RuleForEach(lines => lines.AirVoids).Must(value => value is >= 0 and < 100)
-                .WithErrorCode("out-of-range").WithMessage((_, value) => $"Air voids lie from 0 to below 100 %; {RuleWords.Text(value)} was received.");
+            RuleFor(lines => lines.Saturation).LinesOfAKind(limits.LinesOfAKind);
+            RuleForEach(lines => lines.Saturation).Saturation();
+            RuleFor(lines => lines.AirVoids).LinesOfAKind(limits.LinesOfAKind);
+            RuleForEach(lines => lines.AirVoids).AirVoids();
         }
     }
 

@@ -25,7 +25,7 @@ public static class ApiReference
 
     internal static void Use(WebApplication app)
     {
-        app.MapRead(ApiDescription.Address, Document).WithTags("Description")
+        app.MapRead(ApiDescription.Address, Document).WithTags("Description").WithName("description")
             .Gives<JsonObject>("application/json", """{ "openapi": "3.1.1" }""");
         app.MapRead(StyleSheetAddress, () => new CachedBytes(StyleSheet, "text/css") { CacheControl = CachedBytes.Revalidated })
             .ExcludeFromDescription();
@@ -75,6 +75,7 @@ public static class ApiReference
         options.DocInclusionPredicate((_, api) => api.HttpMethod != HttpMethods.Head);
         options.OperationFilter<DescribedOperation>();
         options.DocumentFilter<NullableReferences>();
+        options.DocumentFilter<TagsAndSecurity>();
         options.IncludeXmlComments(typeof(ApiReference).Assembly);
         options.IncludeXmlComments(typeof(Fault).Assembly);
     }
