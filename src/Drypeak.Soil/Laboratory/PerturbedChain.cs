@@ -77,7 +77,7 @@ internal sealed class PerturbedChain
                 w += (perturbed.WaterContent.Fraction - item.Tins[t].WaterContent.Fraction) / item.Tins.Count;
             }
 
-            w = Math.Max(0, w + Error(item.WaterError, u.WaterContent?.Fraction));
+            w = Math.Clamp(w + Error(item.WaterError, u.WaterContent?.Fraction), 0, SpecimenReduction.GreatestWaterContent);
             var dryDensity = item.Specimen.DryDensity.KilogramsPerCubicMeter;
             if (!item.DryDensityGiven)
             {
@@ -92,7 +92,7 @@ internal sealed class PerturbedChain
             }
 
             dryDensity += Error(item.DensityError, u.DryDensity?.KilogramsPerCubicMeter);
-            points[i] = new CompactionPoint(w, Math.Max(dryDensity, 1));
+            points[i] = new CompactionPoint(w, Math.Clamp(dryDensity, SpecimenReduction.LeastDryDensity, SpecimenReduction.GreatestDryDensity));
         }
 
         var gravity = _test.SpecificGravity is { } gs ? Math.Max(gs.Value + Error(_specificGravity, u.SpecificGravity), 0.5) : (double?)null;

@@ -85,8 +85,8 @@ public class WorkingTests
 
         if (result.Corrected is { } corrected)
         {
-            Assert.Equal(corrected.DryDensity.In(test.Units.Density), Value("maximum dry density corrected for oversize"));
-            Assert.Equal(corrected.WaterContent.Percent, Value("optimum water content corrected for oversize"));
+            Assert.Equal(corrected.DryDensity.In(test.Units.Density), Value("maximum dry density of the total material"));
+            Assert.Equal(corrected.WaterContent.Percent, Value("optimum water content of the total material"));
         }
     }
 
@@ -118,7 +118,7 @@ public class WorkingTests
             "void ratio of specimen 1", "porosity of specimen 1", "saturation of specimen 1", "air voids of specimen 1", "water content of specimen 2",
         ];
         Assert.Equal(firstAndLast, steps[..firstAndLast.Length]);
-        Assert.Equal("optimum water content corrected for oversize", steps[^1]);
+        Assert.Equal("optimum water content of the total material", steps[^1]);
         Assert.Single(steps, "volume of the mold");
         Assert.Equal(steps.Count, steps.Distinct().Count());
     }
