@@ -36,5 +36,8 @@ internal static class ServiceJson
 [JsonSerializable(typeof(SaturationLinesAnswer))]
 [JsonSerializable(typeof(OversizeCorrectionRequest))]
 [JsonSerializable(typeof(OversizeCorrectionAnswer))]
+[JsonSerializable(typeof(EffortSeriesRequest))]
+[JsonSerializable(typeof(EffortSeriesAnswer))]
+[JsonSerializable(typeof(IReadOnlyList<TestMethodAnswer>))]
 [JsonSerializable(typeof(CompactionChart))]
 internal sealed partial class ContractsJson : JsonSerializerContext;

@@ -140,6 +140,7 @@ public sealed class CompactionFigureTests
         Refused(Charts.Full with { Specimens = [new(double.NaN, 1.8, null, false)] }, "A specimen's water content must be a number between −1e9 and 1e9, not NaN.");
         Refused(Charts.Full with { Curve = [new(12, double.PositiveInfinity)] }, "The curve's dry density must be a number between −1e9 and 1e9, not Infinity.");
         Refused(Charts.Full with { NextSpecimen = 1e10 }, "The next specimen's water content must be a number between −1e9 and 1e9, not 10000000000.");
+        Refused(Charts.Ternmarsh with { Optimum = Charts.Ternmarsh.Optimum! with { WaterContentInterval = [13.6] } }, "An interval must have two ends.");
         Refused(Charts.Full with { SpecificGravity = 0 }, "The specific gravity must be over 0, not 0.");
         Refused(Charts.Full with { WaterDensity = -1 }, "The density of water must be over 0, not -1.");
         Refused(Charts.Full with { Saturation = [90, 0] }, "A saturation must be over 0 and up to 100 %, not 0.");

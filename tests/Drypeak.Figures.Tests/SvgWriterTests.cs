@@ -20,6 +20,29 @@ public sealed partial class SvgWriterTests
         }, iter: 300);
     }
 
+    [Theory]
+    [InlineData(1e9, 1e9)]
+    [InlineData(-1e9, -1e9)]
+    [InlineData(0, 0)]
+    [InlineData(1e-300, 1e-300)]
+    [InlineData(12, 1e9)]
+    [InlineData(1e9, 1.8)]
+    public void The_most_extreme_numbers_are_drawn_as_numbers(double waterContent, double dryDensity)
+    {
+        foreach (var gravity in (double[])[1e-300, 2.68, 1e9])
+        {
+            var chart = Charts.Full with
+            {
+                Specimens = [new(waterContent, dryDensity, "far off", false), .. Charts.Full.Specimens],
+                SpecificGravity = gravity,
+                Saturation = [1e-300, 100],
+            };
+            var picture = SvgPicture.Of(chart, new FigureSize(240, 240));
+            Assert.DoesNotContain(picture.Root.DescendantsAndSelf().SelectMany(element => element.Attributes()), attribute => NotANumber().IsMatch(attribute.Value));
+            Assert.Equal(7, picture.OfClass("specimen").Count());
+        }
+    }
+
     [Fact]
     public void The_title_and_the_description_name_the_picture_for_who_cannot_see_it()
     {

@@ -48,15 +48,30 @@ internal sealed class Axes(Plot plot, Wording wording, FigureSize size, TypeScal
         ]);
     }
 
+    public void Block(LabelSpace space) =>
+        space.Block(Barriers.Axes, [new(plot.Area.Left, plot.Area.Top), new(plot.Area.Left, plot.Area.Bottom), new(plot.Area.Right, plot.Area.Bottom)]);
+
+    /// <summary>Places the titles, then the values of the result, then the labels of those ticks that leave them room.</summary>
+    public void Label(LabelSpace space)
+    {
+        space.PlaceEach(Titles());
+        if (wording.Result is { } result)
+        {
+            space.PlaceEach([WaterValue(result), DensityValue(result)]);
+        }
+
+        space.PlaceEach(TickLabels());
+    }
+
     /// <summary>The titles: over the density axis, where it is read without turning one's head, and under the axis of water content.</summary>
-    public IEnumerable<TextRun> Titles()
+    private IEnumerable<TextRun> Titles()
     {
         yield return Title(wording.DensityAxis, new Place(type.Margin, plot.Area.Top - (TitleAboveAxis * type.AxisTitle)), TextAnchor.Start);
         yield return Title(Wording.WaterAxis, new Place(plot.Area.Right, size.Height - WaterTitleDepth(type)), TextAnchor.End);
     }
 
     /// <summary>A value of the result under the axis of water content.</summary>
-    public TextRun WaterValue(ChartOptimum optimum)
+    private TextRun WaterValue(ChartOptimum optimum)
     {
         var text = Wording.BareWater(optimum);
         var half = EmbeddedFont.SemiBold.Measure(text, type.Value) / 2;
@@ -65,14 +80,14 @@ internal sealed class Axes(Plot plot, Wording wording, FigureSize size, TypeScal
     }
 
     /// <summary>A value of the result left of the density axis.</summary>
-    public TextRun DensityValue(ChartOptimum optimum)
+    private TextRun DensityValue(ChartOptimum optimum)
     {
         var place = new Place(plot.Area.Left - LabelGap(type), plot.Density.At(optimum.MaximumDryDensity) + (0.33 * type.Value));
         return new TextRun(wording.BareDensity(optimum), place, type.Value, EmbeddedFont.SemiBold, ColorRole.Clay, TextAnchor.End);
     }
 
     /// <summary>The labels of the ticks, those of water content first.</summary>
-    public IEnumerable<TextRun> TickLabels()
+    private IEnumerable<TextRun> TickLabels()
     {
         foreach (var value in plot.WaterTicks.Values)
         {

@@ -49,7 +49,7 @@ internal sealed class OptimumMarks(CompactionChart chart, Wording wording, Plot 
 
     public void Block(LabelSpace space)
     {
-        foreach (var optimum in new[] { chart.Optimum, chart.Adopted, chart.Corrected }.OfType<ChartOptimum>())
+        foreach (var optimum in chart.Optima)
         {
             space.BlockMark(plot.At(optimum.Point), Arm * 1.4 * type.Unit);
         }

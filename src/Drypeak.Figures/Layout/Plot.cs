@@ -35,10 +35,10 @@ internal sealed class Plot
     /// <summary>The rectangle that the heading, the ticks and the titles of the axes leave.</summary>
     /// <param name="view">The ranges.</param>
     /// <param name="headingBottom">px from the top.</param>
-    /// <param name="densityValues">Texts that stand among the labels of the density axis.</param>
+    /// <param name="wording">For the value of the result, which stands among the labels of the density axis.</param>
     /// <param name="size">The picture's size.</param>
     /// <param name="type">Sizes of text and marks.</param>
-    public static Plot Lay(View view, double headingBottom, IEnumerable<string> densityValues, FigureSize size, TypeScale type)
+    public static Plot Lay(View view, double headingBottom, Wording wording, FigureSize size, TypeScale type)
     {
         var top = headingBottom + Axes.HeightAbove(type);
         var bottom = size.Height - Axes.HeightBelow(type);
@@ -46,8 +46,7 @@ internal sealed class Plot
 
         var labelWidth = densityTicks.Values
             .Select(value => EmbeddedFont.Regular.Measure(densityTicks.Label(value), type.Label))
-            .Concat(densityValues.Select(text => EmbeddedFont.SemiBold.Measure(text, type.Value)))
-            .DefaultIfEmpty(0)
+            .Append(wording.Result is { } result ? EmbeddedFont.SemiBold.Measure(wording.BareDensity(result), type.Value) : 0)
             .Max();
         var left = Math.Round(Math.Min(type.Margin + labelWidth + Axes.LabelGap(type), size.Width * 0.45)) + 0.5;
         var right = size.Width - type.Margin;

@@ -45,7 +45,7 @@ internal sealed record View(Interval WaterContent, Interval DryDensity)
 
     private static IEnumerable<ChartPoint> Marked(CompactionChart chart) =>
         chart.Specimens.Select(specimen => specimen.Point)
-            .Concat(new[] { chart.Optimum, chart.Adopted, chart.Corrected }.OfType<ChartOptimum>().Select(optimum => optimum.Point));
+            .Concat(chart.Optima.Select(optimum => optimum.Point));
 
     private static Interval Range(IEnumerable<double> values, double fallback)
     {

@@ -21,6 +21,9 @@ internal static class Examples
     /// <summary>The fines of a stony fill corrected to all of it, as JSON.</summary>
     public static string OversizeCorrectionRequest { get; } = Text("oversize-correction.json");
 
+    /// <summary>One soil at standard and modified effort, as JSON.</summary>
+    public static string EffortSeriesRequest { get; } = Text("effort-series.json");
+
     private static string Text(string name)
     {
         using var stream = typeof(Examples).Assembly.GetManifestResourceStream($"Drypeak.Service.Examples.{name}")

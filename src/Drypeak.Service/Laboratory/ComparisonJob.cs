@@ -14,12 +14,7 @@ internal sealed class ComparisonJob(MoistureDensityJob laboratory)
     {
         null => [new Fault("/tests", "missing-member", "It is missing. Give the two tests.")],
         { Count: not Tests } tests => [new Fault("/tests", "not-two", $"A comparison takes two tests; {tests.Count} were received.")],
-        var tests =>
-        [
-            .. tests.SelectMany((test, i) => test is null
-                ? [new Fault($"/tests/{i}", "missing-member", "It is missing. Give a whole test.")]
-                : laboratory.Check(test).Select(fault => fault with { Place = $"/tests/{i}{fault.Place}" })),
-        ],
+        var tests => [.. tests.Within("/tests", laboratory.Check)],
     };
 
     /// <summary>Compares two tests that passed <see cref="Check"/>.</summary>

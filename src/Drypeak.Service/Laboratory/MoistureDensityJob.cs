@@ -84,21 +84,15 @@ internal sealed class MoistureDensityJob(Limits limits)
 
     private static MethodAnswer? MethodOf(MoistureDensityTest test, IReadOnlyList<Specimen> specimens)
     {
-        var volume = specimens.Select(specimen => specimen.MoldVolume).FirstOrDefault(volume => volume is { });
-        if (test.IsCustomMethod)
+        var computed = EffortSeries.EffortOf(test, specimens)?.KilojoulesPerCubicMeter;
+        return test switch
         {
-            return new MethodAnswer(MoistureDensityMapping.CustomMethod, "The caller's own method", null, null,
-                test.CustomEffort is { } effort
-                    ? new EffortAnswer(
-                        volume is { } mold ? CompactiveEffort.Of(effort.Rammer, effort.Drop, effort.Layers, effort.BlowsPerLayer, mold).KilojoulesPerCubicMeter : null,
-                        null)
-                    : null);
-        }
-
-        return test.Method is { } method
-            ? new MethodAnswer(method.Code, method.Title, method.Summary, method.Standard,
-                new EffortAnswer(method.Effort?.KilojoulesPerCubicMeter, method.NominalEffort?.Value.KilojoulesPerCubicMeter))
-            : null;
+            { IsCustomMethod: true } => new MethodAnswer(MoistureDensityMapping.CustomMethod, "The caller's own method", null, null,
+                test.CustomEffort is null ? null : new EffortAnswer(computed, null)),
+            { Method: { } method } => new MethodAnswer(method.Code, method.Title, method.Summary, method.Standard,
+                new EffortAnswer(computed, method.NominalEffort?.Value.KilojoulesPerCubicMeter)),
+            _ => null,
+        };
     }
 
     private static SpecimenAnswer ToAnswer(Specimen specimen, MoistureDensityTest test)
@@ -121,15 +115,12 @@ internal sealed class MoistureDensityJob(Limits limits)
         var w = new WaterContent(optimum.WaterContent.Value);
         var density = new Density(optimum.MaximumDryDensity.Value);
         var unit = test.Units.Density.InKilogramsPerCubicMeter();
-        var saturation = test.SpecificGravity is { } gravity && PhaseRelations.VoidRatio(density, gravity.Value, test.WaterDensity) is (> 0 and var voidRatio)
-            ? PhaseRelations.Saturation(w, voidRatio, gravity.Value) * 100
-            : (double?)null;
         var water = ToAnswer(optimum.WaterContent, 0.01);
         var maximum = ToAnswer(optimum.MaximumDryDensity, unit);
         return new OptimumAnswer(
             w.Percent,
             density.In(test.Units.Density),
-            saturation,
+            SaturationAt(w, density, test),
             water is null && maximum is null ? null : new OptimumUncertaintyAnswer
             {
                 WaterContent = water,
@@ -141,6 +132,12 @@ internal sealed class MoistureDensityJob(Limits limits)
             },
             Reported(test, w, density));
     }
+
+    /// <summary>Degree of saturation at a point, %; null without a specific gravity, or where the solids leave no voids.</summary>
+    public static double? SaturationAt(WaterContent w, Density density, MoistureDensityTest test) =>
+        test.SpecificGravity is { } gravity && PhaseRelations.VoidRatio(density, gravity.Value, test.WaterDensity) is (> 0 and var voidRatio)
+            ? PhaseRelations.Saturation(w, voidRatio, gravity.Value) * 100
+            : null;
 
     private static UncertaintyAnswer? ToAnswer(Estimate estimate, double unit) => estimate.StandardUncertainty is { } standard
         ? new UncertaintyAnswer(standard / unit, estimate is { Lower: { } lower, Upper: { } upper } ? [lower / unit, upper / unit] : null, Coverage)

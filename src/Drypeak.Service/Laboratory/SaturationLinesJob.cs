@@ -26,8 +26,9 @@ internal static class SaturationLinesJob
     {
         var units = request.Units.ToUnitSet();
         var (gravity, water) = (request.SpecificGravity!.Value!.Value, request.Water());
-        var contents = WaterContentsOf(request).Select(WaterContent.FromPercent).ToList();
-        IReadOnlyList<double[]> Points(Func<WaterContent, Density> line) => [.. contents.Select(w => new[] { w.Percent, line(w).In(units.Density) })];
+        var contents = WaterContentsOf(request).ToList();
+        IReadOnlyList<double[]> Points(Func<WaterContent, Density> line) =>
+            [.. contents.Select(percent => new[] { percent, line(WaterContent.FromPercent(percent)).In(units.Density) })];
         var saturations = request.Saturation ?? (request.AirVoids is null ? [100] : []);
         return new SaturationLinesAnswer
         {

@@ -22,7 +22,7 @@ internal readonly record struct MinimizationOutcome(bool IsStationary, double Su
 /// <summary>
 /// Nonlinear least squares by damped Gauss–Newton steps (K. Levenberg, Quarterly of Applied Mathematics 2 (1944) 164–168;
 /// D. W. Marquardt, SIAM Journal 11 (1963) 431–441). Each step is a linear least-squares problem by reflections. Where the residuals stay large
-/// such steps crawl; once they do, Newton steps with the gradient's own differences are tried between them.
+/// such steps crawl; once they do, Newton steps take their place, with the bend of the model itself measured by differences and kept while they are quick.
 /// It ends at a stationary point, where every column of the Jacobian is at right angles to the residuals, and not at a small
 /// change of the sum: an answer must not depend on the way by which it was reached.
 /// </summary>
@@ -30,7 +30,7 @@ internal static class GaussNewton
 {
     private const int MostOnStack = 2048;
 
-    /// <summary>Largest cosine between a column of the Jacobian and the residuals that counts as a right angle.</summary>
+    /// <summary>A right angle to all digits that the arithmetic has, for most data.</summary>
     private const double RightAngle = 1e-11;
 
     /// <summary>Below this relative change the sum of squares is rounding, and the gradient decides whether a step was good.</summary>
@@ -40,7 +40,7 @@ internal static class GaussNewton
     private const double Slow = 0.3;
 
     /// <summary>Slope from which on Newton steps are tried.</summary>
-    private const double GreatestNewtonSlope = 0.1;
+    private const double GreatestNewtonSlope = 0.03;
 
     /// <summary>Step of the differences of the gradient, as a share of the change in a parameter that would outweigh the residuals.</summary>
     private const double Difference = 1e-4;
@@ -54,33 +54,40 @@ internal static class GaussNewton
     /// <param name="parameters">The starting point; on return the best found.</param>
     /// <param name="longestStep">Largest change of any one parameter in a step; infinite for none.</param>
     /// <param name="mostSteps">Steps after which to give up.</param>
+    /// <param name="rightAngle">Largest cosine between a column of the Jacobian and the residuals that counts as a right angle.</param>
     public static MinimizationOutcome Minimize<TModel>(
-        in TModel model, Span<double> parameters, double longestStep = double.PositiveInfinity, int mostSteps = 1000)
+        in TModel model, Span<double> parameters, double longestStep = double.PositiveInfinity, int mostSteps = 1000, double rightAngle = RightAngle)
         where TModel : IResiduals, allows ref struct
     {
         var (count, width) = (model.Count, parameters.Length);
         var (each, rows) = (count * (width + 1), count + width);
-        var size = (2 * each) + (rows * (width + 1)) + (2 * width);
+        var size = (2 * each) + (rows * (width + 1)) + (width * (width + 2));
         Span<double> work = size <= MostOnStack ? stackalloc double[size] : new double[size];
         var now = new Evaluation(work[..each], count);
         var next = new Evaluation(work.Slice(each, each), count);
         var matrix = work.Slice(2 * each, rows * width);
         var side = work.Slice((2 * each) + (rows * width), rows);
+        var bend = work.Slice((2 * each) + (rows * (width + 1)), width * width);
         var step = work.Slice(size - (2 * width), width);
         var trial = work[(size - width)..];
 
         now.At(model, parameters);
-        var (damping, newtonBelow, isNewton) = (FirstDamping, GreatestNewtonSlope, false);
+        var (damping, newtonBelow, isNewton, isBendStale) = (FirstDamping, GreatestNewtonSlope, false, true);
         for (var tried = 0; tried < mostSteps; tried++)
         {
-            if (now.Slope <= RightAngle)
+            if (now.Slope <= rightAngle)
             {
                 return new(true, now.Sum, tried);
             }
 
             if (isNewton)
             {
-                now.WriteNewtonSystem(model, parameters, ref next, trial, matrix, side);
+                if (isBendStale)
+                {
+                    now.MeasureBend(model, parameters, ref next, trial, bend);
+                }
+
+                now.WriteNewtonSystem(bend, matrix, side);
             }
             else
             {
@@ -99,7 +106,8 @@ internal static class GaussNewton
                 if (next.IsBetterThan(now))
                 {
                     damping = isNewton ? damping : Math.Max(damping / 10, LeastDamping);
-                    isNewton |= next.Slope > Slow * now.Slope && next.Slope < newtonBelow;
+                    isBendStale = next.Slope > Slow * now.Slope;
+                    isNewton |= isBendStale && next.Slope < newtonBelow;
                     trial.CopyTo(parameters);
                     var former = now;
                     now = next;
@@ -110,7 +118,7 @@ internal static class GaussNewton
 
             if (isNewton)
             {
-                (isNewton, newtonBelow) = (false, now.Slope / 2);
+                (isNewton, isBendStale, newtonBelow) = (false, true, now.Slope / 2);
             }
             else if (damping > GreatestDamping)
             {
@@ -176,24 +184,23 @@ internal static class GaussNewton
         public readonly bool IsBetterThan(in Evaluation other) =>
             Sum < other.Sum * (1 - RoundingOfSum) || (Sum <= other.Sum * (1 + RoundingOfSum) && Slope < other.Slope);
 
-        /// <summary>Newton's equations: the second derivatives by central differences of the gradient, and the gradient to be cancelled.</summary>
+        /// <summary>What the second derivatives of half the sum have beyond Jᵀ·J, by central differences of the gradient: the model's own bend.</summary>
         /// <param name="model">The model.</param>
         /// <param name="parameters">Where this evaluation stands.</param>
         /// <param name="beside">Room for an evaluation beside it.</param>
         /// <param name="place">Room for its parameters.</param>
-        /// <param name="matrix">Gets the second derivatives, column by column.</param>
-        /// <param name="side">Gets the gradient, sign turned.</param>
-        public readonly void WriteNewtonSystem<TModel>(
-            in TModel model, ReadOnlySpan<double> parameters, ref Evaluation beside, Span<double> place, Span<double> matrix, Span<double> side)
+        /// <param name="bend">Gets them, column by column.</param>
+        public readonly void MeasureBend<TModel>(
+            in TModel model, ReadOnlySpan<double> parameters, ref Evaluation beside, Span<double> place, Span<double> bend)
             where TModel : IResiduals, allows ref struct
         {
             var width = parameters.Length;
             parameters.CopyTo(place);
+            bend.Clear();
             for (var j = 0; j < width; j++)
             {
                 var h = Difference * Math.Sqrt(Sum) / LeastSquares.Length(Column(j));
-                var column = matrix.Slice(j * width, width);
-                column.Clear();
+                var column = bend.Slice(j * width, width);
                 place[j] = parameters[j] + h;
                 beside.At(model, place);
                 beside.AddGradient(1 / (2 * h), column);
@@ -203,8 +210,28 @@ internal static class GaussNewton
                 place[j] = parameters[j];
             }
 
+            AddProducts(-1, width, bend);
+        }
+
+        /// <summary>Newton's equations: all second derivatives, and the gradient to be cancelled.</summary>
+        public readonly void WriteNewtonSystem(ReadOnlySpan<double> bend, Span<double> matrix, Span<double> side)
+        {
+            var width = jacobian.Length / count;
+            bend.CopyTo(matrix);
+            AddProducts(1, width, matrix);
             side.Clear();
             AddGradient(-1, side[..width]);
+        }
+
+        private readonly void AddProducts(double scale, int width, Span<double> matrix)
+        {
+            for (var j = 0; j < width; j++)
+            {
+                for (var i = 0; i < width; i++)
+                {
+                    matrix[(j * width) + i] += scale * LeastSquares.Dot(Column(i), Column(j));
+                }
+            }
         }
 
         private readonly void AddGradient(double scale, Span<double> sum)

@@ -86,4 +86,10 @@ internal static class LegShapes
         new(5, 5, 0.150, "shareStraight", "two straight legs with a rounded top"),
         new(6, 5, 0.050, "shareTurningBack", "a dry leg that turns back up, as of a bulking sand, and a straight wet leg"),
     ];
+
+    /// <summary>The dry leg of each pair.</summary>
+    public static readonly LegShape[] DryOfPair = [.. Pairs.Select(pair => Dry[pair.Dry])];
+
+    /// <summary>The wet leg of each pair.</summary>
+    public static readonly LegShape[] WetOfPair = [.. Pairs.Select(pair => Wet[pair.Wet])];
 }

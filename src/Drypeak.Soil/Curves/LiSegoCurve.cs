@@ -86,20 +86,23 @@ internal readonly struct LiSegoCurve : ICurve
         return density;
     }
 
-    /// <summary>Of the sign of −dρd/dw: below 0 where the curve rises, above 0 where it falls; Sr − w·dSr/dw.</summary>
-    public double Fall(double waterContent)
+    /// <summary>dρd/dw, Mg/m³: −ρ²/ρw·(Sr − w·dSr/dw)/Sr².</summary>
+    public double Slope(double waterContent)
     {
         var w = Math.Max(waterContent, LeastWaterContent);
-        if (w >= wm)
+        var (saturation, fall) = (greatestSaturation, greatestSaturation);
+        if (w < wm)
         {
-            return greatestSaturation;
+            var u = Math.Max(1 - (w / wm), LeastDistance);
+            var power = Power(n * Math.Log(u));
+            var dryness = u * power * (1 + k) / (power + k);
+            var rise = dryness * ((n + 1) - (n * power / (power + k))) / (u * wm);
+            saturation = greatestSaturation * (1 - dryness);
+            fall = greatestSaturation * (1 - dryness - (w * rise));
         }
 
-        var u = Math.Max(1 - (w / wm), LeastDistance);
-        var power = Power(n * Math.Log(u));
-        var dryness = u * power * (1 + k) / (power + k);
-        var slope = dryness * ((n + 1) - (n * power / (power + k))) / (u * wm);
-        return greatestSaturation * (1 - dryness - (w * slope));
+        var density = waterDensity / (volumeOfSolids + (w / saturation));
+        return -density * density * fall / (waterDensity * saturation * saturation);
     }
 
     private double Saturation(double w)

@@ -30,10 +30,9 @@ internal struct PeakNode
     /// <summary>Density that the node's shape loses from its peak to a water content, for the scale 1, and the leg on which that lies.</summary>
     public readonly double DropAt(double waterContent, TestedPoints points, out NodeLeg leg)
     {
-        var (pair, fromPeak) = (LegShapes.Pairs[Pair], waterContent - Peak);
+        var fromPeak = waterContent - Peak;
         leg = fromPeak < 0 ? Dry : Wet;
-        ref readonly var shape = ref fromPeak < 0 ? ref LegShapes.Dry[pair.Dry] : ref LegShapes.Wet[pair.Wet];
-        return shape.Drop(Math.Abs(fromPeak), points.SaturationSlope, points.RelativeDensity);
+        return (fromPeak < 0 ? LegShapes.DryOfPair : LegShapes.WetOfPair)[Pair].Drop(Math.Abs(fromPeak), points.SaturationSlope, points.RelativeDensity);
     }
 }
 

@@ -47,21 +47,28 @@ internal sealed class SaturationMode
     /// <summary>Step of the differences in water content.</summary>
     private const double Step = 2e-4;
 
+    /// <summary>√½ of it: a difference of slopes over this step is a second difference of densities over that one, without its loss of digits.</summary>
+    private const double CurvatureStep = 1.4142135623730951e-4;
+
     /// <summary>Intervals of the range that are searched for a peak; no Li–Sego curve has two within one.</summary>
     private const int SearchIntervals = 32;
 
     private const double PeakAccuracy = 1e-13;
     private const double LongestStep = 1;
+
+    /// <summary>Where the gradient counts as vanished, for a fit to all digits and for a prediction to a hundredth of the noise.</summary>
+    private const double RightAngle = 1e-10, NearRightAngle = 1e-4;
+
     private const int MostSteps = 250;
 
     private readonly double[] parameters = new double[Parameters];
     private readonly double[] inverse = new double[Parameters * Parameters];
 
-    private SaturationMode(TestedPoints points, double specificGravity, in SaturationPrior prior, ReadOnlySpan<double> start)
+    private SaturationMode(TestedPoints points, double specificGravity, in SaturationPrior prior, ReadOnlySpan<double> start, double rightAngle)
     {
         start.CopyTo(parameters);
         var residuals = new Residuals(points, specificGravity, prior);
-        SumOfSquares = GaussNewton.Minimize(residuals, parameters, LongestStep, MostSteps).SumOfSquares;
+        SumOfSquares = GaussNewton.Minimize(residuals, parameters, LongestStep, MostSteps, rightAngle).SumOfSquares;
         LogDeterminant = residuals.InvertInformation(parameters, inverse);
         Curve = new LiSegoCurve(parameters, specificGravity, points.WaterDensity);
     }
@@ -85,14 +92,14 @@ internal sealed class SaturationMode
     {
         Span<double> centers = stackalloc double[Parameters];
         SaturationPrior.Centers(points.Wettest, centers);
-        var mode = new SaturationMode(points, specificGravity, prior, centers);
+        var mode = new SaturationMode(points, specificGravity, prior, centers, RightAngle);
         mode.Peak = mode.FindPeak(points);
         return mode;
     }
 
-    /// <summary>Fits other points from where this fit ended, without looking for a peak.</summary>
+    /// <summary>Fits other points from where this fit ended, to a hundredth of the noise, without looking for a peak.</summary>
     public SaturationMode Refit(TestedPoints others, double specificGravity, in SaturationPrior prior) =>
-        new(others, specificGravity, prior, parameters);
+        new(others, specificGravity, prior, parameters, NearRightAngle);
 
     /// <summary>Variance of a function of the parameters with this gradient.</summary>
     public double Variance(ReadOnlySpan<double> gradient) => LeastSquares.Variance(inverse, gradient);
@@ -108,17 +115,17 @@ internal sealed class SaturationMode
     private PeakEstimate? FindPeak(TestedPoints points)
     {
         var (found, highest) = (double.NaN, Math.Max(Curve.Density(points.Driest), Curve.Density(points.Wettest)));
-        var (left, fallLeft) = (points.Driest, Curve.Fall(points.Driest));
+        var (left, slopeLeft) = (points.Driest, Curve.Slope(points.Driest));
         for (var i = 1; i <= SearchIntervals; i++)
         {
             var right = points.Driest + (points.Range * i / SearchIntervals);
-            var fallRight = Curve.Fall(right);
-            if (fallLeft < 0 && fallRight >= 0 && Brent.TryFindRoot(Curve.Fall, left, right, PeakAccuracy, 100, out var top) && Curve.Density(top) > highest)
+            var slopeRight = Curve.Slope(right);
+            if (slopeLeft > 0 && slopeRight <= 0 && Brent.TryFindRoot(Curve.Slope, left, right, PeakAccuracy, 100, out var top) && Curve.Density(top) > highest)
             {
                 (found, highest) = (top, Curve.Density(top));
             }
 
-            (left, fallLeft) = (right, fallRight);
+            (left, slopeLeft) = (right, slopeRight);
         }
 
         return double.IsNaN(found) ? null : WithVariances(found);
@@ -131,7 +138,9 @@ internal sealed class SaturationMode
         Span<double> drier = stackalloc double[Parameters];
         Span<double> wetter = stackalloc double[Parameters];
         var density = Curve.Density(top, atTop);
-        var curvature = (Curve.Density(top + Step, wetter) + Curve.Density(top - Step, drier) - (2 * density)) / (Step * Step);
+        Curve.Density(top + Step, wetter);
+        Curve.Density(top - Step, drier);
+        var curvature = (Curve.Slope(top + CurvatureStep) - Curve.Slope(top - CurvatureStep)) / (2 * CurvatureStep);
         if (!(curvature < 0))
         {
             return null;

@@ -169,6 +169,25 @@ public sealed class LaboratoryPageTests(PageService service) : IClassFixture<Pag
     }
 
     [Fact]
+    public async Task What_is_wrong_is_said_in_the_words_of_the_form_and_not_in_those_of_the_contract()
+    {
+        (string, string)[][] forms =
+        [
+            [("mold-mass", "4250"), ("mold-volume", "943.3"), ("cell-0-1", "6027")],
+            [("cell-0-5", "10.4")],
+            [("mold-volume", "943.3"), ("mold-diameter", "101.6"), ("cell-0-1", "6027"), ("cell-0-5", "10.4")],
+            [("mold-mass", "4250"), ("mold-volume", "943.3"), ("cell-0-1", "4000"), ("cell-0-5", "10.4"), ("cell-1-6", "1.7"), ("cell-1-7", "1.8")],
+            [("table", "Specimen Tin Tin + wet soil Tin + dry soil\nA 30 20 25")],
+        ];
+        foreach (var form in forms)
+        {
+            var (response, page) = await service.PostAsync("/", form);
+            Assert.NotEqual(HttpStatusCode.OK, response.StatusCode);
+            Assert.DoesNotMatch(@"\b[a-z]+[A-Z]|[a-z]\.[a-z]|carbide", page.QuerySelector("[role=alert]")!.TextContent);
+        }
+    }
+
+    [Fact]
     public async Task Without_an_optimum_the_page_says_so_and_what_to_do()
     {
         var (_, page) = await service.GetAsync("/?demo=still-rising");

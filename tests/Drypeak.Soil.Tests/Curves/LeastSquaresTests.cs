@@ -96,7 +96,8 @@ public sealed class LeastSquaresTests
                 var decay = Math.Exp(-b[1] * x);
                 (gradient[0], gradient[1]) = (1 - decay, b[0] * x * decay);
                 return b[0] * (1 - decay);
-            },
+            }
+            ,
             "Thurber" => (x, b, gradient) =>
             {
                 var above = b[0] + (x * (b[1] + (x * (b[2] + (x * b[3])))));
@@ -112,14 +113,16 @@ public sealed class LeastSquaresTests
                 }
 
                 return above / below;
-            },
+            }
+            ,
             "MGH09" => (x, b, gradient) =>
             {
                 var (above, below) = ((x * x) + (x * b[1]), (x * x) + (x * b[2]) + b[3]);
                 (gradient[0], gradient[1]) = (above / below, b[0] * x / below);
                 (gradient[2], gradient[3]) = (-b[0] * above * x / (below * below), -b[0] * above / (below * below));
                 return b[0] * above / below;
-            },
+            }
+            ,
             "Eckerle4" => (x, b, gradient) =>
             {
                 var z = (x - b[2]) / b[1];
@@ -128,7 +131,8 @@ public sealed class LeastSquaresTests
                 gradient[1] = b[0] * bell * ((z * z) - 1) / b[1];
                 gradient[2] = b[0] * bell * z / b[1];
                 return b[0] * bell;
-            },
+            }
+            ,
             _ => throw new ArgumentOutOfRangeException(nameof(name), name, "No model of that name."),
         };
     }

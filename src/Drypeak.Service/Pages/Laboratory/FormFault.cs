@@ -63,16 +63,7 @@ public sealed partial record FormFault(string Control, Field Field, string Where
     private static string ControlOf(FormReading reading, int row, CellAt? cell) =>
         reading.FromGrid ? TestForm.CellName(new CellAt(reading.GridRowOf(row), cell?.Column ?? 0)) : Field.Table.Name;
 
-    private static int Position(FormFault fault)
-    {
-        var position = 0;
-        while (Field.All[position] != fault.Field)
-        {
-            position++;
-        }
-
-        return position;
-    }
+    private static int Position(FormFault fault) => Field.All.TakeWhile(field => field != fault.Field).Count();
 
     [GeneratedRegex("^/specimens/(?<row>[0-9]+)")]
     private static partial Regex SpecimenAt();

@@ -23,7 +23,8 @@ public sealed class FormReading
         Request = Read();
     }
 
-    public MoistureDensityRequest Request { get; private set; }
+    /// <summary>The request, as far as the form could be read.</summary>
+    public MoistureDensityRequest Request { get; }
 
     /// <summary>What could not be read.</summary>
     public IReadOnlyList<Fault> Unreadable => _unreadable;

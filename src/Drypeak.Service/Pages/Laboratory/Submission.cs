@@ -26,7 +26,8 @@ public sealed record Submission(TestForm Form, FormReading? Reading, IReadOnlyLi
     public bool MoreAsked => Faults.Any(fault => FieldsUnderMore.Contains(fault.Field));
 
     /// <summary>What is wrong with a field, or null.</summary>
-    public string? FaultOf(Field field) => Faults.FirstOrDefault(fault => fault.Field == field)?.Advice;
+    public string? FaultOf(Field field) =>
+        Faults.Where(fault => fault.Field == field).Select(fault => fault.Advice).ToList() is { Count: > 0 } advice ? string.Join(" ", advice) : null;
 
     /// <summary>What is wrong at a control: several sentences where it is the table.</summary>
     public IReadOnlyList<string> FaultsAt(string control) => [.. Faults.Where(fault => fault.Control == control).Select(fault => fault.Where == fault.Field.Label ? fault.Advice : fault.Message)];

@@ -53,7 +53,7 @@ public static class Working
             {
                 Add("compactive effort", Formulas.Effort,
                     $"{Number(effort.Rammer.Kilograms)}*{Number(UnitTable.StandardGravity)}*{Number(effort.Drop.Meters)}*{effort.Layers}*{effort.BlowsPerLayer}/{Number(mold.CubicMeters)}/1000",
-                    TestMethods.CompactiveEffort.Of(effort.Rammer, effort.Drop, effort.Layers, effort.BlowsPerLayer, mold).KilojoulesPerCubicMeter, "kJ/m³");
+                    EffortSeries.EffortOf(test, specimens)!.Value.KilojoulesPerCubicMeter, "kJ/m³");
             }
         }
 
