@@ -5,6 +5,7 @@ using System.Text.Json;
 using Drypeak.Figures;
 using Drypeak.Service.Contracts;
 using Drypeak.Service.Hosting;
+using Drypeak.Soil.Laboratory.Review;
 
 namespace Drypeak.Service.Charts;
 
@@ -23,9 +24,11 @@ internal static class ChartAddress
     private const int BrotliWindow = 18;
 
     /// <summary>Said where a chart is too large for an address.</summary>
-    public static Finding TooLongForALink { get; } = new("no-chart-address", Severity.Note,
-        "The chart holds more than an address can carry, so no links are given. Post the request with Accept: image/svg+xml, image/png or application/pdf to get the picture.",
-        "", "RFC 9110 section 4.1: request lines of 8000 bytes are the most to count on");
+    public static FindingKind TooLongForALink { get; } = new("no-chart-address", Severity.Note,
+        "The chart holds more than an address can carry.",
+        "An address that a server or a browser cuts short would open no picture.",
+        "Post the request with Accept: image/svg+xml, image/png or application/pdf to get the picture.",
+        "RFC 9110 section 4.1: request lines of 8000 bytes are the most to count on");
 
     /// <summary>The addresses of a chart's pictures; none where it is too large.</summary>
     public static LinksContract LinksFor(string job, CompactionChart chart, int addressBytes)

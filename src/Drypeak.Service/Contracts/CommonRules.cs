@@ -34,11 +34,11 @@ internal sealed class TinRules : AbstractValidator<TinContract>
         RuleFor(tin => tin.Tin).Needed().NotNegative();
         RuleFor(tin => tin.Wet).Needed().Positive();
         RuleFor(tin => tin.Dry).Needed().Positive();
-        // A mass that is impossible by itself is one fault: nothing is held against it.
+        // One fault a tin: a mass that is impossible by itself is not held against the others, nor one too heavy against the tin.
         RuleFor(tin => tin.Dry).Must((tin, dry) => !(tin.Wet > 0 && dry > tin.Wet))
             .WithErrorCode("dry-over-wet")
             .WithMessage((tin, dry) => $"Tin and dry soil, {RuleWords.Text(dry)}, are heavier than tin and wet soil, {RuleWords.Text(tin.Wet)}. Were the two exchanged?");
-        RuleFor(tin => tin.Dry).Must((tin, dry) => !(dry > 0 && dry <= tin.Tin))
+        RuleFor(tin => tin.Dry).Must((tin, dry) => !(dry > 0 && dry <= tin.Tin && dry <= tin.Wet))
             .WithErrorCode("dry-not-over-tin")
             .WithMessage((tin, dry) => $"Tin and dry soil, {RuleWords.Text(dry)}, are not heavier than the empty tin, {RuleWords.Text(tin.Tin)}. Give the masses with the tin.");
     }

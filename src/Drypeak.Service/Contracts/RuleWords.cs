@@ -17,18 +17,23 @@ internal static class RuleWords
     public const double Least = 1e-9;
 
     public static IRuleBuilderOptions<T, double?> Positive<T>(this IRuleBuilder<T, double?> rule) =>
-        rule.Must(value => value is null or (>= Least and <= Greatest))
+        rule.Must(value => value is null or >= Least)
             .WithErrorCode("not-positive")
             .WithMessage((_, value) => value > 0
-                ? $"It must lie between 0 and {Text(Greatest)}; {Text(value)} was received. Check the value and its unit."
-                : $"It must be greater than 0; {Text(value)} was received.");
+                ? $"It must be at least {Text(Least)}; {Text(value)} was received. Check the value and its unit."
+                : $"It must be greater than 0; {Text(value)} was received.")
+            .NotTooLarge();
 
     public static IRuleBuilderOptions<T, double?> NotNegative<T>(this IRuleBuilder<T, double?> rule) =>
-        rule.Must(value => value is null or (>= 0 and <= Greatest))
+        rule.Must(value => value is null or >= 0)
             .WithErrorCode("negative")
-            .WithMessage((_, value) => value > 0
-                ? $"It must not be over {Text(Greatest)}; {Text(value)} was received. Check the value and its unit."
-                : $"It must not be negative; {Text(value)} was received.");
+            .WithMessage((_, value) => $"It must not be negative; {Text(value)} was received.")
+            .NotTooLarge();
+
+    private static IRuleBuilderOptions<T, double?> NotTooLarge<T>(this IRuleBuilderOptions<T, double?> rule) =>
+        rule.Must(value => !(value > Greatest))
+            .WithErrorCode("out-of-range")
+            .WithMessage((_, value) => $"It must not be over {Text(Greatest)}; {Text(value)} was received. Check the value and its unit.");
 
     public static IRuleBuilderOptions<T, double?> Within<T>(this IRuleBuilder<T, double?> rule, double least, double greatest, string unit = "") =>
         rule.Must(value => value is null || (value >= least && value <= greatest))
@@ -53,15 +58,15 @@ internal static class RuleWords
             .WithErrorCode("too-long")
             .WithMessage((_, value) => $"It may have up to {characters} characters; it has {value!.Length}. Shorten it.");
 
-    public static IRuleBuilderOptions<T, string?> NotBlank<T>(this IRuleBuilder<T, string?> rule, string what) =>
+    public static IRuleBuilderOptions<T, string?> NotBlank<T>(this IRuleBuilder<T, string?> rule, string what, string advice = "Write it, or leave the member out.") =>
         rule.Must(value => value is null || !string.IsNullOrWhiteSpace(value))
             .WithErrorCode("blank")
-            .WithMessage($"{what} must not be blank. Write it, or leave the member out.");
+            .WithMessage($"{what} must not be blank. {advice}");
 
     public static IRuleBuilderOptions<T, IReadOnlyList<TItem>?> Counted<T, TItem>(this IRuleBuilder<T, IReadOnlyList<TItem>?> rule, int greatest) =>
         rule.Must(list => list is null or { Count: > 0 })
             .WithErrorCode("empty-list")
-            .WithMessage("The list must not be empty.")
+            .WithMessage("The list must not be empty. Give one item or more.")
             .Must(list => list is null || list.Count <= greatest)
             .WithErrorCode("too-many")
             .WithMessage((_, list) => $"The list may have up to {greatest} items; it has {list!.Count}.");

@@ -1,3 +1,4 @@
+using Drypeak.Service.Charts;
 using Drypeak.Service.Hosting;
 using Drypeak.Soil.Laboratory.Review;
 
@@ -8,7 +9,7 @@ internal static class FindingKindsEndpoint
 {
     private static readonly IReadOnlyList<FindingKindAnswer> Kinds =
     [
-        .. FindingKinds.All.Select(kind => new FindingKindAnswer(
+        .. FindingKinds.All.Append(ChartAddress.TooLongForALink).Select(kind => new FindingKindAnswer(
             kind.Code, kind.Severity.ToString().ToLowerInvariant(), kind.Meaning, kind.Why, kind.Remedy, kind.Basis)),
     ];
 

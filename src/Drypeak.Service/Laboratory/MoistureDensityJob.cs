@@ -35,7 +35,7 @@ internal sealed class MoistureDensityJob(Limits limits)
         var findings = result.Findings.Select(FindingContract.Of);
         if (links is { Svg: null })
         {
-            findings = findings.Append(FindingContract.Of(ChartAddress.TooLongForALink));
+            findings = findings.Append(FindingContract.Of(ChartAddress.TooLongForALink.At("", "The chart holds more than an address can carry, so no links are given. Post the request with Accept: image/svg+xml, image/png or application/pdf to get the picture.")));
         }
 
         return new MoistureDensityOutcome(

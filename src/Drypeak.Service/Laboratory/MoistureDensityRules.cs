@@ -60,14 +60,13 @@ internal sealed class MoistureDensityRules(Limits limits)
             }
 
             var measured = specimen.ToMeasurement(i, units);
-            if (MissingOfMold(measured, mold, place) is not { } missing)
+            var missing = MissingOfMold(measured, mold, place).ToList();
+            if (missing.Count == 0)
             {
                 SpecimenReduction.Reduce(measured, mold, place, units, contradictions);
             }
-            else if (!contradictions.Contains(missing))
-            {
-                contradictions.Add(missing);
-            }
+
+            contradictions.AddRange(missing.Except(contradictions));
         }
 
         return contradictions;
@@ -77,23 +76,32 @@ internal sealed class MoistureDensityRules(Limits limits)
     /// What a specimen's masses need of the mold and do not find: at the mold, so that a mold that all share is complained of once, and not
     /// at all where its form is at fault.
     /// </summary>
-    private static Fault? MissingOfMold(SpecimenMeasurement measured, Mold? testMold, string place)
+    private static IEnumerable<Fault> MissingOfMold(SpecimenMeasurement measured, Mold? testMold, string place)
     {
         if (measured is { MoldAndWetSoil: null, WetMass: null } or { WetDensity: { } } or { DryDensity: { } })
         {
-            return null;
+            yield break;
         }
 
         var mold = measured.Mold?.Over(testMold) ?? testMold;
         var moldPlace = measured.Mold is null ? "/mold" : place + "/mold";
-        return (mold, measured.WetMass) switch
+        if (mold is null)
         {
-            (null, null) => new Fault(moldPlace, "not-enough-data", "Masses of mold and wet soil need the mold: give mold.mass and mold.volume, for the test or for each specimen."),
-            (null, _) => new Fault(moldPlace, "not-enough-data", "Wet masses need the mold: give mold.volume, for the test or for each specimen."),
-            ({ EmptyMass: null }, null) => new Fault(moldPlace + "/mass", "not-enough-data", "The mass of the empty mold is missing. Give it, or the wet mass alone."),
-            ({ Volume: null, WaterFilling: null, Diameter: null }, _) => new Fault(moldPlace + "/volume", "not-enough-data", "The volume of the mold is missing. Give it, or diameter and height, or empty and withWater."),
-            _ => null,
-        };
+            yield return new Fault(moldPlace, "not-enough-data", measured.WetMass is null
+                ? "Masses of mold and wet soil need the mold: give mold.mass and mold.volume, for the test or for each specimen."
+                : "Wet masses need the mold: give mold.volume, for the test or for each specimen.");
+            yield break;
+        }
+
+        if (measured.WetMass is null && mold.EmptyMass is null)
+        {
+            yield return new Fault(moldPlace + "/mass", "not-enough-data", "The mass of the empty mold is missing. Give it, or the wet mass alone.");
+        }
+
+        if (mold is { Volume: null, WaterFilling: null, Diameter: null })
+        {
+            yield return new Fault(moldPlace + "/volume", "not-enough-data", "The volume of the mold is missing. Give it, or diameter and height, or empty and withWater.");
+        }
     }
 
     private sealed class RequestRules : AbstractValidator<MoistureDensityRequest>
@@ -101,8 +109,9 @@ internal sealed class MoistureDensityRules(Limits limits)
         public RequestRules(Limits limits)
         {
             RuleFor(request => request.Reference).AtMost(limits.NameCharacters);
-            RuleFor(request => request.Method).OneOf([.. TestMethodCatalogue.Codes, MoistureDensityMapping.CustomMethod], "unknown-method");
-            RuleFor(request => request.Effort).Null().When(request => request.Method != MoistureDensityMapping.CustomMethod)
+            RuleFor(request => request.Method).Must(code => code is null || IsMethod(code))
+                .WithErrorCode("unknown-method").WithMessage((_, code) => NoSuchMethod(code!));
+            RuleFor(request => request.Effort).Null().When(request => request.Method is null || TestMethodCatalogue.Find(request.Method) is { })
                 .WithErrorCode("not-for-this-method").WithMessage("An effort goes with method \"custom\" only; the others bring their own. Leave it out, or name \"custom\".");
             RuleFor(request => request.Effort!).SetValidator(new EffortRules()).When(request => request.Effort is { });
             RuleFor(request => request.Units!).SetValidator(new UnitsRules()).When(request => request.Units is { });
@@ -121,12 +130,20 @@ internal sealed class MoistureDensityRules(Limits limits)
             RuleFor(request => request.Uncertainty!).SetValidator(new UncertaintyRules()).When(request => request.Uncertainty is { });
         }
 
+        private static bool IsMethod(string code) => code == MoistureDensityMapping.CustomMethod || TestMethodCatalogue.Find(code) is { };
+
+        private static string NoSuchMethod(string code)
+        {
+            var meant = NearestName.Of(code, TestMethodCatalogue.Codes);
+            return $"There is no method \"{Received.Shorten(code)}\". {(meant is null ? "" : $"Did you mean \"{meant}\"? ")}The codes are listed at /v1/test-methods; \"custom\" is the caller's own.";
+        }
+
         private static void CheckLabels(IReadOnlyList<SpecimenContract>? specimens, ValidationContext<MoistureDensityRequest> context)
         {
             var first = new Dictionary<string, int>(StringComparer.Ordinal);
             for (var i = 0; i < specimens?.Count; i++)
             {
-                if (specimens[i] is { } specimen && !first.TryAdd(specimen.LabelOr(i), i))
+                if (specimens[i] is { } specimen && !string.IsNullOrWhiteSpace(specimen.LabelOr(i)) && !first.TryAdd(specimen.LabelOr(i), i))
                 {
                     context.Fail($"Specimens[{i}].Label", "repeated-label",
                         $"Specimen {first[specimen.LabelOr(i)] + 1} has the label \"{specimen.LabelOr(i)}\" too. Give each its own.");
@@ -191,7 +208,7 @@ internal sealed class MoistureDensityRules(Limits limits)
         {
             RuleFor(adopted => adopted.WaterContent).Needed().Within(0, 1000, " %");
             RuleFor(adopted => adopted.MaximumDryDensity).Needed().Positive();
-            RuleFor(adopted => adopted.Reason).Needed().NotBlank("The reason for an adopted peak").AtMost(limits.TextCharacters);
+            RuleFor(adopted => adopted.Reason).Needed().NotBlank("The reason for an adopted peak", "Say why it was adopted.").AtMost(limits.TextCharacters);
         }
     }
 

@@ -102,4 +102,14 @@ public sealed class AnswerTests(RunningService service)
             Assert.NotEqual("", finding.Text("/basis"));
         });
     }
+
+    [Fact]
+    public async Task Sixty_four_tests_at_once_are_all_answered_alike()
+    {
+        var responses = await Task.WhenAll(Enumerable.Range(0, 64).Select(_ => service.PostAsync(Body.Sound)));
+        var texts = await Task.WhenAll(responses.Select(RunningService.TextOf));
+        Assert.All(responses, response => Assert.Equal(200, (int)response.StatusCode));
+        Assert.Single(texts.Distinct());
+        Array.ForEach(responses, response => response.Dispose());
+    }
 }

@@ -162,7 +162,7 @@ public sealed class FaultsOfFormTests(RunningService service)
     [InlineData("/curve", """{"model":null,"adopted":null}""")]
     [InlineData("/trace", "null")]
     public async Task Null_is_as_good_as_nothing_where_a_member_is_optional(string place, string json) =>
-        Assert.NotEqual(default, (await service.AnswerAsync(Body.With(place, json))).GetProperty("optimum"));
+        Assert.False((await service.AnswerAsync(Body.With(place, json))).IsNull("/optimum"));
 
     [Theory]
     [InlineData("/reference", "7", "a text")]

@@ -14,9 +14,6 @@ public sealed class FaultsOfValueTests(RunningService service)
     [InlineData("/units/density", "\"mg/m3\"", "unknown-unit")]
     [InlineData("/units/length", "\"inch\"", "unknown-unit")]
     [InlineData("/units/mass", "\"\"", "unknown-unit")]
-    [InlineData("/method", "\"astm-d698\"", "unknown-method")]
-    [InlineData("/method", "\"ASTM-D698-A\"", "unknown-method")]
-    [InlineData("/method", "\"\"", "unknown-method")]
     [InlineData("/specificGravity/determined", "\"guessed\"", "unknown-word")]
     [InlineData("/curve", """{"model":"quartic"}""", "unknown-model", "/curve/model")]
     [InlineData("/curve", """{"model":"Parabola"}""", "unknown-model", "/curve/model")]
@@ -29,11 +26,25 @@ public sealed class FaultsOfValueTests(RunningService service)
     }
 
     [Theory]
+    [InlineData("astm-d698", "Did you mean \"astm-d698-a\"?")]
+    [InlineData("ASTM-D698-A", "Did you mean \"astm-d698-a\"?")]
+    [InlineData("standard", "The codes are listed at /v1/test-methods")]
+    [InlineData("", "The codes are listed at /v1/test-methods")]
+    public async Task An_unknown_method_is_refused_with_the_one_probably_meant_and_where_all_are_listed(string code, string advice)
+    {
+        var refusal = await service.RefusalAsync(Body.With(("/method", $"\"{code}\""), ("/effort", """{"rammerMass":2500,"drop":305,"layers":3,"blows":25}""")));
+        Assert.Equal(422, refusal.Status);
+        Assert.Equal(["/method unknown-method"], refusal.Faults);
+        Assert.Contains(advice, refusal.Message, StringComparison.Ordinal);
+        Assert.InRange(refusal.Message.Length, 1, 200);
+    }
+
+    [Theory]
     [InlineData("/mold/mass", "-1", "negative")]
-    [InlineData("/mold/mass", "1e10", "negative")]
+    [InlineData("/mold/mass", "1e10", "out-of-range")]
     [InlineData("/mold/volume", "0", "not-positive")]
     [InlineData("/mold/volume", "-943", "not-positive")]
-    [InlineData("/mold/volume", "1e300", "not-positive")]
+    [InlineData("/mold/volume", "1e300", "out-of-range")]
     [InlineData("/mold/volume", "1e-300", "not-positive")]
     [InlineData("/specificGravity/value", "0", "out-of-range")]
     [InlineData("/specificGravity/value", "-2.7", "out-of-range")]
@@ -76,6 +87,7 @@ public sealed class FaultsOfValueTests(RunningService service)
     [InlineData("/specimens/1/tins/0/dry", "30.9", "dry-not-over-tin", "30.9", "31")]
     [InlineData("/specimens/1/tins/0/tin", "143", "dry-not-over-tin", "131", "143")]
     [InlineData("/specimens/1/tins/0/wet", "12", "dry-over-wet", "131", "12")]
+    [InlineData("/specimens/1/tins/0", "{\"tin\":200,\"wet\":140,\"dry\":150}", "dry-over-wet", "150", "140")]
     public async Task A_tin_that_cannot_have_been_weighed_so_is_refused_with_both_masses(string place, string json, string code, params string[] masses)
     {
         var refusal = await service.RefusalAsync(Body.With(place, json));
@@ -141,6 +153,7 @@ public sealed class FaultsOfValueTests(RunningService service)
 
     [Theory]
     [InlineData("/mold", Body.Absent, "/mold")]
+    [InlineData("/mold", "{}", "/mold/mass", "/mold/volume")]
     [InlineData("/mold/mass", Body.Absent, "/mold/mass")]
     [InlineData("/mold/volume", Body.Absent, "/mold/volume")]
     [InlineData("/specimens/1/tins", Body.Absent, "/specimens/1")]
@@ -148,12 +161,12 @@ public sealed class FaultsOfValueTests(RunningService service)
     [InlineData("/specimens/1", "{}", "/specimens/1")]
     [InlineData("/specimens/1", """{"waterContent":12}""", "/specimens/1")]
     [InlineData("/specimens/1", """{"dryDensity":1.8}""", "/specimens/1")]
-    public async Task What_is_needed_and_not_given_is_said_once_where_it_is_to_be_added(string place, string json, string expected)
+    public async Task What_is_needed_and_not_given_is_said_once_where_it_is_to_be_added(string place, string json, params string[] expected)
     {
         var refusal = await service.RefusalAsync(Body.With(place, json));
         Assert.Equal(422, refusal.Status);
-        Assert.Equal([$"{expected} not-enough-data"], refusal.Faults);
-        Assert.Contains(" give ", refusal.Message, StringComparison.OrdinalIgnoreCase);
+        Assert.Equal(expected.Select(fault => $"{fault} not-enough-data"), refusal.Faults);
+        Assert.All(refusal.Errors, fault => Assert.Contains(" give ", fault.Message, StringComparison.OrdinalIgnoreCase));
     }
 
     [Theory]
@@ -226,6 +239,7 @@ public sealed class FaultsOfValueTests(RunningService service)
     [InlineData("\"a\"", "\"b\"", "\"a\"", "/specimens/2/label")]
     [InlineData("\"2\"", "null", "null", "/specimens/1/label")]
     [InlineData("null", "\"1\"", "null", "/specimens/1/label")]
+    [InlineData("\"é\"", "\"\\u00e9\"", "null", "/specimens/1/label")]
     public async Task A_label_may_not_repeat_another_nor_the_position_that_stands_for_a_missing_one(string first, string second, string third, string expected)
     {
         var refusal = await service.RefusalAsync(Body.With(("/specimens/0/label", first), ("/specimens/1/label", second), ("/specimens/2/label", third)));

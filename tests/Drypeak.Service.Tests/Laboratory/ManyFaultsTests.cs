@@ -78,6 +78,12 @@ public sealed class ManyFaultsTests(RunningService service)
     }
 
     [Fact]
+    public async Task Two_blank_labels_are_blank_and_not_repeated() =>
+        Assert.Equal(
+            ["/specimens/0/label blank", "/specimens/1/label blank"],
+            (await service.RefusalAsync(Body.With(("/specimens/0/label", "\"\""), ("/specimens/1/label", "\"\"")))).Faults);
+
+    [Fact]
     public async Task No_more_than_two_hundred_faults_are_listed_and_the_rest_are_mentioned()
     {
         var refusal = await service.RefusalAsync(Body.WithSpecimens(Enumerable.Repeat("""{"waterContent":-1}""", 300)));
