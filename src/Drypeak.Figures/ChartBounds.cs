@@ -8,6 +8,7 @@ internal static class ChartBounds
         Refusal(size)
         ?? Numbers(chart).Where(number => !(Math.Abs(number.Value) <= CompactionChart.LargestNumber))
             .Select(number => $"{number.What} must be a number between −1e9 and 1e9, not {number.Value}.").FirstOrDefault()
+        ?? (Intervals(chart).Any(interval => interval is not [_, _]) ? "An interval must have two ends." : null)
         ?? (chart.SpecificGravity <= 0 ? $"The specific gravity must be over 0, not {chart.SpecificGravity}." : null)
         ?? (chart.WaterDensity <= 0 ? $"The density of water must be over 0, not {chart.WaterDensity}." : null)
         ?? chart.Saturation.Where(percent => percent is not (> 0 and <= 100)).Select(percent => $"A saturation must be over 0 and up to 100 %, not {percent}.").FirstOrDefault()
@@ -20,20 +21,21 @@ internal static class ChartBounds
         return fits ? null : $"Width and height must be from {smallest} to {largest} px, not {size.Width} and {size.Height}.";
     }
 
+    private static IEnumerable<double[]> Intervals(CompactionChart chart) =>
+        chart.Optima.SelectMany(optimum => new[] { optimum.WaterContentInterval, optimum.MaximumDryDensityInterval }).OfType<double[]>();
+
     private static IEnumerable<(string What, double Value)> Numbers(CompactionChart chart)
     {
         var points = chart.Specimens.Select(specimen => ("A specimen's", specimen.Point))
             .Concat(chart.Curve.Select(point => ("The curve's", point)))
-            .Concat(new[] { chart.Optimum, chart.Adopted, chart.Corrected }.OfType<ChartOptimum>().Select(optimum => ("An optimum's", optimum.Point)));
+            .Concat(chart.Optima.Select(optimum => ("An optimum's", optimum.Point)));
         foreach (var (whose, point) in points)
         {
             yield return ($"{whose} water content", point.WaterContent);
             yield return ($"{whose} dry density", point.DryDensity);
         }
 
-        foreach (var end in new[] { chart.Optimum, chart.Adopted, chart.Corrected }
-            .OfType<ChartOptimum>()
-            .SelectMany(optimum => (optimum.WaterContentInterval ?? []).Concat(optimum.MaximumDryDensityInterval ?? [])))
+        foreach (var end in Intervals(chart).SelectMany(interval => interval))
         {
             yield return ("An interval's end", end);
         }

@@ -47,6 +47,9 @@ public sealed record CompactionChart
 
     /// <summary>Water content where one more specimen would tell most, %, or null.</summary>
     public double? NextSpecimen { get; init; }
+
+    /// <summary>Every optimum that is given.</summary>
+    internal IEnumerable<ChartOptimum> Optima => new[] { Optimum, Adopted, Corrected }.OfType<ChartOptimum>();
 }
 
 /// <summary>A point of the chart.</summary>

@@ -8,9 +8,6 @@ namespace Drypeak.Figures;
 /// </summary>
 public static class CompactionFigure
 {
-    /// <summary>Above this many specimens their labels would say nothing.</summary>
-    private const int MostLabeledSpecimens = 40;
-
     /// <summary>Why a figure cannot be drawn, as a sentence that gives the bound and the value; null where it can.</summary>
     /// <param name="chart">What to show.</param>
     /// <param name="size">px.</param>
@@ -31,45 +28,34 @@ public static class CompactionFigure
         var wording = new Wording(chart);
         var lines = PhaseLines.Of(chart);
         var heading = Heading.Lay(wording, size, type);
-        var densityValues = wording.Result is { } shown ? [wording.BareDensity(shown)] : Array.Empty<string>();
-        var plot = Plot.Lay(View.Of(chart, lines), heading.Bottom, densityValues, size, type);
-        var axes = new Axes(plot, wording, size, type);
-        var space = new LabelSpace(new Area(0, 0, size.Width, size.Height));
+        var plot = Plot.Lay(View.Of(chart, lines), heading.Bottom, wording, size, type);
 
+        var axes = new Axes(plot, wording, size, type);
+        var phaseLines = new PhaseLineMarks(lines, plot, type);
+        var curve = new CurveLine(chart, plot, type);
         var specimens = new SpecimenMarks(chart, plot, type);
         var optima = new OptimumMarks(chart, wording, plot, type);
-        var curve = Course.Clipped([.. chart.Curve.Select(plot.At)], plot.Area).Select(course => course.Whole()).ToList();
-        var courses = lines.All.Select(line => (Line: line, Course: PhaseLines.Drawn(line, plot))).Where(drawn => drawn.Course is not null).ToList();
 
+        var space = new LabelSpace(new Area(0, 0, size.Width, size.Height).Grown(-1));
+        axes.Block(space);
+        phaseLines.Block(space);
+        curve.Block(space);
         specimens.Block(space);
         optima.Block(space);
-        curve.ForEach(run => space.Block(Barriers.Curve, run));
-        courses.ForEach(drawn => space.Block(Barriers.PhaseLines, drawn.Course!.Whole(), drawn.Line));
-        space.Block(Barriers.Axes, [new(plot.Area.Left, plot.Area.Top), new(plot.Area.Left, plot.Area.Bottom), new(plot.Area.Right, plot.Area.Bottom)]);
 
-        Always(heading.Runs);
-        Always(axes.Titles());
-        if (wording.Result is { } result)
-        {
-            Always([axes.WaterValue(result), axes.DensityValue(result)]);
-        }
-
-        Always(axes.TickLabels());
+        // In the order of importance: what comes later takes the room that is left.
+        space.PlaceEach(heading.Runs);
+        axes.Label(space);
         optima.Label(space);
         var next = NextSpecimenMark.Draw(chart.NextSpecimen, plot, type, space);
-        var phaseLines = courses.ConvertAll(drawn => new Lines(
-            LineLabels.Place(drawn.Line, drawn.Course!, type.Label, drawn.Line.Stroke(type).Color, space),
-            drawn.Line.Stroke(type)) { Name = drawn.Line.Name });
-        if (chart.Specimens.Count <= MostLabeledSpecimens)
-        {
-            specimens.Label(space);
-        }
+        var labeledLines = phaseLines.DrawLabeled(space);
+        specimens.Label(space);
 
-        return new Figure(size, $"{wording.Headline.First} {wording.Headline.Second}", wording.Description, Palette.Light,
+        return new Figure(size, wording.Title, wording.Description, Palette.Light,
         [
             axes.Grid(),
-            new FigurePart("lines", phaseLines),
-            new FigurePart("curve", curve.Count == 0 ? [] : [new Lines(curve, new Stroke(ColorRole.Water, 2 * type.Unit))]),
+            labeledLines,
+            curve.Draw(),
             axes.Frame(),
             next,
             optima.Leaders(),
@@ -77,13 +63,5 @@ public static class CompactionFigure
             optima.Draw(),
             new FigurePart("text", space.Placed),
         ]);
-
-        void Always(IEnumerable<TextRun> texts)
-        {
-            foreach (var text in texts)
-            {
-                space.Place([text], Barriers.None);
-            }
-        }
     }
 }

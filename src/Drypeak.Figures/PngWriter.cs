@@ -1,9 +1,16 @@
-using System.Buffers.Binary;
+using Drypeak.Figures.Drawing;
 using SkiaSharp;
 
 namespace Drypeak.Figures;
 
-/// <summary>Writes a figure as PNG, 8 bit, sRGB, opaque, with its resolution. Equal figures give equal bytes.</summary>
+/// <summary>
+/// Writes a figure as PNG: sRGB, opaque, with its physical resolution, at 8 bits a pixel by a table of colors. Equal figures give equal bytes.
+/// </summary>
+/// <remarks>
+/// A figure has six colors and, at its edges, mixtures of them with paper. By a table it takes a third of the bytes that it takes in true
+/// color, in half the time (960×640: 28 kB in 2 ms against 81 kB in 5 ms), but the drawing library writes true color only: hence
+/// <see cref="IndexedPng"/>.
+/// </remarks>
 public static class PngWriter
 {
     /// <summary>Smallest scale.</summary>
@@ -12,20 +19,33 @@ public static class PngWriter
     /// <summary>Largest scale.</summary>
     public const double LargestScale = 4;
 
-    private const double PixelsPerMeterAtScaleOne = 96 / 0.0254;
+    /// <summary>Most pixels in a picture: 2400×2400 at scale 2 is below it. While it is written, a picture takes 5 bytes a pixel.</summary>
+    public const int MostPixels = 24_000_000;
+
+    /// <summary>Why a picture of that size and scale is not written, as a sentence; null where it is.</summary>
+    public static string? Refusal(FigureSize size, double scale)
+    {
+        if (scale is not (>= SmallestScale and <= LargestScale))
+        {
+            return $"The scale must be from {SmallestScale} to {LargestScale}, not {scale}.";
+        }
+
+        var (width, height) = Pixels(size, scale);
+        return (long)width * height <= MostPixels ? null : $"A picture must have no more than {MostPixels} pixels, not {width} by {height}.";
+    }
 
     /// <summary>The figure as a PNG file.</summary>
     /// <param name="figure">The figure.</param>
     /// <param name="scale">Pixels to a px of the figure, 0.5 to 4: 2 for a dense screen, about 3 for print at 300 dpi.</param>
-    /// <exception cref="ArgumentOutOfRangeException">The scale is out of bounds.</exception>
+    /// <exception cref="ArgumentOutOfRangeException">The scale is out of bounds; the message is that of <see cref="Refusal"/>.</exception>
     public static byte[] Write(Figure figure, double scale = 1)
     {
-        if (scale is not (>= SmallestScale and <= LargestScale))
+        if (Refusal(figure.Size, scale) is { } refusal)
         {
-            throw new ArgumentOutOfRangeException(nameof(scale), scale, $"The scale must be from {SmallestScale} to {LargestScale}.");
+            throw new ArgumentOutOfRangeException(nameof(scale), scale, refusal);
         }
 
-        var (width, height) = ((int)Math.Round(figure.Size.Width * scale), (int)Math.Round(figure.Size.Height * scale));
+        var (width, height) = Pixels(figure.Size, scale);
         using var colors = SKColorSpace.CreateSrgb();
         using var surface = SKSurface.Create(new SKImageInfo(width, height, SKColorType.Rgba8888, SKAlphaType.Opaque, colors))
             ?? throw new InvalidOperationException($"There is no memory for a picture of {width} by {height} pixels.");
@@ -35,40 +55,10 @@ public static class PngWriter
             figure.DrawOn(canvas);
         }
 
-        // Of the filters and levels, Up at 3 is near the fastest and within a fifth of the smallest for line drawings.
         using var pixels = surface.PeekPixels() ?? throw new InvalidOperationException("The picture's pixels cannot be read.");
-        using var encoded = pixels.Encode(new SKPngEncoderOptions(SKPngEncoderFilterFlags.Up, 3))
-            ?? throw new InvalidOperationException("The picture cannot be encoded.");
-        return WithResolution(encoded.AsSpan(), (uint)Math.Round(PixelsPerMeterAtScaleOne * scale));
+        return IndexedPng.Write(pixels.GetPixelSpan<uint>(), width, ColorTable.Of(figure.Palette), 96 * scale);
     }
 
-    /// <summary>Puts a pHYs chunk behind the header (ISO/IEC 15948, 11.3.5.3): the encoder writes none.</summary>
-    private static byte[] WithResolution(ReadOnlySpan<byte> png, uint pixelsPerMeter)
-    {
-        const int signatureAndHeader = 8 + 25;
-        Span<byte> chunk = stackalloc byte[4 + 4 + 9 + 4];
-        BinaryPrimitives.WriteUInt32BigEndian(chunk, 9);
-        "pHYs"u8.CopyTo(chunk[4..]);
-        BinaryPrimitives.WriteUInt32BigEndian(chunk[8..], pixelsPerMeter);
-        BinaryPrimitives.WriteUInt32BigEndian(chunk[12..], pixelsPerMeter);
-        chunk[16] = 1; // the unit is the meter
-        BinaryPrimitives.WriteUInt32BigEndian(chunk[17..], Checksum(chunk[4..17]));
-        return [.. png[..signatureAndHeader], .. chunk, .. png[signatureAndHeader..]];
-    }
-
-    /// <summary>The CRC of a chunk's type and data (ISO/IEC 15948, 5.5 and annex D).</summary>
-    private static uint Checksum(ReadOnlySpan<byte> bytes)
-    {
-        var checksum = uint.MaxValue;
-        foreach (var value in bytes)
-        {
-            checksum ^= value;
-            for (var bit = 0; bit < 8; bit++)
-            {
-                checksum = (checksum & 1) != 0 ? (checksum >> 1) ^ 0xEDB88320 : checksum >> 1;
-            }
-        }
-
-        return ~checksum;
-    }
+    private static (int Width, int Height) Pixels(FigureSize size, double scale) =>
+        ((int)Math.Round(size.Width * scale), (int)Math.Round(size.Height * scale));
 }

@@ -67,7 +67,6 @@ internal sealed class SkiaCanvas : ICanvas, IDisposable
 
     public void Draw(TextRun text)
     {
-        UseFill(text.Color);
         var font = text.Face == EmbeddedFont.SemiBold ? _semiBold : _regular;
         font.Size = (float)text.Size;
         var offset = text.Anchor switch { TextAnchor.Start => 0, TextAnchor.Middle => -text.Width / 2, _ => -text.Width };
@@ -75,6 +74,15 @@ internal sealed class SkiaCanvas : ICanvas, IDisposable
         _canvas.Save();
         _canvas.Translate(PointOf(text.At));
         _canvas.RotateDegrees((float)text.Angle);
+        if (text.Halo)
+        {
+            // As outlines: a PDF would hold a second font for stroked letters.
+            using var outlines = font.GetTextPath(text.Text, new SKPoint((float)offset, 0));
+            UseStroke(new Stroke(ColorRole.Paper, text.HaloWidth));
+            _canvas.DrawPath(outlines, _paint);
+        }
+
+        UseFill(text.Color);
         _canvas.DrawText(text.Text, (float)offset, 0, SKTextAlign.Left, font, _paint);
         _canvas.Restore();
     }

@@ -1,2 +1,27 @@
-var app = WebApplication.Create(args);
-app.Run();
+using Drypeak.Service.Charts;
+using Drypeak.Service.Hosting;
+using Drypeak.Service.Laboratory;
+using Drypeak.Service.Pages;
+
+var builder = WebApplication.CreateBuilder(args).AddDrypeakHosting();
+builder.Services.AddSingleton<MoistureDensityJob>().AddSingleton<ComparisonJob>();
+
+var app = builder.Build();
+app.UseDrypeakHosting(PageEndpoints.NotFound);
+app.MapMoistureDensity();
+app.MapComparison();
+EffortSeriesJob.Map(app);
+app.MapSaturationLines();
+app.MapOversizeCorrection();
+app.MapTestMethods();
+app.MapFindingKinds();
+app.MapCharts();
+app.MapPages();
+
+if (args is ["openapi", var path])
+{
+    await app.ExportOpenApiAsync(path);
+    return;
+}
+
+await app.RunAsync();

@@ -1,6 +1,12 @@
-BenchmarkDotNet.Running.BenchmarkSwitcher.FromAssembly(typeof(Drypeak.Benchmarks.Marker).Assembly).Run(args);
+using BenchmarkDotNet.Running;
+using Drypeak.Benchmarks;
 
-namespace Drypeak.Benchmarks
+// Either the benchmarks, or the bare server that the service is measured against over HTTP.
+if (args is ["bare-server", var url])
 {
-    internal static class Marker;
+    await BareServer.RunAsync(url);
+}
+else
+{
+    BenchmarkSwitcher.FromAssembly(typeof(BareServer).Assembly).Run(args);
 }

@@ -75,6 +75,12 @@ public sealed record TextRun(string Text, Place At, double Size, FontFace Face, 
     private const double InkAscent = 0.75;
     private const double InkDescent = 0.22;
 
+    /// <summary>Whether the letters have an edge of paper about them, which hides the lines behind.</summary>
+    public bool Halo { get; init; }
+
+    /// <summary>Width of the halo's stroke, half of which shows, px.</summary>
+    internal double HaloWidth => Size * 0.3;
+
     /// <summary>Width of the text, px.</summary>
     public double Width { get; } = Face.Measure(Text, Size);
 

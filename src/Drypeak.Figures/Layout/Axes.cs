@@ -5,11 +5,21 @@ namespace Drypeak.Figures.Layout;
 /// <summary>The two axes: their lines, ticks, labels and titles, and the hairlines that lead from the ticks through the plot.</summary>
 internal sealed class Axes(Plot plot, Wording wording, FigureSize size, TypeScale type)
 {
+    /// <summary>From the baseline of the density axis's title to the plot, in sizes of its text.</summary>
+    private const double TitleAboveAxis = 1.2;
+
     /// <summary>From the axis of water content down to the baseline of its labels, px.</summary>
     public static double LabelBaseline(TypeScale type) => type.TickLength + (1.15 * type.Label);
 
     /// <summary>From the labels of the density axis to the axis, px.</summary>
     public static double LabelGap(TypeScale type) => type.TickLength + (0.45 * type.Label);
+
+    /// <summary>From the heading to the plot: the title of the density axis, clear of that axis's topmost label, px.</summary>
+    public static double HeightAbove(TypeScale type) => (0.5 + EmbeddedFont.Regular.Ascent + TitleAboveAxis) * type.AxisTitle;
+
+    /// <summary>From the plot to the lower edge: the labels of water content, then the title of their axis, px.</summary>
+    public static double HeightBelow(TypeScale type) =>
+        LabelBaseline(type) + (EmbeddedFont.SemiBold.Descent * type.Value) + (EmbeddedFont.Regular.Ascent * type.AxisTitle) + WaterTitleDepth(type);
 
     public FigurePart Grid() => new("grid",
     [
@@ -18,7 +28,7 @@ internal sealed class Axes(Plot plot, Wording wording, FigureSize size, TypeScal
                 .. plot.WaterTicks.Values.Select(plot.Water.At).Select(Crisp).Where(x => x > plot.Area.Left).Select(x => Segment(x, plot.Area.Top, x, plot.Area.Bottom)),
                 .. plot.DensityTicks.Values.Select(plot.Density.At).Select(Crisp).Where(y => y < plot.Area.Bottom).Select(y => Segment(plot.Area.Left, y, plot.Area.Right, y)),
             ],
-            new Stroke(ColorRole.Rule, 0.75)),
+            new Stroke(ColorRole.Rule, 0.6)),
     ]);
 
     public FigurePart Frame()
@@ -38,15 +48,30 @@ internal sealed class Axes(Plot plot, Wording wording, FigureSize size, TypeScal
         ]);
     }
 
-    /// <summary>The titles: over the density axis, where it is read without turning one's head, and under the axis of water content.</summary>
-    public IEnumerable<TextRun> Titles()
+    public void Block(LabelSpace space) =>
+        space.Block(Barriers.Axes, [new(plot.Area.Left, plot.Area.Top), new(plot.Area.Left, plot.Area.Bottom), new(plot.Area.Right, plot.Area.Bottom)]);
+
+    /// <summary>Places the titles, then the values of the result, then the labels of those ticks that leave them room.</summary>
+    public void Label(LabelSpace space)
     {
-        yield return Title(wording.DensityAxis, new Place(type.Margin, plot.Area.Top - (1.2 * type.AxisTitle)), TextAnchor.Start);
-        yield return Title(Wording.WaterAxis, new Place(plot.Area.Right, size.Height - type.Margin - (EmbeddedFont.Regular.Descent * type.AxisTitle)), TextAnchor.End);
+        space.PlaceEach(Titles());
+        if (wording.Result is { } result)
+        {
+            space.PlaceEach([WaterValue(result), DensityValue(result)]);
+        }
+
+        space.PlaceEach(TickLabels());
+    }
+
+    /// <summary>The titles: over the density axis, where it is read without turning one's head, and under the axis of water content.</summary>
+    private IEnumerable<TextRun> Titles()
+    {
+        yield return Title(wording.DensityAxis, new Place(type.Margin, plot.Area.Top - (TitleAboveAxis * type.AxisTitle)), TextAnchor.Start);
+        yield return Title(Wording.WaterAxis, new Place(plot.Area.Right, size.Height - WaterTitleDepth(type)), TextAnchor.End);
     }
 
     /// <summary>A value of the result under the axis of water content.</summary>
-    public TextRun WaterValue(ChartOptimum optimum)
+    private TextRun WaterValue(ChartOptimum optimum)
     {
         var text = Wording.BareWater(optimum);
         var half = EmbeddedFont.SemiBold.Measure(text, type.Value) / 2;
@@ -55,14 +80,14 @@ internal sealed class Axes(Plot plot, Wording wording, FigureSize size, TypeScal
     }
 
     /// <summary>A value of the result left of the density axis.</summary>
-    public TextRun DensityValue(ChartOptimum optimum)
+    private TextRun DensityValue(ChartOptimum optimum)
     {
         var place = new Place(plot.Area.Left - LabelGap(type), plot.Density.At(optimum.MaximumDryDensity) + (0.33 * type.Value));
         return new TextRun(wording.BareDensity(optimum), place, type.Value, EmbeddedFont.SemiBold, ColorRole.Clay, TextAnchor.End);
     }
 
     /// <summary>The labels of the ticks, those of water content first.</summary>
-    public IEnumerable<TextRun> TickLabels()
+    private IEnumerable<TextRun> TickLabels()
     {
         foreach (var value in plot.WaterTicks.Values)
         {
@@ -76,6 +101,8 @@ internal sealed class Axes(Plot plot, Wording wording, FigureSize size, TypeScal
             yield return TickLabel(plot.DensityTicks.Label(value), place, TextAnchor.End);
         }
     }
+
+    private static double WaterTitleDepth(TypeScale type) => (0.5 * type.Margin) + (EmbeddedFont.Regular.Descent * type.AxisTitle);
 
     private TextRun Title(string text, Place at, TextAnchor anchor) => new(text, at, type.AxisTitle, EmbeddedFont.Regular, ColorRole.Ink, anchor);
 

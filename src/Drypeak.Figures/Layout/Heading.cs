@@ -7,6 +7,9 @@ namespace Drypeak.Figures.Layout;
 /// <param name="Bottom">Where the heading ends, px from the top.</param>
 internal sealed record Heading(IReadOnlyList<TextRun> Runs, double Bottom)
 {
+    /// <summary>Between two lines, px: readers of SVG round the height of a line up.</summary>
+    private const double LineGap = 1.5;
+
     /// <summary>Below this height a picture has room for one line under the title, px.</summary>
     private const int TallEnoughForTwo = 420;
 
@@ -16,7 +19,7 @@ internal sealed record Heading(IReadOnlyList<TextRun> Runs, double Bottom)
         var runs = new List<TextRun>();
         var top = type.Margin * 0.6;
 
-        var (lines, titleSize) = Title(wording.Headline, width, type);
+        var (lines, titleSize) = Title(wording, width, type);
         foreach (var line in lines)
         {
             Add(line, titleSize, EmbeddedFont.SemiBold, ColorRole.Ink);
@@ -32,20 +35,20 @@ internal sealed record Heading(IReadOnlyList<TextRun> Runs, double Bottom)
         void Add(string text, double textSize, FontFace face, ColorRole color)
         {
             runs.Add(new TextRun(text, new Place(type.Margin, top + (face.Ascent * textSize)), textSize, face, color));
-            top += (face.Ascent + face.Descent) * textSize;
+            top += ((face.Ascent + face.Descent) * textSize) + LineGap;
         }
     }
 
     /// <summary>One line if it fits with little shrinking, else two, as large as they fit; a text too long even so is elided.</summary>
-    private static (IReadOnlyList<string> Lines, double Size) Title((string First, string Second) headline, double width, TypeScale type)
+    private static (IReadOnlyList<string> Lines, double Size) Title(Wording wording, double width, TypeScale type)
     {
         const double step = 0.5;
-        var whole = $"{headline.First} {headline.Second}";
+        var headline = wording.Headline;
         for (var size = type.Title; size >= Math.Max(type.Title * 0.8, TypeScale.LeastText); size -= step)
         {
-            if (Fits(whole, size))
+            if (Fits(wording.Title, size))
             {
-                return ([whole], size);
+                return ([wording.Title], size);
             }
         }
 

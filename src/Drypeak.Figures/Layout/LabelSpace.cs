@@ -19,12 +19,15 @@ internal enum Barriers
 /// The room that is left for labels. Labels are placed in the order of their importance, each at the first of its candidate places that is
 /// free; a label without a free place is left out. No two texts ever share room, and none leaves the picture.
 /// </summary>
-/// <param name="picture">The whole picture.</param>
+/// <param name="picture">The picture, less a narrow edge.</param>
 internal sealed class LabelSpace(Area picture)
 {
+    /// <summary>Between two texts, px: readers of SVG round the height of a line up.</summary>
+    private const double LineGap = 1;
+
     private readonly List<TextRun> _placed = [];
     private readonly List<Area> _taken = [];
-    private readonly List<(Barriers Kind, Place From, Place To, object? Owner)> _segments = [];
+    private readonly List<(Barriers Kind, Place From, Place To, Area Around, object? Owner)> _segments = [];
     private readonly List<(Place Center, double Radius)> _discs = [];
 
     /// <summary>The labels placed so far.</summary>
@@ -35,7 +38,7 @@ internal sealed class LabelSpace(Area picture)
     {
         for (var i = 1; i < run.Count; i++)
         {
-            _segments.Add((kind, run[i - 1], run[i], owner));
+            _segments.Add((kind, run[i - 1], run[i], Around(run[i - 1], run[i]), owner));
         }
     }
 
@@ -54,12 +57,32 @@ internal sealed class LabelSpace(Area picture)
             if (candidate.Text.Length > 0 && IsFree(candidate, barriers, owner))
             {
                 _placed.Add(candidate);
-                _taken.Add(candidate.LineBox.Bounds);
+                _taken.Add(candidate.LineBox.Grown(LineGap).Bounds);
                 return candidate;
             }
         }
 
         return null;
+    }
+
+    /// <summary>Places texts that have one place each, over whatever is drawn there; one whose place another text has is left out.</summary>
+    public void PlaceEach(IEnumerable<TextRun> texts)
+    {
+        foreach (var text in texts)
+        {
+            Place([text], Barriers.None);
+        }
+    }
+
+    /// <summary>Places a label that matters: rather in full with a quiet line behind its halo than shortened, and rather shortened than not at all.</summary>
+    /// <param name="wordings">The candidate places of each wording, the fullest wording first.</param>
+    public void PlaceFullest(IEnumerable<IEnumerable<TextRun>> wordings)
+    {
+        _ = wordings.Any(candidates =>
+        {
+            var places = candidates.ToList();
+            return (Place(places, Barriers.All) ?? Place(places, Barriers.All & ~Barriers.PhaseLines)) is not null;
+        });
     }
 
     private bool IsFree(TextRun text, Barriers barriers, object? owner)
@@ -74,7 +97,7 @@ internal sealed class LabelSpace(Area picture)
         var near = letters.Bounds;
         return !_segments.Exists(segment => (segment.Kind & barriers) != 0
                 && (owner is null || !ReferenceEquals(segment.Owner, owner))
-                && near.Overlaps(Around(segment.From, segment.To))
+                && near.Overlaps(segment.Around)
                 && letters.Meets(segment.From, segment.To))
             && !(barriers.HasFlag(Barriers.Marks) && _discs.Exists(disc => letters.MeetsDisc(disc.Center, disc.Radius)));
     }

@@ -15,8 +15,9 @@ internal static class NextSpecimenMark
         var foot = new Place(plot.Water.At(percent), plot.Area.Bottom);
         var top = foot with { Y = foot.Y - (2 * type.TickLength) };
         space.Block(Barriers.Marks, [foot, top]);
-        var candidates = MarkLabels.Over(top, Wording.Next(percent), type.Label, ColorRole.Quiet).Select(candidate => candidate with { Name = "next-specimen-label" });
-        space.Place(candidates, Barriers.All);
+        space.PlaceFullest(Wording.Next(percent).Select(text => MarkLabels
+            .Over(top, text, type.Label, ColorRole.Quiet)
+            .Select(candidate => candidate with { Name = "next-specimen-label" })));
         return new FigurePart("next-specimen", [new Lines([[foot, top]], new Stroke(ColorRole.Quiet, 2 * type.Unit))]);
     }
 }

@@ -41,7 +41,7 @@ internal sealed class OptimumMarks(CompactionChart chart, Wording wording, Plot 
         var bars = IntervalBars(result).ToList();
         if (bars.Count > 0)
         {
-            shapes.Add(new Lines(bars, new Stroke(ColorRole.Clay, 3.5 * type.Unit)) { Name = "interval" });
+            shapes.Add(new Lines(bars, new Stroke(ColorRole.Clay, 3 * type.Unit)) { Name = "interval" });
         }
 
         return new FigurePart("leaders", shapes);
@@ -49,7 +49,7 @@ internal sealed class OptimumMarks(CompactionChart chart, Wording wording, Plot 
 
     public void Block(LabelSpace space)
     {
-        foreach (var optimum in new[] { chart.Optimum, chart.Adopted, chart.Corrected }.OfType<ChartOptimum>())
+        foreach (var optimum in chart.Optima)
         {
             space.BlockMark(plot.At(optimum.Point), Arm * 1.4 * type.Unit);
         }
@@ -76,11 +76,9 @@ internal sealed class OptimumMarks(CompactionChart chart, Wording wording, Plot 
                 return;
             }
 
-            // Better a label with a quiet line through it than none.
-            var candidates = MarkLabels.Around(plot.At(optimum.Point), Arm * 1.4 * type.Unit, words(optimum), type.Label, ColorRole.Clay, plot.Area.Width)
-                .Select(candidate => candidate with { Name = "optimum-label" })
-                .ToList();
-            _ = space.Place(candidates, Barriers.All) ?? space.Place(candidates, Barriers.All & ~Barriers.PhaseLines);
+            space.PlaceFullest(words(optimum).Select(text => MarkLabels
+                .Around(plot.At(optimum.Point), Arm * 1.4 * type.Unit, text, type.Label, ColorRole.Clay, plot.Area.Width)
+                .Select(candidate => candidate with { Name = "optimum-label" })));
         }
     }
 

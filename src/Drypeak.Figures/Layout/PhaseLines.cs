@@ -50,8 +50,6 @@ internal sealed record PhaseLine(PhaseLineKind Kind, double Percent, Func<double
 /// <summary>The lines that a chart asks for, the zero-air-voids line first; none where the solids are not known.</summary>
 internal sealed class PhaseLines
 {
-    private const int Samples = 96;
-
     private PhaseLines(IReadOnlyList<PhaseLine> all) => All = all;
 
     public IReadOnlyList<PhaseLine> All { get; }
@@ -78,22 +76,4 @@ internal sealed class PhaseLines
     }
 
     public double? ZeroAirVoidsAt(double waterContent) => All.Count > 0 && waterContent >= 0 ? All[0].DryDensityAt(waterContent) : null;
-
-    /// <summary>A line over the axis's range, as px; null where it does not come into the plot.</summary>
-    public static Course? Drawn(PhaseLine line, Plot plot)
-    {
-        var range = plot.Water.Range;
-        var from = Math.Max(0, range.From);
-        if (from >= range.To)
-        {
-            return null;
-        }
-
-        var places = Enumerable.Range(0, Samples + 1)
-            .Select(sample => from + ((range.To - from) * sample / Samples))
-            .Select(water => plot.At(new ChartPoint(water, line.DryDensityAt(water))));
-
-        // Density falls as water rises, so the line crosses the plot once and leaves one run.
-        return Course.Clipped([.. places], plot.Area).FirstOrDefault();
-    }
 }

@@ -5,7 +5,11 @@ namespace Drypeak.Figures.Layout;
 /// <summary>The rectangle between the axes, and where numbers stand in it.</summary>
 internal sealed class Plot
 {
-    private const double LeastTickDistance = 44;
+    private const double LeastDensityTickDistance = 44;
+    private const double LeastWaterTickDistance = 80;
+
+    /// <summary>More ticks than this do not make a value easier to read.</summary>
+    private const double MostTicks = 12;
 
     private Plot(Area area, View view, Ticks waterTicks, Ticks densityTicks)
     {
@@ -31,30 +35,29 @@ internal sealed class Plot
     /// <summary>The rectangle that the heading, the ticks and the titles of the axes leave.</summary>
     /// <param name="view">The ranges.</param>
     /// <param name="headingBottom">px from the top.</param>
-    /// <param name="densityValues">Texts that stand among the labels of the density axis.</param>
+    /// <param name="wording">For the value of the result, which stands among the labels of the density axis.</param>
     /// <param name="size">The picture's size.</param>
     /// <param name="type">Sizes of text and marks.</param>
-    public static Plot Lay(View view, double headingBottom, IEnumerable<string> densityValues, FigureSize size, TypeScale type)
+    public static Plot Lay(View view, double headingBottom, Wording wording, FigureSize size, TypeScale type)
     {
-        var top = headingBottom + (2.35 * type.AxisTitle);
-        var bottom = size.Height - type.Margin - (1.6 * type.AxisTitle) - Axes.LabelBaseline(type);
-        var densityTicks = Ticks.Within(view.DryDensity, Math.Max(1, (bottom - top) / (LeastTickDistance * type.Unit)));
+        var top = headingBottom + Axes.HeightAbove(type);
+        var bottom = size.Height - Axes.HeightBelow(type);
+        var densityTicks = Ticks.Within(view.DryDensity, Math.Clamp((bottom - top) / (LeastDensityTickDistance * type.Unit), 1, MostTicks));
 
         var labelWidth = densityTicks.Values
             .Select(value => EmbeddedFont.Regular.Measure(densityTicks.Label(value), type.Label))
-            .Concat(densityValues.Select(text => EmbeddedFont.SemiBold.Measure(text, type.Value)))
-            .DefaultIfEmpty(0)
+            .Append(wording.Result is { } result ? EmbeddedFont.SemiBold.Measure(wording.BareDensity(result), type.Value) : 0)
             .Max();
         var left = Math.Round(Math.Min(type.Margin + labelWidth + Axes.LabelGap(type), size.Width * 0.45)) + 0.5;
         var right = size.Width - type.Margin;
         var waterTicks = WaterTicksWithin(view.WaterContent, right - left, type);
-        return new Plot(new Area(left, Math.Round(top) + 0.5, right, Math.Round(bottom) + 0.5), view, waterTicks, densityTicks);
+        return new Plot(new Area(left, Math.Ceiling(top) + 0.5, right, Math.Floor(bottom) - 0.5), view, waterTicks, densityTicks);
     }
 
     /// <summary>As fine as the labels leave room between them.</summary>
     private static Ticks WaterTicksWithin(Interval range, double width, TypeScale type)
     {
-        var most = Math.Max(1, width / (LeastTickDistance * 1.5 * type.Unit));
+        var most = Math.Clamp(width / (LeastWaterTickDistance * type.Unit), 1, MostTicks);
         while (true)
         {
             var ticks = Ticks.Within(range, most);

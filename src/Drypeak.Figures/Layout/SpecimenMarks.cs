@@ -5,6 +5,9 @@ namespace Drypeak.Figures.Layout;
 /// <summary>The measured points: discs, rings where set aside. Those set aside lie beneath, so that no fitted point is hidden.</summary>
 internal sealed class SpecimenMarks(CompactionChart chart, Plot plot, TypeScale type)
 {
+    /// <summary>Above this many their labels would say nothing.</summary>
+    private const int MostLabeled = 40;
+
     private const double EdgeWidth = 1.25;
 
     /// <summary>A ring looks as large as a disc where its outer edge is the same.</summary>
@@ -24,9 +27,10 @@ internal sealed class SpecimenMarks(CompactionChart chart, Plot plot, TypeScale 
 
     public void Label(LabelSpace space)
     {
-        foreach (var specimen in chart.Specimens)
+        foreach (var specimen in chart.Specimens.Count <= MostLabeled ? chart.Specimens : [])
         {
-            var candidates = MarkLabels.Around(plot.At(specimen.Point), type.MarkRadius, Wording.Specimen(specimen), type.Label, ColorRole.Quiet, WidestLabel);
+            var candidates = Wording.Specimen(specimen)
+                .SelectMany(text => MarkLabels.Around(plot.At(specimen.Point), type.MarkRadius, text, type.Label, ColorRole.Quiet, WidestLabel));
             space.Place(candidates.Select(candidate => candidate with { Name = "specimen-label" }), Barriers.All);
         }
     }

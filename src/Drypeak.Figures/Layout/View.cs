@@ -11,6 +11,12 @@ internal sealed record View(Interval WaterContent, Interval DryDensity)
     private const double RoomBelow = 0.09;
     private const double RoomAbove = 0.14;
 
+    /// <summary>Where the zero-air-voids line should have come into view, as a share of the range of water content.</summary>
+    private const double WetPartWithLine = 0.85;
+
+    /// <summary>By how much of the range of density the view grows for it at most.</summary>
+    private const double MostGrowthForLine = 0.4;
+
     public static View Of(CompactionChart chart, PhaseLines lines)
     {
         // What a soil compacts to: it sets the range only where nothing else does.
@@ -34,12 +40,12 @@ internal sealed record View(Interval WaterContent, Interval DryDensity)
         density = density.AtLeast(Math.Max(typical * 0.03, Magnitude(density) * 1e-3));
         water = Padded(water, RoomBeside, RoomBeside);
         density = Padded(density, RoomBelow, RoomAbove);
-        return new View(water, WithZeroAirVoids(density, lines.ZeroAirVoidsAt(water.To)));
+        return new View(water, WithZeroAirVoids(density, lines.ZeroAirVoidsAt(water.From + (water.Span * WetPartWithLine))));
     }
 
     private static IEnumerable<ChartPoint> Marked(CompactionChart chart) =>
         chart.Specimens.Select(specimen => specimen.Point)
-            .Concat(new[] { chart.Optimum, chart.Adopted, chart.Corrected }.OfType<ChartOptimum>().Select(optimum => optimum.Point));
+            .Concat(chart.Optima.Select(optimum => optimum.Point));
 
     private static Interval Range(IEnumerable<double> values, double fallback)
     {
@@ -63,5 +69,5 @@ internal sealed record View(Interval WaterContent, Interval DryDensity)
 
     /// <summary>A zero-air-voids line a little above the points comes into view; one far above stays out.</summary>
     private static Interval WithZeroAirVoids(Interval density, double? zeroAirVoids) =>
-        zeroAirVoids is { } line && line < density.To + (density.Span * 0.4) ? density.With(line + (density.Span * 0.08)) : density;
+        zeroAirVoids is { } line && line < density.To + (density.Span * MostGrowthForLine) ? density.With(line) : density;
 }

@@ -34,6 +34,9 @@ internal sealed class Wording
         ? ("No optimum", "within the tested range")
         : ($"{(IsAdopted ? "Adopted maximum" : "Maximum")} {DensityName} {Density(Result)}", $"at {Water(Result)} water");
 
+    /// <summary>The result in one line.</summary>
+    public string Title => $"{Headline.First} {Headline.Second}";
+
     /// <summary>The 95 % intervals of the result, or empty.</summary>
     public string Intervals
     {

@@ -1,9 +1,10 @@
+using System.Buffers;
 using System.Buffers.Text;
 using System.IO.Compression;
 using System.Text.Json;
 using Drypeak.Figures;
 using Drypeak.Service.Contracts;
-using Drypeak.Soil;
+using Drypeak.Service.Hosting;
 
 namespace Drypeak.Service.Charts;
 
@@ -15,14 +16,8 @@ internal static class ChartAddress
 {
     public const string MoistureDensity = "moisture-density";
 
-    /// <summary>A request line longer than this many bytes is refused by many servers, ours among them.</summary>
-    private const int LongestRequestLine = 8192;
-
-    /// <summary>Room in the request line for method, path, version and the picture's size.</summary>
-    private const int RoomForTheRest = 160;
-
-    /// <summary>A chart that inflates beyond this is refused: bytes of JSON. Five hundred specimens with short labels take about 40 kB.</summary>
-    public const int LargestInflated = 256 * 1024;
+    /// <summary>Room in the address for its path and the picture's size.</summary>
+    private const int RoomForTheRest = 120;
 
     private const int BrotliQuality = 5;
     private const int BrotliWindow = 18;
@@ -33,10 +28,10 @@ internal static class ChartAddress
         "", "RFC 9110 section 4.1: request lines of 8000 bytes are the most to count on");
 
     /// <summary>The addresses of a chart's pictures; none where it is too large.</summary>
-    public static LinksContract LinksFor(string job, CompactionChart chart)
+    public static LinksContract LinksFor(string job, CompactionChart chart, int addressBytes)
     {
         var data = Encode(chart);
-        string? Link(string suffix) => data.Length + RoomForTheRest <= LongestRequestLine ? $"/v1/charts/{job}.{suffix}?d={data}" : null;
+        string? Link(string suffix) => data.Length + RoomForTheRest <= addressBytes ? $"/v1/charts/{job}.{suffix}?d={data}" : null;
         return new LinksContract { Svg = Link("svg"), Png = Link("png"), Pdf = Link("pdf") };
     }
 
@@ -50,33 +45,45 @@ internal static class ChartAddress
             : throw new InvalidOperationException("A buffer of the greatest compressed length was too small.");
     }
 
-    /// <summary>The JSON in an address's text.</summary>
+    /// <summary>The chart in an address's text.</summary>
     /// <param name="data">The query's <c>d</c>.</param>
-    /// <param name="json">The JSON, up to <see cref="LargestInflated"/> bytes.</param>
-    /// <returns>Null where it could be unpacked, else the fault.</returns>
-    public static Fault? Unpack(string data, out ReadOnlyMemory<byte> json)
+    /// <param name="limits">Bounds of what it may hold.</param>
+    /// <param name="chart">The chart, or null where there is a fault.</param>
+    /// <returns>Every fault; empty where the chart can be drawn.</returns>
+    public static IReadOnlyList<Fault> Decode(string data, Limits limits, out CompactionChart? chart)
     {
-        json = default;
+        chart = null;
         var packed = new byte[Base64Url.GetMaxDecodedLength(data.Length)];
         if (!Base64Url.IsValid(data) || !Base64Url.TryDecodeFromChars(data, packed, out var packedLength))
         {
-            return new Fault("/d", "not-readable", "The address is damaged: d is not base64url. Take the link as an answer gave it.");
+            return [Damaged("d is not base64url")];
         }
 
-        var inflated = new byte[LargestInflated];
+        var inflated = new byte[limits.UnpackedAddressBytes];
         using var decoder = new BrotliDecoder();
         var status = decoder.Decompress(packed.AsSpan(0, packedLength), inflated, out var consumed, out var length);
-        if (status == System.Buffers.OperationStatus.DestinationTooSmall)
+        if (status == OperationStatus.DestinationTooSmall)
         {
-            return new Fault("/d", "inflates-beyond-bound", $"The address inflates beyond {LargestInflated} bytes. Post the request itself with Accept: image/svg+xml instead.");
+            return [new Fault("/d", "inflates-beyond-bound", $"The address inflates beyond {limits.UnpackedAddressBytes} bytes. Post the request itself with Accept: image/svg+xml instead.")];
         }
 
-        if (status != System.Buffers.OperationStatus.Done || consumed != packedLength)
+        if (status != OperationStatus.Done || consumed != packedLength)
         {
-            return new Fault("/d", "not-readable", "The address is damaged or cut short: d does not unpack. Take the link as an answer gave it.");
+            return [Damaged("d does not unpack")];
         }
 
-        json = inflated.AsMemory(0, length);
-        return null;
+        try
+        {
+            chart = JsonSerializer.Deserialize(inflated.AsSpan(0, length), ServiceJson.Of<CompactionChart>());
+        }
+        catch (JsonException)
+        {
+            return [Damaged("d holds no chart")];
+        }
+
+        return chart is null ? [Damaged("d holds no chart")] : new ChartRules(limits).Check(chart);
     }
+
+    private static Fault Damaged(string how) =>
+        new("/d", "not-readable", $"The address is damaged or cut short: {how}. Take the link as an answer gave it.");
 }

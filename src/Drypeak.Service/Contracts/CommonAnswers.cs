@@ -1,4 +1,7 @@
+using System.Security.Cryptography;
+using System.Text.Json;
 using System.Text.Json.Serialization;
+using Drypeak.Service.Hosting;
 
 namespace Drypeak.Service.Contracts;
 
@@ -9,12 +12,22 @@ namespace Drypeak.Service.Contracts;
 /// <param name="Place" example="/specimens">JSON pointer to the place in the request; empty for the whole.</param>
 /// <param name="Basis" example="Chance of a peak outside the tested range over 0.15">The rule and its source.</param>
 public sealed record FindingContract(
-    string Code, string Severity, string Message, [property: JsonPropertyName("pointer")] string Place, string Basis);
+    string Code, string Severity, string Message, [property: JsonPropertyName("pointer")] string Place, string Basis)
+{
+    internal static FindingContract Of(Finding finding) =>
+        new(finding.Code, finding.Severity.ToString().ToLowerInvariant(), finding.Message, finding.Place, finding.Basis);
+}
 
 /// <summary>Where the answer came from.</summary>
 /// <param name="Version" example="0.1.0">Version of the service.</param>
 /// <param name="InputDigest" example="sha256:6f1c…">SHA-256 of the request as it was read: the same test has the same digest.</param>
-public sealed record ProvenanceContract(string Version, string InputDigest);
+public sealed record ProvenanceContract(string Version, string InputDigest)
+{
+    /// <summary>The digest is over the request as it was read, so that white space and the order of members do not matter.</summary>
+    internal static ProvenanceContract Of<TRequest>(TRequest request) => new(
+        ServiceVersion.Text,
+        "sha256:" + Convert.ToHexStringLower(SHA256.HashData(JsonSerializer.SerializeToUtf8Bytes(request, ServiceJson.Of<TRequest>()))));
+}
 
 /// <summary>Addresses of the pictures; each holds all that the picture shows. A member is absent where the address would be too long.</summary>
 public sealed record LinksContract

@@ -34,10 +34,11 @@ internal sealed class TinRules : AbstractValidator<TinContract>
         RuleFor(tin => tin.Tin).Needed().NotNegative();
         RuleFor(tin => tin.Wet).Needed().Positive();
         RuleFor(tin => tin.Dry).Needed().Positive();
-        RuleFor(tin => tin.Dry).Must((tin, dry) => !(dry > tin.Wet))
+        // A mass that is impossible by itself is one fault: nothing is held against it.
+        RuleFor(tin => tin.Dry).Must((tin, dry) => !(tin.Wet > 0 && dry > tin.Wet))
             .WithErrorCode("dry-over-wet")
             .WithMessage((tin, dry) => $"Tin and dry soil, {RuleWords.Text(dry)}, are heavier than tin and wet soil, {RuleWords.Text(tin.Wet)}. Were the two exchanged?");
-        RuleFor(tin => tin.Dry).Must((tin, dry) => !(dry <= tin.Tin))
+        RuleFor(tin => tin.Dry).Must((tin, dry) => !(dry > 0 && dry <= tin.Tin))
             .WithErrorCode("dry-not-over-tin")
             .WithMessage((tin, dry) => $"Tin and dry soil, {RuleWords.Text(dry)}, are not heavier than the empty tin, {RuleWords.Text(tin.Tin)}. Give the masses with the tin.");
     }
@@ -75,10 +76,10 @@ internal sealed class MoldRules : AbstractValidator<MoldContract>
             .WithErrorCode("incomplete").WithMessage("A volume by water needs both masses: give empty and withWater.");
         RuleFor(mold => mold.Empty).NotNull().When(mold => mold.WithWater is { } || mold.Plate is { })
             .WithErrorCode("incomplete").WithMessage("A volume by water needs both masses: give empty and withWater.");
-        RuleFor(mold => mold.WithWater).Must((mold, full) => !(full <= mold.Empty))
+        RuleFor(mold => mold.WithWater).Must((mold, full) => !(full > 0 && full <= mold.Empty))
             .WithErrorCode("water-not-over-empty")
             .WithMessage((mold, full) => $"The mold full of water, {RuleWords.Text(full)}, is not heavier than empty, {RuleWords.Text(mold.Empty)}.");
-        RuleFor(mold => mold.Plate).Must((mold, plate) => !(plate >= mold.Empty))
+        RuleFor(mold => mold.Plate).Must((mold, plate) => !(mold.Empty > 0 && plate >= mold.Empty))
             .WithErrorCode("plate-over-empty")
             .WithMessage((mold, plate) => $"The plate, {RuleWords.Text(plate)}, is not lighter than the empty mold with it, {RuleWords.Text(mold.Empty)}. Weigh the plate in both, or in neither.");
         RuleFor(mold => mold.WaterTemperature).Within(WaterDensity.LowestTemperature, WaterDensity.HighestTemperature, " °C");
@@ -94,4 +95,20 @@ internal sealed class OversizeRules : AbstractValidator<OversizeContract>
         RuleFor(oversize => oversize.WaterContent).Within(0, 1000, " %");
         RuleFor(oversize => oversize.Sieve).Positive();
     }
+}
+
+/// <summary>Rules of lines in the plane of water content and dry density.</summary>
+internal static class LineRules
+{
+    public static IRuleBuilderOptions<T, IReadOnlyList<double>?> LinesOfAKind<T>(this IRuleBuilder<T, IReadOnlyList<double>?> rule, int greatest) =>
+        rule.Must(list => list is null || list.Count <= greatest)
+            .WithErrorCode("too-many").WithMessage((_, list) => $"There may be up to {greatest} lines of a kind; there are {list!.Count}.");
+
+    public static IRuleBuilderOptions<T, double> Saturation<T>(this IRuleBuilder<T, double> rule) =>
+        rule.Must(value => value is > 0 and <= 100)
+            .WithErrorCode("out-of-range").WithMessage((_, value) => $"A degree of saturation lies over 0 and up to 100 %; {RuleWords.Text(value)} was received.");
+
+    public static IRuleBuilderOptions<T, double> AirVoids<T>(this IRuleBuilder<T, double> rule) =>
+        rule.Must(value => value is >= 0 and < 100)
+            .WithErrorCode("out-of-range").WithMessage((_, value) => $"Air voids lie from 0 to below 100 %; {RuleWords.Text(value)} was received.");
 }

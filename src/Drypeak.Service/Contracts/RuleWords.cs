@@ -74,6 +74,12 @@ internal static class RuleWords
     public static void Fail<T>(this ValidationContext<T> context, string path, string code, string message) =>
         context.AddFailure(new ValidationFailure(path, message) { ErrorCode = code });
 
+    /// <summary>The broken rules of each request in a list, each at its place in the list.</summary>
+    public static IEnumerable<Fault> Within<TRequest>(this IReadOnlyList<TRequest> requests, string place, Func<TRequest, IReadOnlyList<Fault>> check) =>
+        requests.SelectMany((request, i) => request is null
+            ? [new Fault($"{place}/{i}", "missing-member", "It is missing. Give a whole request.")]
+            : check(request).Select(fault => fault with { Place = $"{place}/{i}{fault.Place}" }));
+
     public static string Text(double? value) => value?.ToString("R", CultureInfo.InvariantCulture) ?? "nothing";
 
     private static string Shortened(string? text) => text is { Length: > 40 } ? text[..40] + "…" : text ?? "";

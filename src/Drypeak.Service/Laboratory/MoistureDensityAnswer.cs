@@ -1,5 +1,6 @@
 using System.Text.Json.Serialization;
 using Drypeak.Service.Contracts;
+using Drypeak.Soil.Laboratory.Workings;
 
 namespace Drypeak.Service.Laboratory;
 
@@ -88,7 +89,7 @@ public sealed record EffortAnswer(double? Computed, double? Nominal);
 /// <param name="Porosity" example="36.4">%.</param>
 /// <param name="Saturation" example="48.6">%.</param>
 /// <param name="AirVoids" example="18.7">% of the total volume.</param>
-/// <param name="SetAside">Why it was not fitted, or null.</param>
+/// <param name="SetAside" example="mold not full">Why it was not fitted, or null.</param>
 public sealed record SpecimenAnswer(
     string Label, double WaterContent, double WetDensity, double DryDensity,
     double? VoidRatio, double? Porosity, double? Saturation, double? AirVoids, string? SetAside);
@@ -194,7 +195,7 @@ public sealed record CurveAnswer
 
 /// <summary>A parameter of the model.</summary>
 /// <param name="Value" example="0.91">In its unit.</param>
-/// <param name="Unit" example="">Empty for a ratio.</param>
+/// <param name="Unit" example="%">Empty for a ratio.</param>
 /// <param name="StandardError" example="0.03">Null where nothing supports one.</param>
 /// <param name="Meaning" example="Saturation far wet of the optimum">What it is.</param>
 public sealed record ParameterAnswer(double Value, string Unit, double? StandardError, string Meaning);
@@ -210,7 +211,7 @@ public sealed record ResidualAnswer(string Label, double Fitted, double Residual
 /// <summary>Another model's answer.</summary>
 /// <param name="Model" example="parabola">The model.</param>
 /// <param name="Admissible" example="true">Whether it could stand for the answer.</param>
-/// <param name="WhyNot">Why it could not, or null.</param>
+/// <param name="WhyNot" example="Its maximum is not inside the tested range.">Why it could not, or null.</param>
 /// <param name="Optimum">Its peak, or null.</param>
 /// <param name="RootMeanSquareError" example="0.0041">In units.density.</param>
 /// <param name="LeaveOneOutError" example="0.0121">In units.density.</param>
@@ -237,5 +238,9 @@ public sealed record NextSpecimenAnswer(double WaterContent, string Reason, doub
 /// <param name="Value" example="1.7014">Unrounded.</param>
 /// <param name="Unit" example="Mg/m³">Its unit; empty for a ratio.</param>
 /// <param name="Source" example="ASTM D698">Where the formula stands.</param>
-/// <param name="Mathml">The formula as MathML.</param>
-public sealed record TraceStep(string Quantity, string Formula, string? Substitution, double Value, string Unit, string Source, string Mathml);
+/// <param name="Mathml" example="&lt;math&gt;…&lt;/math&gt;">The formula as MathML.</param>
+public sealed record TraceStep(string Quantity, string Formula, string? Substitution, double Value, string Unit, string Source, string Mathml)
+{
+    internal static TraceStep Of(WorkingStep step) =>
+        new(step.Quantity, step.Formula, step.Substitution, step.Value, step.Unit, step.Source, step.MathMl);
+}

@@ -1,5 +1,3 @@
-using System.Security.Cryptography;
-using System.Text.Json;
 using Drypeak.Figures;
 using Drypeak.Service.Charts;
 using Drypeak.Service.Contracts;
@@ -17,30 +15,27 @@ namespace Drypeak.Service.Laboratory;
 internal sealed record MoistureDensityOutcome(MoistureDensityAnswer Answer, CompactionChart Chart);
 
 /// <summary>The laboratory test from contract to contract. The endpoint, the page and a batch line all call this.</summary>
-internal static class MoistureDensityJob
+internal sealed class MoistureDensityJob(Limits limits)
 {
+    private readonly MoistureDensityRules _rules = new(limits);
+
     private const int LinePoints = 41;
     private const double Coverage = 0.95;
-    private const double NormalQuantile = 1.959963984540054;
 
-    /// <summary>Computes a request that passed <see cref="MoistureDensityRules.Check"/>.</summary>
-    public static MoistureDensityOutcome Compute(MoistureDensityRequest request)
+    /// <summary>Every broken rule; empty where the request can be computed.</summary>
+    public IReadOnlyList<Fault> Check(MoistureDensityRequest request) => _rules.Check(request);
+
+    /// <summary>Computes a request that passed <see cref="Check"/>.</summary>
+    public MoistureDensityOutcome Compute(MoistureDensityRequest request)
     {
-        var test = request.ToTest();
-        var faults = new List<Fault>();
-        var specimens = MoistureDensity.Reduce(test, faults).OfType<Specimen>().ToList();
-        if (faults.Count > 0)
-        {
-            throw new ArgumentException("The request does not keep the rules: " + faults[0].Message, nameof(request));
-        }
-
-        var result = MoistureDensity.Analyze(test, specimens);
+        var (test, result) = Analyze(request);
+        var specimens = result.Specimens;
         var chart = MoistureDensityChart.Of(request, test, result);
-        var links = ChartAddress.LinksFor(ChartAddress.MoistureDensity, chart);
-        var findings = result.Findings.Select(ToContract);
+        var links = ChartAddress.LinksFor(ChartAddress.MoistureDensity, chart, limits.AddressBytes);
+        var findings = result.Findings.Select(FindingContract.Of);
         if (links is { Svg: null })
         {
-            findings = findings.Append(ToContract(ChartAddress.TooLongForALink));
+            findings = findings.Append(FindingContract.Of(ChartAddress.TooLongForALink));
         }
 
         return new MoistureDensityOutcome(
@@ -65,10 +60,10 @@ internal static class MoistureDensityJob
                 NextSpecimen = result.Curve?.Next is { } next
                     ? new NextSpecimenAnswer(Math.Round(next.WaterContent * 200) / 2, next.Reason, next.StandardUncertaintyNow * 100, next.StandardUncertaintyAfter * 100)
                     : null,
-                Trace = request.Trace is true ? [.. Working.Of(test, result).Select(ToContract)] : null,
+                Trace = request.Trace is true ? [.. Working.Of(test, result).Select(TraceStep.Of)] : null,
                 Findings = [.. findings],
                 Links = links,
-                Provenance = new ProvenanceContract(ServiceVersion.Text, DigestOf(request)),
+                Provenance = ProvenanceContract.Of(request),
                 Cautions = request.Specimens!.Any(specimen => specimen.Carbide is { })
                     ? [.. Cautions.OfLaboratoryTest, Cautions.OfCarbideTester]
                     : Cautions.OfLaboratoryTest,
@@ -76,23 +71,28 @@ internal static class MoistureDensityJob
             chart);
     }
 
+    /// <summary>The domain's result of a request that passed <see cref="Check"/>.</summary>
+    public static (MoistureDensityTest Test, MoistureDensityResult Result) Analyze(MoistureDensityRequest request)
+    {
+        var test = request.ToTest();
+        var faults = new List<Fault>();
+        var specimens = MoistureDensity.Reduce(test, faults).OfType<Specimen>().ToList();
+        return faults.Count == 0
+            ? (test, MoistureDensity.Analyze(test, specimens))
+            : throw new ArgumentException("The request does not keep the rules: " + faults[0].Message, nameof(request));
+    }
+
     private static MethodAnswer? MethodOf(MoistureDensityTest test, IReadOnlyList<Specimen> specimens)
     {
-        var volume = specimens.Select(specimen => specimen.MoldVolume).FirstOrDefault(volume => volume is { });
-        if (test.IsCustomMethod)
+        var computed = EffortSeries.EffortOf(test, specimens)?.KilojoulesPerCubicMeter;
+        return test switch
         {
-            return new MethodAnswer(MoistureDensityMapping.CustomMethod, "The caller's own method", null, null,
-                test.CustomEffort is { } effort
-                    ? new EffortAnswer(
-                        volume is { } mold ? CompactiveEffort.Of(effort.Rammer, effort.Drop, effort.Layers, effort.BlowsPerLayer, mold).KilojoulesPerCubicMeter : null,
-                        null)
-                    : null);
-        }
-
-        return test.Method is { } method
-            ? new MethodAnswer(method.Code, method.Title, method.Summary, method.Standard,
-                new EffortAnswer(method.Effort?.KilojoulesPerCubicMeter, method.NominalEffort?.Value.KilojoulesPerCubicMeter))
-            : null;
+            { IsCustomMethod: true } => new MethodAnswer(MoistureDensityMapping.CustomMethod, "The caller's own method", null, null,
+                test.CustomEffort is null ? null : new EffortAnswer(computed, null)),
+            { Method: { } method } => new MethodAnswer(method.Code, method.Title, method.Summary, method.Standard,
+                new EffortAnswer(computed, method.NominalEffort?.Value.KilojoulesPerCubicMeter)),
+            _ => null,
+        };
     }
 
     private static SpecimenAnswer ToAnswer(Specimen specimen, MoistureDensityTest test)
@@ -110,20 +110,17 @@ internal static class MoistureDensityJob
             specimen.SetAside);
     }
 
-    private static OptimumAnswer ToAnswer(FittedOptimum optimum, MoistureDensityTest test, PropagatedUncertainty? propagated)
+    public static OptimumAnswer ToAnswer(FittedOptimum optimum, MoistureDensityTest test, PropagatedUncertainty? propagated)
     {
         var w = new WaterContent(optimum.WaterContent.Value);
         var density = new Density(optimum.MaximumDryDensity.Value);
         var unit = test.Units.Density.InKilogramsPerCubicMeter();
-        var saturation = test.SpecificGravity is { } gravity && PhaseRelations.VoidRatio(density, gravity.Value, test.WaterDensity) is (> 0 and var voidRatio)
-            ? PhaseRelations.Saturation(w, voidRatio, gravity.Value) * 100
-            : (double?)null;
-        var water = Widened(optimum.WaterContent, propagated?.WaterContent, 0.01);
-        var maximum = Widened(optimum.MaximumDryDensity, propagated?.MaximumDryDensity, unit);
+        var water = ToAnswer(optimum.WaterContent, 0.01);
+        var maximum = ToAnswer(optimum.MaximumDryDensity, unit);
         return new OptimumAnswer(
             w.Percent,
             density.In(test.Units.Density),
-            saturation,
+            SaturationAt(w, density, test),
             water is null && maximum is null ? null : new OptimumUncertaintyAnswer
             {
                 WaterContent = water,
@@ -136,24 +133,15 @@ internal static class MoistureDensityJob
             Reported(test, w, density));
     }
 
-    /// <summary>The curve's own uncertainty and the measurements', independent of one another, in the answer's unit.</summary>
-    private static UncertaintyAnswer? Widened(Estimate estimate, double? measurements, double unit)
-    {
-        if (estimate.StandardUncertainty is not { } own)
-        {
-            return measurements is { } alone
-                ? new UncertaintyAnswer(alone / unit, [(estimate.Value - (NormalQuantile * alone)) / unit, (estimate.Value + (NormalQuantile * alone)) / unit], Coverage)
-                : null;
-        }
-
-        var further = NormalQuantile * (measurements ?? 0);
-        double[]? interval = estimate is { Lower: { } lower, Upper: { } upper }
-            ? [(estimate.Value - Hypotenuse(estimate.Value - lower, further)) / unit, (estimate.Value + Hypotenuse(upper - estimate.Value, further)) / unit]
+    /// <summary>Degree of saturation at a point, %; null without a specific gravity, or where the solids leave no voids.</summary>
+    public static double? SaturationAt(WaterContent w, Density density, MoistureDensityTest test) =>
+        test.SpecificGravity is { } gravity && PhaseRelations.VoidRatio(density, gravity.Value, test.WaterDensity) is (> 0 and var voidRatio)
+            ? PhaseRelations.Saturation(w, voidRatio, gravity.Value) * 100
             : null;
-        return new UncertaintyAnswer(Hypotenuse(own, measurements ?? 0) / unit, interval, Coverage);
-    }
 
-    private static double Hypotenuse(double a, double b) => b == 0 ? a : Math.Sqrt((a * a) + (b * b));
+    private static UncertaintyAnswer? ToAnswer(Estimate estimate, double unit) => estimate.StandardUncertainty is { } standard
+        ? new UncertaintyAnswer(standard / unit, estimate is { Lower: { } lower, Upper: { } upper } ? [lower / unit, upper / unit] : null, Coverage)
+        : null;
 
     private static ReportedAnswer Reported(MoistureDensityTest test, WaterContent w, Density density) =>
         new(Reporting.WaterContent(test.Method, w), Reporting.DryDensity(test.Method, density, test.Units.Density));
@@ -231,14 +219,4 @@ internal static class MoistureDensityJob
                 .Select(w => new[] { w.Percent, line(w).In(test.Units.Density) }),
         ];
     }
-
-    private static FindingContract ToContract(Finding finding) =>
-        new(finding.Code, finding.Severity.ToString().ToLowerInvariant(), finding.Message, finding.Place, finding.Basis);
-
-    private static TraceStep ToContract(WorkingStep step) =>
-        new(step.Quantity, step.Formula, step.Substitution, step.Value, step.Unit, step.Source, step.MathMl);
-
-    /// <summary>Over the request as it was read, so that white space and the order of members do not matter.</summary>
-    private static string DigestOf(MoistureDensityRequest request) =>
-        "sha256:" + Convert.ToHexStringLower(SHA256.HashData(JsonSerializer.SerializeToUtf8Bytes(request, ServiceJson.Of<MoistureDensityRequest>())));
 }

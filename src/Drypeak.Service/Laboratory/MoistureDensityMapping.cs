@@ -39,14 +39,10 @@ internal static class MoistureDensityMapping
             SpecificGravity = request.SpecificGravity is { Value: { } value } gravity
                 ? new SpecificGravity(value, gravity.Determined == "measured")
                 : null,
-            WaterDensity = request.WaterDensity is { } given
-                ? Density.From(given, units.Density)
-                : WaterDensity.At(request.WaterTemperature ?? WaterDensity.DefaultTemperature),
-            WaterTemperature = request.WaterDensity is null ? request.WaterTemperature ?? WaterDensity.DefaultTemperature : null,
+            WaterDensity = request.Water(),
+            WaterTemperature = request.Temperature(),
             Specimens = [.. request.Specimens!.Select((specimen, i) => specimen.ToMeasurement(i, units))],
-            Oversize = request.Oversize is { Percent: { } percent } oversize
-                ? new Oversize(percent / 100, oversize.SpecificGravity, WaterContent.FromPercent(oversize.WaterContent ?? 0), oversize.Sieve)
-                : null,
+            Oversize = request.Oversize?.ToOversize(),
             ParticlesAbove = request.ParticlesAbove is { Sieve: { } sieve, Percent: { } above } ? new ParticlesAbove(sieve, above / 100) : null,
             Model = request.Curve?.Model is { } name && name != Auto ? Models[name] : null,
             Adopted = request.Curve?.Adopted is { WaterContent: { } w, MaximumDryDensity: { } density, Reason: { } reason }
@@ -88,6 +84,10 @@ internal static class MoistureDensityMapping
                 WaterDensity.At(mold.WaterTemperature ?? WaterDensity.DefaultTemperature))
             : null,
     };
+
+    public static Oversize? ToOversize(this OversizeContract oversize) => oversize.Percent is { } percent
+        ? new Oversize(percent / 100, oversize.SpecificGravity, WaterContent.FromPercent(oversize.WaterContent ?? 0), oversize.Sieve)
+        : null;
 
     private static MoistureTin ToTin(this TinContract tin, UnitSet units) => new(
         Mass.From(tin.Tin!.Value, units.TinMass), Mass.From(tin.Wet!.Value, units.TinMass), Mass.From(tin.Dry!.Value, units.TinMass));

@@ -4,7 +4,7 @@ using Drypeak.Service.Contracts;
 namespace Drypeak.Service.Laboratory;
 
 /// <summary>A laboratory compaction test, from any stage between weighings and dry densities.</summary>
-public sealed record MoistureDensityRequest
+public sealed record MoistureDensityRequest : IWaterGiven
 {
     /// <summary>One line that names the test, up to 200 characters.</summary>
     /// <example>Ternmarsh, borrow area 7, sample 3</example>

@@ -1,24 +1,42 @@
 using Drypeak.Service.Contracts;
 using Drypeak.Service.Hosting;
 using Drypeak.Soil.Laboratory;
-using Drypeak.Soil.Phases;
-using Drypeak.Soil.Quantities;
 using Drypeak.Soil.TestMethods;
 using FluentValidation;
 
 namespace Drypeak.Service.Laboratory;
 
 /// <summary>All that a laboratory test must keep to be computed.</summary>
-internal static class MoistureDensityRules
+internal sealed class MoistureDensityRules(Limits limits)
 {
-    private static readonly RequestRules Values = new();
+    private readonly RequestRules _values = new(limits);
 
     /// <summary>Every broken rule; empty where the test can be computed.</summary>
-    public static IReadOnlyList<Fault> Check(MoistureDensityRequest request)
+    public IReadOnlyList<Fault> Check(MoistureDensityRequest request)
     {
-        var faults = Values.Validate(request).ToFaults().ToList();
+        var faults = _values.Validate(request).ToFaults().ToList();
+        faults.AddRange(IdentificationFaults(request.Identification ?? new Dictionary<string, string>()));
         faults.AddRange(Contradictions(request, faults));
         return faults;
+    }
+
+    /// <summary>The labels are the caller's: no path of property names could hold them, so their places are built here.</summary>
+    private IEnumerable<Fault> IdentificationFaults(IReadOnlyDictionary<string, string> labels)
+    {
+        const string place = "/identification";
+        if (labels.Count > limits.IdentificationLabels)
+        {
+            yield return new Fault(place, "too-many", $"There may be up to {limits.IdentificationLabels} labels; there are {labels.Count}.");
+        }
+
+        foreach (var (label, text) in labels)
+        {
+            if (label.Length > limits.NameCharacters || text?.Length > limits.TextCharacters)
+            {
+                yield return new Fault(Places.Member(place, label), "too-long",
+                    $"A label may have up to {limits.NameCharacters} characters and its text up to {limits.TextCharacters}. Shorten it.");
+            }
+        }
     }
 
     /// <summary>What is given twice and does not agree, and what is missing: only where the single values are sound.</summary>
@@ -26,45 +44,63 @@ internal static class MoistureDensityRules
     {
         var contradictions = new List<Fault>();
         bool Sound(string place) => !faults.Exists(fault => fault.Place == place || fault.Place.StartsWith(place + "/", StringComparison.Ordinal));
-        if (!Sound("/units") || !Sound("/waterTemperature") || !Sound("/waterDensity") || request.Specimens is null)
+        if (!Sound("/units") || request.Specimens is null)
         {
             return contradictions;
         }
 
         var units = request.Units.ToUnitSet();
-        if (request is { WaterDensity: { } given, WaterTemperature: { } temperature })
-        {
-            var (density, tabulated) = (Density.From(given, units.Density), WaterDensity.At(temperature));
-            var apart = Math.Abs((density.KilogramsPerCubicMeter / tabulated.KilogramsPerCubicMeter) - 1);
-            if (apart > SpecimenReduction.DensityTolerance * (1 + 1e-9))
-            {
-                contradictions.Add(new Fault("/waterDensity", "contradiction",
-                    $"The density of water given is {ReaderText.Of(density, units.Density)}, but at {RuleWords.Text(temperature)} °C it is {ReaderText.Of(tabulated, units.Density)}: {ReaderText.Percent(apart, 2)} apart, where {ReaderText.Percent(SpecimenReduction.DensityTolerance)} is allowed. Leave one out."));
-            }
-        }
-
         var mold = Sound("/mold") ? request.Mold.ToMold(units) : null;
         for (var i = 0; i < request.Specimens.Count; i++)
         {
             var place = $"/specimens/{i}";
-            if (request.Specimens[i] is { } specimen && Sound(place) && (Sound("/mold") || specimen.Mold is { }))
+            if (request.Specimens[i] is not { } specimen || !Sound(place) || !(Sound("/mold") || specimen.Mold is { }))
             {
-                SpecimenReduction.Reduce(specimen.ToMeasurement(i, units), mold, place, units, contradictions);
+                continue;
+            }
+
+            var measured = specimen.ToMeasurement(i, units);
+            if (MissingOfMold(measured, mold, place) is not { } missing)
+            {
+                SpecimenReduction.Reduce(measured, mold, place, units, contradictions);
+            }
+            else if (!contradictions.Contains(missing))
+            {
+                contradictions.Add(missing);
             }
         }
 
         return contradictions;
     }
 
+    /// <summary>
+    /// What a specimen's masses need of the mold and do not find: at the mold, so that a mold that all share is complained of once, and not
+    /// at all where its form is at fault.
+    /// </summary>
+    private static Fault? MissingOfMold(SpecimenMeasurement measured, Mold? testMold, string place)
+    {
+        if (measured is { MoldAndWetSoil: null, WetMass: null } or { WetDensity: { } } or { DryDensity: { } })
+        {
+            return null;
+        }
+
+        var mold = measured.Mold?.Over(testMold) ?? testMold;
+        var moldPlace = measured.Mold is null ? "/mold" : place + "/mold";
+        return (mold, measured.WetMass) switch
+        {
+            (null, null) => new Fault(moldPlace, "not-enough-data", "Masses of mold and wet soil need the mold: give mold.mass and mold.volume, for the test or for each specimen."),
+            (null, _) => new Fault(moldPlace, "not-enough-data", "Wet masses need the mold: give mold.volume, for the test or for each specimen."),
+            ({ EmptyMass: null }, null) => new Fault(moldPlace + "/mass", "not-enough-data", "The mass of the empty mold is missing. Give it, or the wet mass alone."),
+            ({ Volume: null, WaterFilling: null, Diameter: null }, _) => new Fault(moldPlace + "/volume", "not-enough-data", "The volume of the mold is missing. Give it, or diameter and height, or empty and withWater."),
+            _ => null,
+        };
+    }
+
     private sealed class RequestRules : AbstractValidator<MoistureDensityRequest>
     {
-        private const double LeastWaterDensity = 950;
-        private const double GreatestWaterDensity = 1100;
-
-        public RequestRules()
+        public RequestRules(Limits limits)
         {
-            RuleFor(request => request.Reference).AtMost(Bounds.NameCharacters);
-            RuleFor(request => request.Identification).Custom(CheckIdentification);
+            RuleFor(request => request.Reference).AtMost(limits.NameCharacters);
             RuleFor(request => request.Method).OneOf([.. TestMethodCatalogue.Codes, MoistureDensityMapping.CustomMethod], "unknown-method");
             RuleFor(request => request.Effort).Null().When(request => request.Method != MoistureDensityMapping.CustomMethod)
                 .WithErrorCode("not-for-this-method").WithMessage("An effort goes with method \"custom\" only; the others bring their own. Leave it out, or name \"custom\".");
@@ -72,55 +108,17 @@ internal static class MoistureDensityRules
             RuleFor(request => request.Units!).SetValidator(new UnitsRules()).When(request => request.Units is { });
             RuleFor(request => request.Mold!).SetValidator(new MoldRules()).When(request => request.Mold is { });
             RuleFor(request => request.SpecificGravity!).SetValidator(new SpecificGravityRules()).When(request => request.SpecificGravity is { });
-            RuleFor(request => request.WaterTemperature).Within(WaterDensity.LowestTemperature, WaterDensity.HighestTemperature, " °C");
-            RuleFor(request => request.WaterDensity).Custom(CheckWaterDensity);
+            Include(new WaterRules());
 
-            RuleFor(request => request.Specimens).Needed().Counted(Bounds.Specimens);
-            RuleForEach(request => request.Specimens).Needed().SetValidator(new SpecimenRules());
+            RuleFor(request => request.Specimens).Needed().Counted(limits.Specimens);
+            RuleForEach(request => request.Specimens).Needed().SetValidator(new SpecimenRules(limits));
             RuleFor(request => request.Specimens).Custom(CheckLabels);
 
             RuleFor(request => request.Oversize!).SetValidator(new OversizeRules()).When(request => request.Oversize is { });
             RuleFor(request => request.ParticlesAbove!).SetValidator(new ParticlesAboveRules()).When(request => request.ParticlesAbove is { });
-            RuleFor(request => request.Curve!).SetValidator(new CurveRules()).When(request => request.Curve is { });
-            RuleFor(request => request.Lines!).SetValidator(new LinesRules()).When(request => request.Lines is { });
+            RuleFor(request => request.Curve!).SetValidator(new CurveRules(limits)).When(request => request.Curve is { });
+            RuleFor(request => request.Lines!).SetValidator(new LinesRules(limits)).When(request => request.Lines is { });
             RuleFor(request => request.Uncertainty!).SetValidator(new UncertaintyRules()).When(request => request.Uncertainty is { });
-        }
-
-        private static void CheckIdentification(IReadOnlyDictionary<string, string>? labels, ValidationContext<MoistureDensityRequest> context)
-        {
-            if (labels is null)
-            {
-                return;
-            }
-
-            if (labels.Count > Bounds.IdentificationLabels)
-            {
-                context.Fail("Identification", "too-many", $"There may be up to {Bounds.IdentificationLabels} labels; there are {labels.Count}.");
-            }
-
-            foreach (var (label, text) in labels)
-            {
-                if (label.Length > Bounds.NameCharacters || text?.Length > Bounds.TextCharacters)
-                {
-                    context.Fail($"Identification[{label}]", "too-long", $"A label may have up to {Bounds.NameCharacters} characters and its text up to {Bounds.TextCharacters}. Shorten it.");
-                }
-            }
-        }
-
-        private static void CheckWaterDensity(double? value, ValidationContext<MoistureDensityRequest> context)
-        {
-            var name = context.InstanceToValidate.Units?.Density;
-            if (value is not { } number || (name is { } && !UnitNames.Density.ContainsKey(name)))
-            {
-                return;
-            }
-
-            var unit = context.InstanceToValidate.Units.DensityUnit();
-            if (Density.From(number, unit).KilogramsPerCubicMeter is not (>= LeastWaterDensity and <= GreatestWaterDensity))
-            {
-                context.Fail("WaterDensity", "out-of-range",
-                    $"The density of water must lie between {ReaderText.Of(new Density(LeastWaterDensity), unit)} and {ReaderText.Of(new Density(GreatestWaterDensity), unit)}; {RuleWords.Text(number)} {unit.Symbol()} was received.");
-            }
         }
 
         private static void CheckLabels(IReadOnlyList<SpecimenContract>? specimens, ValidationContext<MoistureDensityRequest> context)
@@ -139,20 +137,20 @@ internal static class MoistureDensityRules
 
     private sealed class SpecimenRules : AbstractValidator<SpecimenContract>
     {
-        public SpecimenRules()
+        public SpecimenRules(Limits limits)
         {
-            RuleFor(specimen => specimen.Label).NotBlank("A label").AtMost(Bounds.NameCharacters);
+            RuleFor(specimen => specimen.Label).NotBlank("A label").AtMost(limits.NameCharacters);
             RuleFor(specimen => specimen.MoldAndWetSoil).Positive();
             RuleFor(specimen => specimen.Mold!).SetValidator(new MoldRules()).When(specimen => specimen.Mold is { });
             RuleFor(specimen => specimen.WetMass).Positive();
             RuleFor(specimen => specimen.WetDensity).Positive();
             RuleFor(specimen => specimen.DryDensity).Positive();
             RuleFor(specimen => specimen.WaterContent).Within(0, 1000, " %");
-            RuleFor(specimen => specimen.Tins).Counted(Bounds.TinsPerSpecimen);
+            RuleFor(specimen => specimen.Tins).Counted(limits.TinsPerSpecimen);
             RuleForEach(specimen => specimen.Tins).Needed().SetValidator(new TinRules());
             RuleFor(specimen => specimen.WetBasis).PercentBelow100();
             RuleFor(specimen => specimen.Carbide!).SetValidator(new CarbideRules()).When(specimen => specimen.Carbide is { });
-            RuleFor(specimen => specimen.SetAside).NotBlank("The reason for setting a specimen aside").AtMost(Bounds.TextCharacters);
+            RuleFor(specimen => specimen.SetAside).NotBlank("The reason for setting a specimen aside").AtMost(limits.TextCharacters);
         }
     }
 
@@ -180,35 +178,31 @@ internal static class MoistureDensityRules
 
     private sealed class CurveRules : AbstractValidator<CurveRequest>
     {
-        public CurveRules()
+        public CurveRules(Limits limits)
         {
             RuleFor(curve => curve.Model).OneOf(MoistureDensityMapping.ModelNames, "unknown-model");
-            RuleFor(curve => curve.Adopted!).SetValidator(new AdoptedRules()).When(curve => curve.Adopted is { });
+            RuleFor(curve => curve.Adopted!).SetValidator(new AdoptedRules(limits)).When(curve => curve.Adopted is { });
         }
     }
 
     private sealed class AdoptedRules : AbstractValidator<AdoptedRequest>
     {
-        public AdoptedRules()
+        public AdoptedRules(Limits limits)
         {
             RuleFor(adopted => adopted.WaterContent).Needed().Within(0, 1000, " %");
             RuleFor(adopted => adopted.MaximumDryDensity).Needed().Positive();
-            RuleFor(adopted => adopted.Reason).Needed().NotBlank("The reason for an adopted peak").AtMost(Bounds.TextCharacters);
+            RuleFor(adopted => adopted.Reason).Needed().NotBlank("The reason for an adopted peak").AtMost(limits.TextCharacters);
         }
     }
 
     private sealed class LinesRules : AbstractValidator<LinesRequest>
     {
-        public LinesRules()
+        public LinesRules(Limits limits)
         {
-            RuleFor(lines => lines.Saturation).Must(list => list is null || list.Count <= Bounds.LinesOfAKind)
-                .WithErrorCode("too-many").WithMessage((_, list) => $"There may be up to {Bounds.LinesOfAKind} lines of a kind; there are {list!.Count}.");
-            RuleForEach(lines => lines.Saturation).Must(value => value is > 0 and <= 100)
-                .WithErrorCode("out-of-range").WithMessage((_, value) => $"A degree of saturation lies over 0 and up to 100 %; {RuleWords.Text(value)} was received.");
-            RuleFor(lines => lines.AirVoids).Must(list => list is null || list.Count <= Bounds.LinesOfAKind)
-                .WithErrorCode("too-many").WithMessage((_, list) => $"There may be up to {Bounds.LinesOfAKind} lines of a kind; there are {list!.Count}.");
-            RuleForEach(lines => lines.AirVoids).Must(value => value is >= 0 and < 100)
-                .WithErrorCode("out-of-range").WithMessage((_, value) => $"Air voids lie from 0 to below 100 %; {RuleWords.Text(value)} was received.");
+            RuleFor(lines => lines.Saturation).LinesOfAKind(limits.LinesOfAKind);
+            RuleForEach(lines => lines.Saturation).Saturation();
+            RuleFor(lines => lines.AirVoids).LinesOfAKind(limits.LinesOfAKind);
+            RuleForEach(lines => lines.AirVoids).AirVoids();
         }
     }
 

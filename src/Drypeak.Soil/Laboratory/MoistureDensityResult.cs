@@ -20,6 +20,6 @@ public sealed record MoistureDensityResult
     /// <summary>What a careful reviewer says, worst first.</summary>
     public required IReadOnlyList<Finding> Findings { get; init; }
 
-    /// <summary>The fitted peak, or null where there is none.</summary>
-    public FittedOptimum? Optimum => Curve?.Chosen.Optimum;
+    /// <summary>The fitted peak with all that is known of its uncertainty, or null where there is none.</summary>
+    public FittedOptimum? Optimum => Curve?.Chosen.Optimum is { } fitted ? Propagated?.Widen(fitted) ?? fitted : null;
 }

@@ -16,7 +16,28 @@ public sealed record UncertaintyContribution(string Quantity, double Share, doub
 /// <param name="WaterContent">Standard uncertainty of the optimum water content from the measurements alone, fraction.</param>
 /// <param name="MaximumDryDensity">Standard uncertainty of the maximum dry density from the measurements alone, kg/m³.</param>
 /// <param name="Contributions">Greatest first.</param>
-public sealed record PropagatedUncertainty(int Trials, double WaterContent, double MaximumDryDensity, IReadOnlyList<UncertaintyContribution> Contributions);
+public sealed record PropagatedUncertainty(int Trials, double WaterContent, double MaximumDryDensity, IReadOnlyList<UncertaintyContribution> Contributions)
+{
+    private const double NormalQuantile = 1.959963984540054;
+
+    /// <summary>The peak with the curve's own uncertainty and the measurements' together, the two taken as independent.</summary>
+    public FittedOptimum Widen(FittedOptimum optimum) =>
+        new(Widen(optimum.WaterContent, WaterContent), Widen(optimum.MaximumDryDensity, MaximumDryDensity));
+
+    /// <summary>Variances add; each end of the 95 % interval moves out by the measurements' own half length, in quadrature.</summary>
+    private static Estimate Widen(Estimate estimate, double measurements)
+    {
+        var further = NormalQuantile * measurements;
+        return estimate with
+        {
+            StandardUncertainty = Hypotenuse(estimate.StandardUncertainty ?? 0, measurements),
+            Lower = estimate.Value - Hypotenuse(estimate.Value - (estimate.Lower ?? estimate.Value), further),
+            Upper = estimate.Value + Hypotenuse((estimate.Upper ?? estimate.Value) - estimate.Value, further),
+        };
+    }
+
+    private static double Hypotenuse(double a, double b) => b == 0 ? a : Math.Sqrt((a * a) + (b * b));
+}
 
 /// <summary>
 /// Monte Carlo propagation (JCGM 101:2008) of the measurements' standard uncertainties through the whole chain: weighings, volume, tins,

@@ -1,4 +1,5 @@
 using System.Text;
+using CsCheck;
 using Drypeak.Service.Hosting;
 using Xunit;
 
@@ -214,5 +215,33 @@ public sealed class JsonReadingTests
         Assert.Equal(8, read.Problem!.Errors.Count);
         Assert.DoesNotContain("System", Encoding.UTF8.GetString(read.Problem.ToJson()), StringComparison.Ordinal);
         Assert.DoesNotContain(nameof(Weighing), Encoding.UTF8.GetString(read.Problem.ToJson()), StringComparison.Ordinal);
+    }
+
+    /// <summary>A right text with up to three stretches of it deleted, doubled or overwritten.</summary>
+    [Fact]
+    public void No_text_makes_the_reader_fail_and_what_it_refuses_has_a_fault_and_a_place()
+    {
+        const string Rich = """{"portions":[{"label":"1","wet":152.4,"dry":141.0,"rings":[{"volume":1e2}]}],"balance":31.2,"layers":3,"trace":true,"curve":[[1,2],[3,4]],"readings":[null,1],"identification":{"a":"\u00e9"},"ring":null}""";
+        string[] scraps = ["null", "1e999", "\"", "{}", "[", "}", ",", ":", "\\ud800", "-", "true", "\u00FF"];
+        var change = Gen.Select(Gen.Int[0, 2], Gen.Int[0, Rich.Length], Gen.Int[1, 12], Gen.Int[0, scraps.Length - 1]);
+        change.Array[1, 3].Sample(changes =>
+        {
+            var text = changes.Aggregate(Rich, (text, each) => Change(text, each.Item1, each.Item2, each.Item3, scraps[each.Item4]));
+            var read = Read(text);
+            Assert.True(read.Succeeded || (read.Problem.Status is 400 or 422 && read.Problem.Errors.Count > 0));
+            Assert.All(read.Problem?.Errors ?? [], fault => Assert.True(fault.Place.Length == 0 || fault.Place[0] == '/'));
+        }, iter: 20_000);
+    }
+
+    private static string Change(string text, int kind, int position, int length, string scrap)
+    {
+        var start = Math.Min(position, text.Length);
+        var end = Math.Min(start + length, text.Length);
+        return kind switch
+        {
+            0 => text[..start] + text[end..],
+            1 => text[..end] + text[start..],
+            _ => text[..start] + scrap + text[end..],
+        };
     }
 }

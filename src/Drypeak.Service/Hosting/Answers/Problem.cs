@@ -29,10 +29,12 @@ public sealed record Problem : IResult
     public IReadOnlyList<Fault> Errors { get; init; } = [];
 
     /// <summary>In a batch: the line that was refused, counted from 1.</summary>
+    /// <example>7</example>
     [JsonIgnore(Condition = JsonIgnoreCondition.WhenWritingNull)]
     public int? Line { get; init; }
 
     /// <summary>Where the service has failed: what finds the request in its log.</summary>
+    /// <example>4bf92f3577b34da6a3ce929d0e0e4736</example>
     [JsonIgnore(Condition = JsonIgnoreCondition.WhenWritingNull)]
     public string? TraceId { get; init; }
 

@@ -27,8 +27,10 @@ internal static class DocumentOrder
         {
             foreach (var fault in faults)
             {
-                for (var place = fault.Place; place is not null && wanted.Add(place); place = Places.Parent(place))
+                var place = fault.Place;
+                while (place is not null && wanted.Add(place))
                 {
+                    place = Places.Parent(place);
                 }
             }
         }

@@ -7,17 +7,22 @@ namespace Drypeak.Service.Hosting;
 
 /// <summary>
 /// Walks a document against the metadata of its contract and collects every fault of form: unknown, repeated, missing and
-/// mistyped members, null where there is none, numbers out of range. Beside it a mended document is written, in which a
-/// stand-in takes each faulty place, so that the rules can be asked about the rest.
+/// mistyped members, null where there is none, numbers out of range. Beside it the document is written anew with something
+/// else in each faulty place, so that the rules can be asked about the rest.
 /// </summary>
 internal sealed class FormInspection
 {
+    /// <summary>Contracts may contain themselves (a field test a laboratory test, a lot field tests): stand-ins end here.</summary>
+    private const int DeepestStandIn = 3;
+
     private readonly JsonSerializerOptions options;
     private readonly Utf8JsonWriter writer;
+    private readonly bool standsIn;
     private readonly List<Fault> faults = [];
     private readonly List<string> doubtful = [];
 
-    private FormInspection(JsonSerializerOptions options, Utf8JsonWriter writer) => (this.options, this.writer) = (options, writer);
+    private FormInspection(JsonSerializerOptions options, Utf8JsonWriter writer, bool standsIn) =>
+        (this.options, this.writer, this.standsIn) = (options, writer, standsIn);
 
     /// <summary>
     /// The faults in the order of the document, a missing member after the members that are there; at most one more than
@@ -25,19 +30,35 @@ internal sealed class FormInspection
     /// </summary>
     public IReadOnlyList<Fault> Faults => faults;
 
-    /// <summary>The document with stand-ins.</summary>
-    public ReadOnlyMemory<byte> Mended { get; private set; }
+    /// <summary>The document with a stand-in in each faulty place.</summary>
+    public ReadOnlyMemory<byte> WithStandIns { get; private set; }
+
+    /// <summary>The document without the faulty members; those that have to be there have their stand-in here too.</summary>
+    public ReadOnlyMemory<byte> Without { get; private set; }
 
     private bool IsFull => faults.Count > Problems.MaximumFaults;
 
     public static FormInspection Of(JsonElement document, JsonTypeInfo contract)
     {
-        var mended = new ArrayBufferWriter<byte>();
-        using var writer = new Utf8JsonWriter(mended);
-        var inspection = new FormInspection(contract.Options, writer);
-        inspection.Inspect(document, contract, Places.Whole);
+        var inspection = Of(document, contract, standsIn: true, out var withStandIns);
+        inspection.WithStandIns = withStandIns;
+        if (inspection.faults.Count > 0)
+        {
+            Of(document, contract, standsIn: false, out var without);
+            inspection.Without = without;
+        }
+
+        return inspection;
+    }
+
+    private static FormInspection Of(JsonElement document, JsonTypeInfo contract, bool standsIn, out ReadOnlyMemory<byte> written)
+    {
+        var buffer = new ArrayBufferWriter<byte>();
+        using var writer = new Utf8JsonWriter(buffer);
+        var inspection = new FormInspection(contract.Options, writer, standsIn);
+        inspection.Inspect(document, contract, Places.Whole, isOptional: false);
         writer.Flush();
-        inspection.Mended = mended.WrittenMemory;
+        written = buffer.WrittenMemory;
         return inspection;
     }
 
@@ -48,7 +69,7 @@ internal sealed class FormInspection
     public bool MayExplain(Fault fault) =>
         doubtful.Exists(place => Places.IsWithin(fault.Place, place) || Places.IsWithin(place, fault.Place));
 
-    private void Inspect(JsonElement value, JsonTypeInfo type, string place)
+    private void Inspect(JsonElement value, JsonTypeInfo type, string place, bool isOptional)
     {
         switch (type.Kind, value.ValueKind)
         {
@@ -62,10 +83,10 @@ internal sealed class FormInspection
                 InspectEntries(value, type, place);
                 break;
             case (JsonTypeInfoKind.None, _):
-                InspectScalar(value, type, place);
+                InspectScalar(value, type, place, isOptional);
                 break;
             default:
-                Refuse(WrongType(value, type, place), type);
+                Refuse(WrongType(value, type, place), type, isOptional);
                 break;
         }
     }
@@ -74,6 +95,7 @@ internal sealed class FormInspection
     {
         var members = type.Properties.Where(member => member.Set is not null || member.AssociatedParameter is not null).ToDictionary(member => member.Name);
         var seen = new HashSet<string>();
+        var meant = new HashSet<string>();
         writer.WriteStartObject();
         foreach (var given in value.EnumerateObject())
         {
@@ -87,17 +109,21 @@ internal sealed class FormInspection
                 writer.WritePropertyName(given.Name);
                 InspectNullable(given.Value, ContractShape.Of(member.PropertyType, options), here, allowsNull: member.IsSetNullable && AcceptsNull(member.PropertyType));
             }
-            else
+            else if (ReportUnknown(given.Name, members.Keys, place) is { } name)
             {
-                ReportUnknown(given.Name, members.Keys, place);
+                meant.Add(name);
             }
         }
 
-        foreach (var missing in members.Values.Where(member => member.IsRequired && !seen.Contains(member.Name)))
+        foreach (var absent in members.Values.Where(member => !seen.Contains(member.Name) && (member.IsRequired || meant.Contains(member.Name))))
         {
-            var shape = ContractShape.Of(missing.PropertyType, options);
-            writer.WritePropertyName(missing.Name);
-            Refuse(new Fault(Places.Member(place, missing.Name), "missing-member", $"\"{missing.Name}\" is missing. Give it: {ContractShape.Describe(shape)}."), shape);
+            var shape = ContractShape.Of(absent.PropertyType, options);
+            writer.WritePropertyName(absent.Name);
+            WriteInPlace(shape, isOptional: !absent.IsRequired);
+            if (absent.IsRequired)
+            {
+                Report(new Fault(Places.Member(place, absent.Name), "missing-member", $"\"{absent.Name}\" is missing. Give it: {ContractShape.Describe(shape)}."));
+            }
         }
 
         writer.WriteEndObject();
@@ -142,7 +168,7 @@ internal sealed class FormInspection
     {
         if (value.ValueKind != JsonValueKind.Null)
         {
-            Inspect(value, type, place);
+            Inspect(value, type, place, allowsNull);
         }
         else if (allowsNull)
         {
@@ -150,15 +176,15 @@ internal sealed class FormInspection
         }
         else
         {
-            Refuse(new Fault(place, "null-not-allowed", $"null cannot stand here. Give {ContractShape.Describe(type)}."), type);
+            Refuse(new Fault(place, "null-not-allowed", $"null cannot stand here. Give {ContractShape.Describe(type)}."), type, isOptional: false);
         }
     }
 
-    private void InspectScalar(JsonElement value, JsonTypeInfo type, string place)
+    private void InspectScalar(JsonElement value, JsonTypeInfo type, string place, bool isOptional)
     {
         if (ScalarFault(value, type, place) is { } fault)
         {
-            Refuse(fault, type);
+            Refuse(fault, type, isOptional);
         }
         else
         {
@@ -206,11 +232,12 @@ internal sealed class FormInspection
     private static Fault OutOfRange(JsonElement value, string place, string bounds) =>
         new(place, "number-out-of-range", $"Received {Received.Describe(value)}. {bounds}");
 
-    private void ReportUnknown(string name, IReadOnlyCollection<string> known, string place)
+    /// <returns>The name that was probably meant, or null.</returns>
+    private string? ReportUnknown(string name, IReadOnlyCollection<string> known, string place)
     {
         if (IsFull)
         {
-            return;
+            return null;
         }
 
         var meant = NearestName.Of(name, known);
@@ -220,12 +247,26 @@ internal sealed class FormInspection
         {
             doubtful.Add(Places.Member(place, meant));
         }
+
+        return meant;
     }
 
-    private void Refuse(Fault fault, JsonTypeInfo type)
+    private void Refuse(Fault fault, JsonTypeInfo type, bool isOptional)
     {
         Report(fault);
-        WriteStandIn(type);
+        WriteInPlace(type, isOptional);
+    }
+
+    private void WriteInPlace(JsonTypeInfo type, bool isOptional)
+    {
+        if (isOptional && !standsIn)
+        {
+            writer.WriteNullValue();
+        }
+        else
+        {
+            WriteStandIn(type);
+        }
     }
 
     private void Report(Fault fault)
@@ -237,23 +278,32 @@ internal sealed class FormInspection
         }
     }
 
-    /// <summary>The emptiest value of the type that the rules can be shown; for a number a text, see <see cref="ContractShape.LenientOf"/>.</summary>
-    private void WriteStandIn(JsonTypeInfo type)
+    /// <summary>
+    /// A value that counts as given, and of which nothing is known: an object with all its members, a list of one item.
+    /// What the rules say of it is dropped; what stands elsewhere and needs it finds that it is there. For a number a text
+    /// is written, see <see cref="ContractShape.LenientOf"/>.
+    /// </summary>
+    private void WriteStandIn(JsonTypeInfo type, int depth = 0)
     {
         switch (type.Kind)
         {
             case JsonTypeInfoKind.Object:
                 writer.WriteStartObject();
-                foreach (var member in type.Properties.Where(member => member.IsRequired))
+                foreach (var member in type.Properties.Where(member => member.IsRequired || depth < DeepestStandIn))
                 {
                     writer.WritePropertyName(member.Name);
-                    WriteStandIn(ContractShape.Of(member.PropertyType, options));
+                    WriteStandIn(ContractShape.Of(member.PropertyType, options), depth + 1);
                 }
 
                 writer.WriteEndObject();
                 break;
             case JsonTypeInfoKind.Enumerable:
                 writer.WriteStartArray();
+                if (depth < DeepestStandIn)
+                {
+                    WriteStandIn(ContractShape.Of(type.ElementType!, options), depth + 1);
+                }
+
                 writer.WriteEndArray();
                 break;
             case JsonTypeInfoKind.Dictionary:

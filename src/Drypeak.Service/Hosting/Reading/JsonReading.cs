@@ -15,9 +15,10 @@ public static class JsonReading
     /// <param name="bytes">JSON in UTF-8; a byte order mark is skipped.</param>
     /// <param name="contract">Type information by <see cref="StrictJson"/>.</param>
     /// <param name="rules">
-    /// What the contract's form does not say: bounds, contradictions. They are asked about documents with faults of form too;
-    /// a faulty member is then not null, but an empty object, list or text, false, a whole 0, or not-a-number. So rules
-    /// between members compare numbers by operators that are false for not-a-number (<c>dry &gt; wet</c> is a fault).
+    /// What the contract's form does not say: bounds, contradictions. They are asked about documents with faults of form too,
+    /// once with the optional faulty members absent and once with stand-ins for them: an empty text, false, 0, not-a-number
+    /// for a number that may be a fraction. So rules between members compare numbers by operators that are false for
+    /// not-a-number (<c>dry &gt; wet</c> is a fault).
     /// </param>
     /// <returns>The value; or 400 where the form is wrong, with the rules' faults that do not merely follow; or 422 where only rules are broken.</returns>
     public static Read<T> Read<T>(ReadOnlyMemory<byte> bytes, JsonTypeInfo<T> contract, Func<T, IReadOnlyList<Fault>> rules)
@@ -87,12 +88,17 @@ public static class JsonReading
         return Problems.InvalidForm(DocumentOrder.Sort(faults, document.RootElement));
     }
 
-    /// <summary>The broken rules that stand beside the faults of form and do not follow from them.</summary>
+    /// <summary>
+    /// The broken rules that do not follow from the faults of form: they are broken whether the faulty members are taken
+    /// as given or as absent, and in another place.
+    /// </summary>
     private static IEnumerable<Fault> Unexplained<T>(FormInspection form, JsonTypeInfo<T> contract, Func<T, IReadOnlyList<Fault>> rules)
         where T : class
     {
-        var standIn = JsonSerializer.Deserialize(form.Mended.Span, ContractShape.LenientOf(contract))!;
-        return rules(standIn).Where(fault => !form.MayExplain(fault));
+        var lenient = ContractShape.LenientOf(contract);
+        IReadOnlyList<Fault> Broken(ReadOnlyMemory<byte> text) => rules(JsonSerializer.Deserialize(text.Span, lenient)!);
+        var whereGiven = Broken(form.WithStandIns).Select(fault => (fault.Place, fault.Code)).ToHashSet();
+        return Broken(form.Without).Where(fault => whereGiven.Contains((fault.Place, fault.Code)) && !form.MayExplain(fault));
     }
 
     private static JsonDocument Parse(ReadOnlyMemory<byte> text) =>

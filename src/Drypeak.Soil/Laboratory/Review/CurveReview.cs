@@ -10,10 +10,16 @@ internal static class CurveReview
     /// <summary>kg/m³; over it the points follow no single curve.</summary>
     private const double GreatestDeparture = 20;
 
-    /// <summary>kg/m³; an inner point so far from its prediction can be told among few.</summary>
+    /// <summary>kg/m³; an inner point so far from its prediction can be told among few, if the prediction is no wild guess.</summary>
     private const double FarOff = 60;
 
-    private const double FarOffInStandardUncertainties = 3;
+    /// <summary>The same in standard uncertainties of the prediction.</summary>
+    private const double FarOffAmongFew = 2.5;
+
+    /// <summary>From six points on, in standard uncertainties of the prediction.</summary>
+    private const double FarOffAmongMany = 3;
+
+    private const int Many = 6;
     private const double WaterContentsApart = 0.005;
     private const double DensitiesApart = 20;
     private const double LeastSlopeRatio = 1.0 / 3;
@@ -47,8 +53,9 @@ internal static class CurveReview
             var prediction = curve.Chosen.Predictions[i];
             var off = Math.Abs(specimen.DryDensity.KilogramsPerCubicMeter - prediction.DryDensity);
             var inner = index != driest && index != wettest;
-            var told = review.Kept.Count >= 6 && prediction.StandardUncertainty is > 0 and var u && off > FarOffInStandardUncertainties * u;
-            if (told || (inner && off > FarOff))
+            var apart = prediction.StandardUncertainty is > 0 and var u ? off / u : 0;
+            var told = review.Kept.Count >= Many ? apart > FarOffAmongMany : inner && off > FarOff && apart > FarOffAmongFew;
+            if (told)
             {
                 yield return FindingKinds.PointFarOff.At(PlaceOf(index),
                     $"Specimen {specimen.Label} has {review.Text(specimen.DryDensity.KilogramsPerCubicMeter)}, where the others say {review.Text(prediction.DryDensity)}: {review.Text(off)} apart. Check its weighings, and make it again.");

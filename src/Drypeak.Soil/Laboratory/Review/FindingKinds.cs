@@ -153,7 +153,7 @@ public static class FindingKinds
         "A point is far from what the others say.",
         "It pulls the curve, and with it the optimum.",
         "Check its weighings; make it again; set it aside only with a reason.",
-        "Leave-one-out prediction: six points and more and over three standard uncertainties, or an inner point off by over 60 kg/m³");
+        "Leave-one-out prediction: from six points on, off by over three standard uncertainties; among fewer, an inner point off by over 60 kg/m³ and 2.5 of them");
 
     /// <summary>Tins that disagree.</summary>
     public static readonly FindingKind TinsDisagree = new("tins-disagree", Severity.Warning,
@@ -218,6 +218,13 @@ public static class FindingKinds
         "Name the method.",
         "The catalogue of test methods");
 
+    /// <summary>An effort beyond the tests of a series.</summary>
+    public static readonly FindingKind EffortOutsideRange = new("effort-outside-range", Severity.Warning,
+        "An effort lies beyond the tests of the series.",
+        "The line of optimums is only known between the tests; beyond them it is a guess.",
+        "Make a test at that effort, or one beyond it.",
+        "Interpolation over the logarithm of effort: " + CommonPractice);
+
     /// <summary>Every kind, in the order of a review.</summary>
     public static IReadOnlyList<FindingKind> All { get; } =
     [
@@ -225,6 +232,6 @@ public static class FindingKinds
         OptimumAtEdge, TooFewSpecimens, FewOnASide, WideSpacing, PointFarOff, TinsDisagree, RepeatedValues,
         SpecificGravityUnusual, MoldOutsideTolerance, ParticlesAboveLimit, OversizeAboveLimit, OversizeNotCorrected,
         WetLegNotParallel, SaturationAtOptimumUnusual, ModelsDisagree, PeakAdopted, OversizeSmall,
-        SpecificGravityAssumed, SpecificGravityMissing, SpecimenSetAside, MethodNotGiven,
+        SpecificGravityAssumed, SpecificGravityMissing, SpecimenSetAside, MethodNotGiven, EffortOutsideRange,
     ];
 }

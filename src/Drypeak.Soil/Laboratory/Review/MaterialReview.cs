@@ -1,25 +1,20 @@
 using Drypeak.Soil.Quantities;
+using Drypeak.Soil.TestMethods;
 
 namespace Drypeak.Soil.Laboratory.Review;
 
-/// <summary>What is wrong with solids, mold, particles and oversize, against the method and in themselves.</summary>
-internal static class MaterialReview
+/// <summary>What is wrong with solids, mold, particles and oversize, against the method and in themselves. Places are those of a laboratory request.</summary>
+public static class MaterialReview
 {
     private const double LeastSpecificGravity = 2.2;
     private const double GreatestSpecificGravity = 3.2;
 
-    public static IEnumerable<Finding> Of(ReviewedTest review) =>
-        [.. Solids(review.Test), .. MoldTolerance(review), .. Particles(review.Test), .. OversizeShare(review.Test), .. Method(review.Test)];
+    internal static IEnumerable<Finding> Of(ReviewedTest review) =>
+        [.. (review.Test.SpecificGravity is { } gravity ? SpecificGravity(gravity) : NoSpecificGravity()), .. MoldTolerance(review), .. Particles(review.Test), .. (review.Test.Oversize is { } oversize ? Oversize(oversize, review.Test.Method) : []), .. Method(review.Test)];
 
-    private static IEnumerable<Finding> Solids(MoistureDensityTest test)
+    /// <summary>What is said of a specific gravity.</summary>
+    public static IEnumerable<Finding> SpecificGravity(SpecificGravity gravity)
     {
-        if (test.SpecificGravity is not { } gravity)
-        {
-            yield return FindingKinds.SpecificGravityMissing.At("",
-                "No specific gravity was given: there are no saturations, no lines and no saturation model, and no check against the zero-air-voids line. Give it, marked as assumed if it was not measured.");
-            yield break;
-        }
-
         if (gravity.Value is < LeastSpecificGravity or > GreatestSpecificGravity)
         {
             yield return FindingKinds.SpecificGravityUnusual.At("/specificGravity/value",
@@ -32,6 +27,12 @@ internal static class MaterialReview
                 $"The specific gravity of {ReaderText.Significant(gravity.Value)} is assumed: saturations and lines are only as good as that.");
         }
     }
+
+    private static IEnumerable<Finding> NoSpecificGravity() =>
+    [
+        FindingKinds.SpecificGravityMissing.At("",
+            "No specific gravity was given: there are no saturations, no lines and no saturation model, and no check against the zero-air-voids line. Give it, marked as assumed if it was not measured."),
+    ];
 
     private static IEnumerable<Finding> MoldTolerance(ReviewedTest review)
     {
@@ -64,19 +65,17 @@ internal static class MaterialReview
         }
     }
 
-    private static IEnumerable<Finding> OversizeShare(MoistureDensityTest test)
+    /// <summary>What is said of a share of oversize.</summary>
+    /// <param name="oversize">The oversize.</param>
+    /// <param name="method">The method whose limit holds, or null: then the correction's own.</param>
+    public static IEnumerable<Finding> Oversize(Oversize oversize, TestMethod? method)
     {
-        if (test.Oversize is not { } oversize)
-        {
-            yield break;
-        }
-
-        var methods = test.Method?.OversizeLimitPercent?.Value / 100;
-        var limit = methods ?? OversizeCorrection.LargestShare(oversize.SieveMillimeters ?? test.Method?.OversizeSieveMillimeters?.Value);
+        var methods = method?.OversizeLimitPercent?.Value / 100;
+        var limit = methods ?? OversizeCorrection.LargestShare(oversize.SieveMillimeters ?? method?.OversizeSieveMillimeters?.Value);
         if (oversize.Fraction > limit * (1 + 1e-9))
         {
             yield return FindingKinds.OversizeAboveLimit.At("/oversize/percent",
-                $"Oversize is {ReaderText.Percent(oversize.Fraction)} of the dry mass; {(methods is null ? "the correction" : test.Method!.Title)} is valid to {ReaderText.Percent(limit, 0)}. The corrected values are outside the procedure: use a larger mold or another method.");
+                $"Oversize is {ReaderText.Percent(oversize.Fraction)} of the dry mass; {(methods is null ? "the correction" : method!.Title)} is valid to {ReaderText.Percent(limit, 0)}. The corrected values are outside the procedure: use a larger mold or another method.");
         }
 
         if (oversize.Fraction > OversizeCorrection.NeededAbove * (1 + 1e-9))

@@ -16,6 +16,9 @@ internal static class SpecimenReview
     /// <summary>Room for the arithmetic on the zero-air-voids line itself.</summary>
     private const double OnTheLine = 1e-9;
 
+    /// <summary>A point above the line by less than this fraction is within what the choice of the water's density alone moves it (998.2 or 1000 kg/m³).</summary>
+    private const double WithinRounding = 0.002;
+
     private static readonly (double Factor, string Text)[] UnitRatios =
     [
         (1000, "1000: grams for kilograms, or kilograms for grams"),
@@ -100,7 +103,9 @@ internal static class SpecimenReview
             var saturation = specimen.PhasesWith(gravity.Value, water)?.Saturation;
             var start = $"Specimen {specimen.Label} lies above the zero-air-voids line: {review.Text(dry)} where {review.Text(limit)} is the most at {ReaderText.Of(specimen.WaterContent)} water"
                 + (saturation is { } sr ? $" (saturation {ReaderText.Percent(sr)}). " : ". ");
-            yield return gravity.Measured
+            yield return dry <= limit * (1 + WithinRounding)
+                ? FindingKinds.AboveZeroAirVoids.At(PlaceOf(index), start + $"That is within {ReaderText.Percent(WithinRounding)}, which rounding or the density of water can bring. Look at the weighings.", Severity.Note)
+                : gravity.Measured
                 ? FindingKinds.AboveZeroAirVoids.At(PlaceOf(index), start + "Check its weighings, the mold and the specific gravity.", Severity.Error)
                 : FindingKinds.AboveZeroAirVoids.At(PlaceOf(index), start + (double.IsFinite(fitsAll)
                     ? $"The specific gravity of {ReaderText.Significant(gravity.Value)} is assumed: all points would fit from {ReaderText.Significant(fitsAll)} on. Measure it, or check the weighings."

@@ -30,8 +30,9 @@ internal sealed record ReviewedTest(MoistureDensityTest Test, MoistureDensityRes
     public IReadOnlyList<(Specimen Specimen, int Index)> Kept { get; } =
         [.. Result.Specimens.Select((specimen, i) => (specimen, i)).Where(item => item.specimen.SetAside is null)];
 
-    /// <summary>The specimens kept in order of water content.</summary>
-    public IReadOnlyList<(Specimen Specimen, int Index)> Sorted => [.. Kept.OrderBy(item => item.Specimen.WaterContent.Fraction)];
+    /// <summary>The specimens kept in order of water content, then of dry density: what is said of them does not hang on the order of the request.</summary>
+    public IReadOnlyList<(Specimen Specimen, int Index)> Sorted =>
+        [.. Kept.OrderBy(item => item.Specimen.WaterContent.Fraction).ThenBy(item => item.Specimen.DryDensity.KilogramsPerCubicMeter)];
 
     /// <summary>The fitted peak, or null.</summary>
     public FittedOptimum? Optimum => Result.Optimum;

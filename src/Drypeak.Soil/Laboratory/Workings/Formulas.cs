@@ -6,7 +6,12 @@ namespace Drypeak.Soil.Laboratory.Workings;
 /// <param name="Text">In symbols, on one line.</param>
 /// <param name="MathMl">As MathML.</param>
 /// <param name="Source">Where it stands.</param>
-internal sealed record Formula(string Text, string MathMl, string Source);
+internal sealed record Formula(string Text, string MathMl, string Source)
+{
+    /// <summary>The formula with its numbers put in.</summary>
+    public WorkingStep Step(string quantity, string? substitution, double value, string unit) =>
+        new(quantity, Text, substitution, value, unit, Source, MathMl);
+}
 
 /// <summary>The formulas of the laboratory test, in the order of the working.</summary>
 internal static class Formulas
@@ -75,6 +80,12 @@ internal static class Formulas
 
     public static readonly Formula CorrectedWater = new("wT = (Pf·wF + Pc·wc)/100",
         Formula(Sub("w", "T"), "=", Over(Row(Sub("P", "f"), Sub("w", "F"), "+", Sub("P", "c"), Sub("w", "c")), "100")), Correction);
+
+    public static readonly Formula DensityOfFines = new("ρdF = Pf/(100/ρdT − Pc/(Gc·ρw))",
+        Formula(Sub("ρ", "dF"), "=", Over(Sub("P", "f"), Row(Over("100", Sub("ρ", "dT")), "−", Over(Sub("P", "c"), Row(Sub("G", "c"), RhoW))))), Correction);
+
+    public static readonly Formula WaterOfFines = new("wF = (100·wT − Pc·wc)/Pf",
+        Formula(Sub("w", "F"), "=", Over(Row("100", Sub("w", "T"), "−", Sub("P", "c"), Sub("w", "c")), Sub("P", "f"))), Correction);
 
     /// <summary>The peak of a fitted model, which no line of arithmetic gives.</summary>
     public static Formula Peak(string model) => new($"maximum of the {model} curve",

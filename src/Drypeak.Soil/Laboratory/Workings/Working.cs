@@ -1,6 +1,6 @@
-using System.Globalization;
 using Drypeak.Soil.Phases;
 using Drypeak.Soil.Quantities;
+using static Drypeak.Soil.Laboratory.Workings.WorkingNumbers;
 
 namespace Drypeak.Soil.Laboratory.Workings;
 
@@ -53,7 +53,7 @@ public static class Working
             {
                 Add("compactive effort", Formulas.Effort,
                     $"{Number(effort.Rammer.Kilograms)}*{Number(UnitTable.StandardGravity)}*{Number(effort.Drop.Meters)}*{effort.Layers}*{effort.BlowsPerLayer}/{Number(mold.CubicMeters)}/1000",
-                    TestMethods.CompactiveEffort.Of(effort.Rammer, effort.Drop, effort.Layers, effort.BlowsPerLayer, mold).KilojoulesPerCubicMeter, "kJ/m³");
+                    EffortSeries.EffortOf(test, specimens)!.Value.KilojoulesPerCubicMeter, "kJ/m³");
             }
         }
 
@@ -106,7 +106,7 @@ public static class Working
 
         public void Correction(MoistureDensityResult result)
         {
-            if (result.Corrected is not { } corrected || test.Oversize is not { SpecificGravity: { } gravity } oversize)
+            if (result.Corrected is null || test.Oversize is not { } oversize)
             {
                 return;
             }
@@ -114,11 +114,8 @@ public static class Working
             var (w, density) = test.Adopted is { } adopted
                 ? (adopted.WaterContent, adopted.MaximumDryDensity)
                 : (new WaterContent(result.Optimum!.WaterContent.Value), new Density(result.Optimum.MaximumDryDensity.Value));
-            var (coarse, fine) = (Number(oversize.Fraction * 100), $"(100 - {Number(oversize.Fraction * 100)})");
-            Add("maximum dry density corrected for oversize", Formulas.CorrectedDensity,
-                $"100/({fine}/{Number(density.In(DensityUnit))} + {coarse}/({Number(gravity)}*{WaterDensityText}))", corrected.DryDensity.In(DensityUnit), DensityUnit.Symbol());
-            Add("optimum water content corrected for oversize", Formulas.CorrectedWater,
-                $"({fine}*{Number(w.Percent)} + {coarse}*{Number(oversize.WaterContent.Percent)})/100", corrected.WaterContent.Percent, "%");
+            _steps.AddRange(OversizeWorking.Of(
+                new DensityAndWater(density, w), oversize, test.WaterDensity, toTotal: true, DensityUnit, "maximum dry density", "optimum water content"));
         }
 
         private void WaterContent(SpecimenMeasurement measured, Specimen specimen, string of)
@@ -199,15 +196,9 @@ public static class Working
         }
 
         private void Add(string quantity, Formula formula, string? substitution, double value, string unit) =>
-            _steps.Add(new WorkingStep(quantity, formula.Text, substitution, value, unit, formula.Source, formula.MathMl));
+            _steps.Add(formula.Step(quantity, substitution, value, unit));
 
         /// <summary>A change of unit, or nothing where the units match.</summary>
         private static string Factor(double factor) => Math.Abs(factor - 1) < 1e-12 ? "" : "*" + Number(factor);
-
-        private static string Number(double value)
-        {
-            var text = value.ToString("R", CultureInfo.InvariantCulture);
-            return text.Contains('E') ? value.ToString("0.####################################", CultureInfo.InvariantCulture) : text;
-        }
     }
 }

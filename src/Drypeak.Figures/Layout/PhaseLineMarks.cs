@@ -1,0 +1,34 @@
+using Drypeak.Figures.Drawing;
+
+namespace Drypeak.Figures.Layout;
+
+/// <summary>The lines of saturation and air voids as they run through the plot, each with its label in it where there is room.</summary>
+internal sealed class PhaseLineMarks(PhaseLines lines, Plot plot, TypeScale type)
+{
+    private const int Samples = 96;
+
+    private readonly List<(PhaseLine Line, Course Course)> _drawn = [.. lines.All.SelectMany(line => Courses(line, plot).Select(course => (line, course)))];
+
+    public void Block(LabelSpace space) => _drawn.ForEach(drawn => space.Block(Barriers.PhaseLines, drawn.Course.Whole(), drawn.Line));
+
+    /// <summary>Places the labels and draws the lines with gaps for them.</summary>
+    public FigurePart DrawLabeled(LabelSpace space) => new("lines", _drawn.ConvertAll(drawn => DrawLabeled(drawn.Line, drawn.Course, space)));
+
+    private Lines DrawLabeled(PhaseLine line, Course course, LabelSpace space)
+    {
+        var stroke = line.Stroke(type);
+        return new Lines(LineLabels.Place(line, course, type.Label, stroke.Color, space), stroke) { Name = line.Name };
+    }
+
+    /// <summary>Over the axis of water content, from 0 on. Density falls as water rises, so a line comes into the plot once or not at all.</summary>
+    private static List<Course> Courses(PhaseLine line, Plot plot)
+    {
+        var range = plot.Water.Range;
+        var from = Math.Max(0, range.From);
+        return from >= range.To ? [] : Course.Clipped(
+            [.. Enumerable.Range(0, Samples + 1)
+                .Select(sample => from + ((range.To - from) * sample / Samples))
+                .Select(water => plot.At(new ChartPoint(water, line.DryDensityAt(water))))],
+            plot.Area);
+    }
+}

@@ -1,0 +1,27 @@
+using Microsoft.OpenApi;
+using Swashbuckle.AspNetCore.SwaggerGen;
+
+namespace Drypeak.Service.Hosting;
+
+/// <summary>What the document says once for all operations: what each group of them is for, and that none needs a key.</summary>
+internal sealed class TagsAndSecurity : IDocumentFilter
+{
+    private static readonly Dictionary<string, string> Descriptions = new()
+    {
+        ["Laboratory"] = "Compaction tests and what belongs to them.",
+        ["Catalogues"] = "Test methods and findings, explained.",
+        ["Charts"] = "Pictures by address.",
+        ["Description"] = "The service in its own words.",
+        ["Health"] = "For those who run the service.",
+    };
+
+    public void Apply(OpenApiDocument swaggerDoc, DocumentFilterContext context)
+    {
+        foreach (var tag in swaggerDoc.Tags ?? new HashSet<OpenApiTag>())
+        {
+            tag.Description = Descriptions[tag.Name!];
+        }
+
+        swaggerDoc.Security = [new OpenApiSecurityRequirement()];
+    }
+}

@@ -1,0 +1,22 @@
+using Drypeak.Service.Hosting;
+using Drypeak.Soil.Laboratory.Review;
+
+namespace Drypeak.Service.Laboratory;
+
+/// <summary><c>GET /v1/findings</c>: what each kind of finding means.</summary>
+internal static class FindingKindsEndpoint
+{
+    private static readonly IReadOnlyList<FindingKindAnswer> Kinds =
+    [
+        .. FindingKinds.All.Select(kind => new FindingKindAnswer(
+            kind.Code, kind.Severity.ToString().ToLowerInvariant(), kind.Meaning, kind.Why, kind.Remedy, kind.Basis)),
+    ];
+
+    public static void MapFindingKinds(this IEndpointRouteBuilder app) =>
+        app.MapRead("/v1/findings", () => Results.Json(Kinds, ServiceJson.Of<IReadOnlyList<FindingKindAnswer>>()))
+            .WithTags("Catalogues")
+            .WithName("findings")
+            .WithSummary("Every kind of finding")
+            .WithDescription("What it means, why it matters, what to do, and on what rule it stands.")
+            .Gives<IReadOnlyList<FindingKindAnswer>>("application/json");
+}

@@ -1,0 +1,178 @@
+using CsCheck;
+using Drypeak.Soil.Phases;
+using Drypeak.Soil.Quantities;
+using Xunit;
+
+namespace Drypeak.Figures.Tests;
+
+public sealed class CompactionFigureTests
+{
+    [Fact]
+    public void Marks_stand_where_one_scale_an_axis_puts_their_numbers()
+    {
+        Gen.Select(Charts.Any, Charts.Size).Sample((chart, size) =>
+        {
+            var marks = SvgPicture.Of(chart, size).OfClass("specimen").ToList();
+            Assert.Equal(chart.Specimens.Count, marks.Count);
+            AssertLinear([.. marks.Select(mark => (SvgPicture.Number(mark, "data-x"), SvgPicture.Number(mark, "cx")))], rising: true);
+            AssertLinear([.. marks.Select(mark => (SvgPicture.Number(mark, "data-y"), SvgPicture.Number(mark, "cy")))], rising: false);
+        }, iter: 300);
+    }
+
+    [Fact]
+    public void Marks_carry_the_numbers_in_full_precision()
+    {
+        var marks = SvgPicture.Of(Charts.Full, FigureSize.Default).OfClass("specimen");
+        Assert.Equal(
+            Charts.Full.Specimens.Select(specimen => (specimen.WaterContent, specimen.DryDensity)).Order(),
+            marks.Select(mark => (SvgPicture.Number(mark, "data-x"), SvgPicture.Number(mark, "data-y"))).Order());
+    }
+
+    [Fact]
+    public void Only_specimens_that_are_set_aside_are_hollow()
+    {
+        var marks = SvgPicture.Of(Charts.Full, FigureSize.Default).OfClass("specimen").ToList();
+        var hollow = Assert.Single(marks, mark => (string?)mark.Attribute("fill") == "none");
+        Assert.Equal(12.6, SvgPicture.Number(hollow, "data-x"));
+    }
+
+    [Theory]
+    [InlineData(960, 640)]
+    [InlineData(240, 240)]
+    [InlineData(320, 240)]
+    [InlineData(2400, 2400)]
+    public void Both_reported_numbers_and_the_units_of_both_axes_are_drawn_at_any_size(int width, int height)
+    {
+        var texts = SvgPicture.Of(Charts.Ternmarsh, new FigureSize(width, height)).Texts.ToList();
+        Assert.Contains(texts, text => text.Contains("1.83 Mg/m³", StringComparison.Ordinal));
+        Assert.Contains(texts, text => text.Contains("14.1 %", StringComparison.Ordinal));
+        Assert.Contains("Dry density (Mg/m³)", texts);
+        Assert.Contains("Water content (%)", texts);
+    }
+
+    [Fact]
+    public void The_values_at_the_ends_of_the_leader_lines_stand_level_with_the_optimum()
+    {
+        var picture = SvgPicture.Of(Charts.Ternmarsh, FigureSize.Default);
+        var (density, water) = (picture.TextBoxes.Single(box => box.Text == "1.83"), picture.TextBoxes.Single(box => box.Text == "14.1"));
+        var marks = picture.OfClass("specimen").OrderBy(mark => SvgPicture.Number(mark, "cx")).ToList();
+        var (first, last) = (marks[0], marks[^1]);
+
+        double Between(string data, string place, double value)
+        {
+            var (from, to) = (SvgPicture.Number(first, data), SvgPicture.Number(last, data));
+            var (start, end) = (SvgPicture.Number(first, place), SvgPicture.Number(last, place));
+            return start + ((value - from) / (to - from) * (end - start));
+        }
+
+        Assert.Equal(Between("data-x", "cx", 14.1), (water.Left + water.Right) / 2, 0.1);
+        Assert.InRange(Between("data-y", "cy", 1.826), density.Top, density.Bottom);
+    }
+
+    [Fact]
+    public void The_title_says_the_result()
+    {
+        Assert.Equal("Maximum dry density 1.83 Mg/m³ at 14.1 % water", Title(Charts.Ternmarsh));
+        Assert.Equal("Adopted maximum dry density 1.84 Mg/m³ at 13.7 % water", Title(Charts.Full));
+        Assert.Equal("No optimum within the tested range", Title(Charts.WithoutOptimum));
+
+        static string Title(CompactionChart chart)
+        {
+            var figure = CompactionFigure.Draw(chart, FigureSize.Default);
+            Assert.Contains(figure.Title, SvgPicture.Read(SvgWriter.Write(figure)).Texts);
+            return figure.Title;
+        }
+    }
+
+    [Fact]
+    public void A_unit_of_weight_is_called_a_unit_weight()
+    {
+        var chart = Charts.Ternmarsh with { DensityUnit = DensityUnit.KilonewtonPerCubicMeter, Optimum = null };
+        Assert.Contains("Dry unit weight (kN/m³)", SvgPicture.Of(chart, FigureSize.Default).Texts);
+    }
+
+    [Fact]
+    public void The_description_states_the_result_in_words()
+    {
+        Assert.Equal(
+            "Dry density against water content of 6 specimens, 1 of them set aside: 9.8 to 17.3 % water, 1.70 to 1.83 Mg/m³. "
+            + "The adopted maximum dry density is 1.84 Mg/m³ at an optimum water content of 13.7 %. "
+            + "The fitted curve has its maximum of 1.83 Mg/m³ at 14.1 %. Corrected for oversize: 1.88 Mg/m³ at 12.9 %. "
+            + "Lines: zero air voids, saturation 90 %, saturation 80 %, air voids 5 %, air voids 10 %. Suggested next specimen: 14.5 % water.",
+            CompactionFigure.Draw(Charts.Full, FigureSize.Default).Description);
+    }
+
+    [Fact]
+    public void The_zero_air_voids_line_is_drawn_where_the_solids_are_known_and_every_point_of_it_is_saturated()
+    {
+        var chart = Charts.Ternmarsh with { Saturation = [], AirVoids = [] };
+        Assert.Empty(SvgPicture.Of(chart with { SpecificGravity = null }, FigureSize.Default).OfClass("zero-air-voids"));
+
+        var picture = SvgPicture.Of(chart, FigureSize.Default);
+        var line = Assert.Single(picture.OfClass("zero-air-voids"));
+        var marks = picture.OfClass("specimen").ToList();
+        var places = line.Attribute("d")!.Value.Split(['M', 'L'], StringSplitOptions.RemoveEmptyEntries)
+            .Select(pair => pair.Split(' ').Select(number => double.Parse(number, System.Globalization.CultureInfo.InvariantCulture)).ToArray())
+            .ToList();
+        Assert.True(places.Count >= 4);
+        foreach (var place in places)
+        {
+            var water = WaterContent.FromPercent(Unscaled(marks, "cx", "data-x", place[0]));
+            var density = new Density(Unscaled(marks, "cy", "data-y", place[1]) * 1000);
+            var saturation = PhaseRelations.Saturation(water, PhaseRelations.VoidRatio(density, 2.68, new Density(998.2)), 2.68);
+            Assert.Equal(1, saturation, 1e-3);
+        }
+    }
+
+    [Theory]
+    [InlineData(239, 640)]
+    [InlineData(960, 2401)]
+    public void A_size_out_of_bounds_is_refused(int width, int height)
+    {
+        var error = Assert.Throws<ArgumentException>(() => CompactionFigure.Draw(Charts.Ternmarsh, new FigureSize(width, height)));
+        Assert.Equal($"Width and height must be from 240 to 2400 px, not {width} and {height}.", error.Message);
+    }
+
+    [Fact]
+    public void Numbers_that_cannot_be_drawn_are_refused_with_the_reason()
+    {
+        Assert.Null(CompactionFigure.Refusal(Charts.Full, FigureSize.Default));
+        Refused(Charts.Full with { Specimens = [new(double.NaN, 1.8, null, false)] }, "A specimen's water content must be a number between −1e9 and 1e9, not NaN.");
+        Refused(Charts.Full with { Curve = [new(12, double.PositiveInfinity)] }, "The curve's dry density must be a number between −1e9 and 1e9, not Infinity.");
+        Refused(Charts.Full with { NextSpecimen = 1e10 }, "The next specimen's water content must be a number between −1e9 and 1e9, not 10000000000.");
+        Refused(Charts.Ternmarsh with { Optimum = Charts.Ternmarsh.Optimum! with { WaterContentInterval = [13.6] } }, "An interval must have two ends.");
+        Refused(Charts.Full with { SpecificGravity = 0 }, "The specific gravity must be over 0, not 0.");
+        Refused(Charts.Full with { WaterDensity = -1 }, "The density of water must be over 0, not -1.");
+        Refused(Charts.Full with { Saturation = [90, 0] }, "A saturation must be over 0 and up to 100 %, not 0.");
+        Refused(Charts.Full with { AirVoids = [100] }, "Air voids must be from 0 to below 100 %, not 100.");
+
+        static void Refused(CompactionChart chart, string reason) => Assert.Equal(reason, CompactionFigure.Refusal(chart, FigureSize.Default));
+    }
+
+    /// <summary>The number at a place, by the scale that the marks show.</summary>
+    private static double Unscaled(IReadOnlyList<System.Xml.Linq.XElement> marks, string place, string data, double at)
+    {
+        var (low, high) = (marks.MinBy(mark => SvgPicture.Number(mark, place))!, marks.MaxBy(mark => SvgPicture.Number(mark, place))!);
+        var (start, end) = (SvgPicture.Number(low, place), SvgPicture.Number(high, place));
+        var (from, to) = (SvgPicture.Number(low, data), SvgPicture.Number(high, data));
+        return from + ((at - start) / (end - start) * (to - from));
+    }
+
+    /// <summary>Every place lies on the line through the extreme ones, within what two decimals can hold.</summary>
+    private static void AssertLinear(IReadOnlyList<(double Data, double Place)> pairs, bool rising)
+    {
+        if (pairs.Count == 0)
+        {
+            return;
+        }
+
+        var (low, high) = (pairs.MinBy(pair => pair.Data), pairs.MaxBy(pair => pair.Data));
+        foreach (var (data, place) in pairs)
+        {
+            var expected = high.Data > low.Data ? low.Place + ((data - low.Data) / (high.Data - low.Data) * (high.Place - low.Place)) : low.Place;
+            Assert.Equal(expected, place, 0.021);
+        }
+
+        Assert.True(rising ? high.Place >= low.Place : high.Place <= low.Place);
+    }
+}
