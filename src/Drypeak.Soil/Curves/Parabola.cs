@@ -42,7 +42,15 @@ internal static class Parabola
             fit.NoiseVariance * fit.UnitVariance([1, t, t * t]));
         var (lower, upper) = Fieller(fit);
         var optimum = Intervals.Symmetric(peak, Intervals.Student(fit.DegreesOfFreedom));
-        return optimum with { WaterContent = optimum.WaterContent with { Lower = lower, Upper = upper } };
+        // Points on the parabola itself leave an interval of no length, whose ends rounding could put on one side of the vertex.
+        return optimum with
+        {
+            WaterContent = optimum.WaterContent with
+            {
+                Lower = lower is { } low ? Math.Min(low, optimum.WaterContent.Value) : null,
+                Upper = upper is { } high ? Math.Max(high, optimum.WaterContent.Value) : null,
+            },
+        };
     }
 
     /// <summary>
