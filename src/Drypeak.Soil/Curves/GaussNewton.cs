@@ -60,11 +60,11 @@ internal static class GaussNewton
         where TModel : IResiduals, allows ref struct
     {
         var (count, width) = (model.Count, parameters.Length);
-        var (each, rows) = (count * (width + 1), count + width);
+        var (each, rows) = ((count * (width + 1)) + width, count + width);
         var size = (2 * each) + (rows * (width + 1)) + (width * (width + 2));
         Span<double> work = size <= MostOnStack ? stackalloc double[size] : new double[size];
-        var now = new Evaluation(work[..each], count);
-        var next = new Evaluation(work.Slice(each, each), count);
+        var now = new Evaluation(work[..each], count, width);
+        var next = new Evaluation(work.Slice(each, each), count, width);
         var matrix = work.Slice(2 * each, rows * width);
         var side = work.Slice((2 * each) + (rows * width), rows);
         var bend = work.Slice((2 * each) + (rows * (width + 1)), width * width);
@@ -155,11 +155,12 @@ internal static class GaussNewton
         return moves;
     }
 
-    /// <summary>Residuals and Jacobian at one place.</summary>
-    private ref struct Evaluation(Span<double> work, int count)
+    /// <summary>Residuals, Jacobian and the lengths of its columns at one place.</summary>
+    private ref struct Evaluation(Span<double> work, int count, int width)
     {
         private readonly Span<double> residuals = work[..count];
-        private readonly Span<double> jacobian = work[count..];
+        private readonly Span<double> jacobian = work.Slice(count, count * width);
+        private readonly Span<double> lengths = work[^width..];
 
         /// <summary>Sum of squared residuals.</summary>
         public double Sum { get; private set; }
@@ -175,8 +176,9 @@ internal static class GaussNewton
             Slope = 0;
             for (var j = 0; j < parameters.Length; j++)
             {
-                var (along, length) = (LeastSquares.Dot(Column(j), residuals), LeastSquares.Length(Column(j)));
-                Slope = along == 0 ? Slope : Math.Max(Slope, Math.Abs(along) / (length * Math.Sqrt(Sum)));
+                var along = LeastSquares.Dot(Column(j), residuals);
+                lengths[j] = LeastSquares.Length(Column(j));
+                Slope = along == 0 ? Slope : Math.Max(Slope, Math.Abs(along) / (lengths[j] * Math.Sqrt(Sum)));
             }
         }
 
@@ -199,7 +201,7 @@ internal static class GaussNewton
             bend.Clear();
             for (var j = 0; j < width; j++)
             {
-                var h = Difference * Math.Sqrt(Sum) / LeastSquares.Length(Column(j));
+                var h = Difference * Math.Sqrt(Sum) / lengths[j];
                 var column = bend.Slice(j * width, width);
                 place[j] = parameters[j] + h;
                 beside.At(model, place);
@@ -216,7 +218,7 @@ internal static class GaussNewton
         /// <summary>Newton's equations: all second derivatives, and the gradient to be cancelled.</summary>
         public readonly void WriteNewtonSystem(ReadOnlySpan<double> bend, Span<double> matrix, Span<double> side)
         {
-            var width = jacobian.Length / count;
+            var width = lengths.Length;
             bend.CopyTo(matrix);
             AddProducts(1, width, matrix);
             side.Clear();
@@ -254,13 +256,12 @@ internal static class GaussNewton
                 side[i] = -residuals[i];
             }
 
-            var width = jacobian.Length / count;
-            for (var j = 0; j < width; j++)
+            for (var j = 0; j < lengths.Length; j++)
             {
                 var column = Column(j);
                 var target = matrix.Slice(j * side.Length, side.Length);
                 column.CopyTo(target);
-                target[count + j] = Math.Sqrt(damping) * LeastSquares.Length(column);
+                target[count + j] = Math.Sqrt(damping) * lengths[j];
             }
         }
     }

@@ -53,10 +53,10 @@ internal static class NodePredictions
                 continue;
             }
 
-            var weight = Math.Exp(node.LogWeight - greatest) / Math.Sqrt(node.Precision);
+            var weight = Math.Exp(node.LogWeight - greatest) * Math.Sqrt(node.Variance);
             total += weight;
             first += weight * node.Offset;
-            second += weight * ((1 / node.Precision) + (node.Offset * node.Offset));
+            second += weight * (node.Variance + (node.Offset * node.Offset));
         }
 
         var mean = first / total;
@@ -64,10 +64,10 @@ internal static class NodePredictions
     }
 
     /// <summary>A node's prediction of a point from the others.</summary>
-    /// <param name="LogWeight">ln of the node's weight without the point, less −½ ln H.</param>
+    /// <param name="LogWeight">ln of the node's weight without the point, less ½ ln of the variance.</param>
     /// <param name="Offset">m − y_i, Mg/m³.</param>
-    /// <param name="Precision">H.</param>
-    private readonly record struct WithoutPoint(double LogWeight, double Offset, double Precision)
+    /// <param name="Variance">1/H.</param>
+    private readonly record struct WithoutPoint(double LogWeight, double Offset, double Variance)
     {
         public static WithoutPoint Of(in PeakNode node, TestedPoints points, int i)
         {
@@ -76,11 +76,8 @@ internal static class NodePredictions
             var misfit = (points.Densities[i] - node.Level + (leg.Scale * drop)) * weight;
             var dropWeight = drop * weight;
             var onLevel = (1 - (leg.ScaleVariance * leg.Drops * drop)) * weight;
-            var precision = weight - (leg.ScaleVariance * dropWeight * dropWeight) - (onLevel * onLevel * node.LevelVariance);
-            return new(
-                node.LogWeight + node.LogPrior + (0.5 * misfit * misfit / precision),
-                -misfit / precision,
-                precision);
+            var variance = 1 / (weight - (leg.ScaleVariance * dropWeight * dropWeight) - (onLevel * onLevel * node.LevelVariance));
+            return new(node.LogWeight + node.LogPrior + (0.5 * misfit * misfit * variance), -misfit * variance, variance);
         }
     }
 }

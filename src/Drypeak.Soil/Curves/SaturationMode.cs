@@ -14,13 +14,8 @@ internal readonly record struct SaturationPrior(double OfSaturation, double OfWe
     private static readonly double LogShape = Math.Log(6);
 
     /// <summary>Centres of (logit Sm, ln wm, ln n, ln p).</summary>
-    public static void Centers(double greatestWaterContent, Span<double> centers)
-    {
-        centers[0] = LogOddsOfSaturation;
-        centers[1] = Math.Log(1.05 * greatestWaterContent);
-        centers[2] = LogShape;
-        centers[3] = Math.Log(0.4 * greatestWaterContent);
-    }
+    public static double[] Centers(double greatestWaterContent) =>
+        [LogOddsOfSaturation, Math.Log(1.05 * greatestWaterContent), LogShape, Math.Log(0.4 * greatestWaterContent)];
 
     /// <summary>Deviation of a parameter, in the order of the curve's parameters.</summary>
     public double Deviation(int parameter) => parameter switch
@@ -67,7 +62,7 @@ internal sealed class SaturationMode
     private SaturationMode(TestedPoints points, double specificGravity, in SaturationPrior prior, ReadOnlySpan<double> start, double rightAngle)
     {
         start.CopyTo(parameters);
-        var residuals = new Residuals(points, specificGravity, prior);
+        var residuals = new Residuals(points, specificGravity, prior, SaturationPrior.Centers(points.Wettest));
         SumOfSquares = GaussNewton.Minimize(residuals, parameters, LongestStep, MostSteps, rightAngle).SumOfSquares;
         LogDeterminant = residuals.InvertInformation(parameters, inverse);
         Curve = new LiSegoCurve(parameters, specificGravity, points.WaterDensity);
@@ -90,9 +85,7 @@ internal sealed class SaturationMode
     /// <summary>Fits the points from the priors' centers.</summary>
     public static SaturationMode Of(TestedPoints points, double specificGravity, in SaturationPrior prior)
     {
-        Span<double> centers = stackalloc double[Parameters];
-        SaturationPrior.Centers(points.Wettest, centers);
-        var mode = new SaturationMode(points, specificGravity, prior, centers, RightAngle);
+        var mode = new SaturationMode(points, specificGravity, prior, SaturationPrior.Centers(points.Wettest), RightAngle);
         mode.Peak = mode.FindPeak(points);
         return mode;
     }
@@ -155,7 +148,7 @@ internal sealed class SaturationMode
     }
 
     /// <summary>Misfits of the points in units of the noise, then of the parameters in units of their priors' deviations.</summary>
-    private readonly struct Residuals(TestedPoints points, double specificGravity, SaturationPrior prior) : IResiduals
+    private readonly struct Residuals(TestedPoints points, double specificGravity, SaturationPrior prior, double[] centers) : IResiduals
     {
         public int Count => points.Count + Parameters;
 
@@ -174,10 +167,9 @@ internal sealed class SaturationMode
                 }
             }
 
-            SaturationPrior.Centers(points.Wettest, gradient);
             for (var j = 0; j < Parameters; j++)
             {
-                residuals[count + j] = (parameters[j] - gradient[j]) / prior.Deviation(j);
+                residuals[count + j] = (parameters[j] - centers[j]) / prior.Deviation(j);
                 jacobian[(j * Count) + count + j] = 1 / prior.Deviation(j);
             }
         }

@@ -12,10 +12,7 @@ internal static class SpecimenPlan
     /// <summary>Water contents are planned in steps of 0.5 %.</summary>
     private const double Step = 0.005;
 
-    /// <summary>How far beyond the tested range a specimen is looked for.</summary>
-    private const double Reach = 0.04;
-
-    /// <summary>The usual distance between specimens, used to go beyond an end. Common practice, no source.</summary>
+    /// <summary>The usual distance between specimens, and how far beyond the tested range one is looked for. Common practice, no source.</summary>
     private const double UsualSpacing = 0.02;
 
     /// <summary>On the side of the peak that lacks one, a specimen nearer to it than this could end up on the other.</summary>
@@ -85,8 +82,8 @@ internal static class SpecimenPlan
     {
         Span<int> counted = stackalloc int[nodes.Length];
         counted = Counted(nodes, counted);
-        var first = Math.Max(0, Math.Ceiling((points.Driest - Reach) / Step));
-        var last = Math.Floor((points.Wettest + Reach) / Step);
+        var first = Math.Max(0, Math.Ceiling((points.Driest - UsualSpacing) / Step));
+        var last = Math.Floor((points.Wettest + UsualSpacing) / Step);
         var stride = 1 + Math.Floor((last - first) / MostCandidates);
         var (best, least, isWanted) = (double.NaN, double.PositiveInfinity, false);
         for (var k = first; k <= last; k += stride)
