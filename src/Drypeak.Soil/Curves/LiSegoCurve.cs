@@ -15,8 +15,8 @@ internal readonly struct LiSegoCurve : ICurve
     /// <summary>logit Sm, ln wm, ln n, ln p.</summary>
     public const int Parameters = 4;
 
-    /// <summary>At w = 0 the saturation is 0 and the density its limit, which this water content gives to all digits that matter.</summary>
-    private const double LeastWaterContent = 1e-6;
+    /// <summary>At w = 0 the saturation is 0 and the density its limit. This water content (0.001 %) gives it, without the digits that 1 − F would lose nearer to 0.</summary>
+    private const double LeastWaterContent = 1e-5;
 
     /// <summary>Nearer to wm than this, relative, the logarithm of u would run away.</summary>
     private const double LeastDistance = 1e-12;

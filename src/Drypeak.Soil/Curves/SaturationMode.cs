@@ -57,9 +57,9 @@ internal sealed class SaturationMode
     private const double LongestStep = 1;
 
     /// <summary>Where the gradient counts as vanished, for a fit to all digits and for a prediction to a hundredth of the noise.</summary>
-    private const double RightAngle = 1e-10, NearRightAngle = 1e-4;
+    private const double RightAngle = 1e-12, NearRightAngle = 1e-4;
 
-    private const int MostSteps = 250;
+    private const int MostSteps = 1000;
 
     private readonly double[] parameters = new double[Parameters];
     private readonly double[] inverse = new double[Parameters * Parameters];

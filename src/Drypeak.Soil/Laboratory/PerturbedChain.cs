@@ -24,10 +24,16 @@ internal sealed class PerturbedChain
             var byMass = specimen.MoldVolume is { };
             var weighedInMold = byMass && measured.MoldAndWetSoil is { };
             (int? Mass, int? Volume) mold = (null, null);
-            if (byMass && (measured.Mold ?? test.Mold) is { } itsMold && !molds.TryGetValue(itsMold, out mold))
+            if (byMass && (measured.Mold ?? test.Mold) is { } itsMold)
             {
-                mold = (weighedInMold ? Input("mass", u.Mass?.Kilograms) : null, Input("volume", u.Volume?.CubicMeters));
-                molds.Add(itsMold, mold);
+                if (!molds.TryGetValue(itsMold, out mold))
+                {
+                    mold.Volume = Input("volume", u.Volume?.CubicMeters);
+                }
+
+                // The mold's mass comes in with the first specimen that was weighed in it, which need not be the driest.
+                mold.Mass ??= weighedInMold ? Input("mass", u.Mass?.Kilograms) : null;
+                molds[itsMold] = mold;
             }
 
             _specimens.Add(new Perturbed(
@@ -71,7 +77,7 @@ internal sealed class PerturbedChain
                 w += (perturbed.WaterContent.Fraction - item.Tins[t].WaterContent.Fraction) / item.Tins.Count;
             }
 
-            w = Math.Max(0, w + Error(item.WaterError, u.WaterContent?.Fraction));
+            w = Math.Clamp(w + Error(item.WaterError, u.WaterContent?.Fraction), 0, SpecimenReduction.GreatestWaterContent);
             var dryDensity = item.Specimen.DryDensity.KilogramsPerCubicMeter;
             if (!item.DryDensityGiven)
             {
@@ -86,7 +92,7 @@ internal sealed class PerturbedChain
             }
 
             dryDensity += Error(item.DensityError, u.DryDensity?.KilogramsPerCubicMeter);
-            points[i] = new CompactionPoint(w, Math.Max(dryDensity, 1));
+            points[i] = new CompactionPoint(w, Math.Clamp(dryDensity, SpecimenReduction.LeastDryDensity, SpecimenReduction.GreatestDryDensity));
         }
 
         var gravity = _test.SpecificGravity is { } gs ? Math.Max(gs.Value + Error(_specificGravity, u.SpecificGravity), 0.5) : (double?)null;

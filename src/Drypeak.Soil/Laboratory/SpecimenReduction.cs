@@ -15,6 +15,15 @@ public static class SpecimenReduction
     /// <summary>Water contents given twice may differ by this, as a fraction (0.1 percentage points).</summary>
     public const double WaterContentTolerance = 0.001;
 
+    /// <summary>The greatest water content that is taken, as a fraction (1000 %), however it was found.</summary>
+    public const double GreatestWaterContent = 10;
+
+    /// <summary>The least dry density that is taken, kg/m³: below a soil's by a factor of a million (m³ for cm³), which a finding can still explain.</summary>
+    public const double LeastDryDensity = 1e-3;
+
+    /// <summary>The greatest dry density that is taken, kg/m³: above a soil's by a factor of a million.</summary>
+    public const double GreatestDryDensity = 1e10;
+
     /// <summary>Room for the arithmetic at an inclusive limit.</summary>
     private const double Arithmetic = 1e-9;
 
@@ -47,6 +56,8 @@ public static class SpecimenReduction
                 faults.Add(new Fault(place + "/dryDensity", "contradiction",
                     $"The dry density, {ReaderText.Of(dryGiven, units.Density)}, is greater than the wet density, {ReaderText.Of(wet.Value, units.Density)}. Correct one of them."));
             }
+
+            RefuseBeyondRange(givenWater.Value, place + "/dryDensity", faults);
         }
 
         if (faults.Count > before)
@@ -73,6 +84,13 @@ public static class SpecimenReduction
         if (dry is not { } dryDensity)
         {
             faults.Add(new Fault(place, "not-enough-data", Missing(measured, mold, wetMass, volume)));
+            return null;
+        }
+
+        if (dryDensity.KilogramsPerCubicMeter is < LeastDryDensity or > GreatestDryDensity)
+        {
+            faults.Add(new Fault(place, "out-of-range",
+                $"The dry density comes to {ReaderText.Significant(dryDensity.In(units.Density))} {units.Density.Symbol()}, millions of times from any soil's. Check mass and volume and their units."));
             return null;
         }
 
@@ -139,6 +157,7 @@ public static class SpecimenReduction
                 continue;
             }
 
+            RefuseBeyondRange(other, place + member, faults);
             if (first is not { } taken)
             {
                 first = (other, name);
@@ -151,6 +170,15 @@ public static class SpecimenReduction
         }
 
         return first?.Water;
+    }
+
+    private static void RefuseBeyondRange(WaterContent w, string place, ICollection<Fault> faults)
+    {
+        if (w.Fraction > GreatestWaterContent * (1 + Arithmetic))
+        {
+            faults.Add(new Fault(place, "out-of-range",
+                $"The water content comes to {ReaderText.Significant(w.Percent)} %, where {ReaderText.Significant(GreatestWaterContent * 100)} % is the most. Check the values and their units."));
+        }
     }
 
     private static Mass? WetMassOf(SpecimenMeasurement measured, Mold? mold, string place, UnitSet units, ICollection<Fault> faults)

@@ -24,9 +24,9 @@ internal static class AnyTest
     private static readonly Gen<double> WildPositive = Gen.Double[Math.Log(1e-12), Math.Log(4.5e8)].Select(Math.Exp);
     private static readonly Gen<double> UsualMass = Gen.Double[0.1, 9];
     private static readonly Gen<double> UsualVolume = Gen.Double[0.0008, 0.0024];
-    private static readonly Gen<double> AnyMass = Gen.Frequency((3, UsualMass), (1, WildPositive));
-    private static readonly Gen<double> AnyVolume = Gen.Frequency((3, UsualVolume), (1, WildPositive));
-    private static readonly Gen<double> AnyDensity = Gen.Frequency((3, Gen.Double[1200, 2400]), (1, WildPositive.Select(value => value * 1000)));
+    private static readonly Gen<double> AnyMass = Gen.Frequency((9, UsualMass), (1, WildPositive));
+    private static readonly Gen<double> AnyVolume = Gen.Frequency((9, UsualVolume), (1, WildPositive));
+    private static readonly Gen<double> AnyDensity = Gen.Frequency((6, Gen.Double[1200, 2400]), (1, WildPositive.Select(value => value * 1000)));
     private static readonly Gen<double> AnyWater = Gen.Frequency((4, Gen.Double[0.01, 0.4]), (1, Gen.Double[0, 10]), (1, Gen.OneOf(Gen.Const(0.0), Gen.Const(0.1))));
     private static readonly Gen<double> AnyUncertainty = Gen.OneOf(Gen.Const(0.0), Gen.Double[0, 0.01], WildPositive);
 

@@ -121,6 +121,33 @@ public class SpecimenReductionTests
         Assert.Contains(words, fault.Message, StringComparison.Ordinal);
     }
 
+    public static TheoryData<string, SpecimenMeasurement, string> BeyondRange => new()
+    {
+        { "tins", Nothing with { WetMass = Grams(1980), Tins = [Tin(20, 1131, 120)] }, "/specimens/0/tins" },
+        { "number on wet mass", Nothing with { WetMass = Grams(1980), WaterContentFromWetBasis = WaterContent.FromPercentOfWetMass(91) }, "/specimens/0/wetBasis" },
+        { "wet and dry density", Nothing with { WetDensity = new Density(1980), DryDensity = new Density(179) }, "/specimens/0/dryDensity" },
+        { "dry density, millions of times a soil's", Water with { WetMass = new Mass(1.2e7) }, "/specimens/0" },
+        { "dry density, a millionth of a soil's", Water with { WetMass = new Mass(1e-9) }, "/specimens/0" },
+    };
+
+    [Theory]
+    [MemberData(nameof(BeyondRange))]
+    public void A_value_that_no_slip_of_units_explains_is_refused_at_its_place(string what, SpecimenMeasurement measured, string place)
+    {
+        Assert.NotEmpty(what);
+        var fault = Assert.Single(FaultsOf(measured, Liter));
+        Assert.Equal((place, "out-of-range"), (fault.Place, fault.Code));
+        Assert.Matches(@"\d", fault.Message);
+    }
+
+    [Fact]
+    public void A_slip_of_units_by_a_million_is_left_to_the_findings()
+    {
+        var cubicMeters = Liter with { Volume = new Volume(1000) };
+        Assert.Equal(1.8e-3, Reduce(Water with { WetMass = Grams(1980) }, cubicMeters).DryDensity.KilogramsPerCubicMeter, 1e-12);
+        Assert.Equal(10, Reduce(Nothing with { WetMass = Grams(1980), Tins = [Tin(20, 1120, 120)] }, Liter).WaterContent.Fraction, 1e-12);
+    }
+
     [Fact]
     public void A_full_mold_no_heavier_than_the_empty_one_is_a_contradiction_with_both_masses()
     {

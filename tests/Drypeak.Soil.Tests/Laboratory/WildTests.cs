@@ -24,7 +24,7 @@ public class WildTests
             Assert.All(NumbersWithin.Of(result), number => Assert.True(double.IsFinite(number.Value), number.Path));
             Assert.All(NumbersWithin.Of(Working.Of(test, result)), number => Assert.True(double.IsFinite(number.Value), number.Path));
             Assert.DoesNotContain(result.Findings, finding => finding.Message.Contains("NaN", StringComparison.Ordinal) || finding.Message.Contains('∞') || finding.Message.Contains("Infinity", StringComparison.Ordinal));
-        }, iter: 300);
+        }, iter: 150, print: Points);
 
     [Fact]
     public void The_walk_finds_every_number_of_a_result()
@@ -34,4 +34,10 @@ public class WildTests
         Assert.Contains(".Curve.Chosen.Optimum.WaterContent.Upper", paths);
         Assert.Contains(".Curve.Alternatives[0].Curve[3].DryDensity", paths);
     }
+
+    /// <summary>What a failing test comes down to.</summary>
+    private static string Points(MoistureDensityTest test) =>
+        $"Gs {test.SpecificGravity?.Value:R}, water {test.WaterDensity.KilogramsPerCubicMeter:R}, {test.Model?.ToString() ?? "auto"}: "
+        + string.Join("; ", MoistureDensity.Reduce(test, []).Select(specimen =>
+            specimen is null ? "none" : $"{specimen.WaterContent.Fraction:R}, {specimen.DryDensity.KilogramsPerCubicMeter:R}{(specimen.SetAside is null ? "" : " aside")}"));
 }

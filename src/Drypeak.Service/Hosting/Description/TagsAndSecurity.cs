@@ -19,7 +19,7 @@ internal sealed class TagsAndSecurity : IDocumentFilter
     {
         foreach (var tag in swaggerDoc.Tags ?? new HashSet<OpenApiTag>())
         {
-            tag.Description = Descriptions[tag.Name!];
+            tag.Description = Descriptions.GetValueOrDefault(tag.Name ?? "");
         }
 
         swaggerDoc.Security = [new OpenApiSecurityRequirement()];

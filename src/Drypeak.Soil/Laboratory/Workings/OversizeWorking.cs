@@ -12,11 +12,11 @@ public static class OversizeWorking
     /// <param name="water">Density of water.</param>
     /// <param name="toTotal">From the fines to the total; else back.</param>
     /// <param name="unit">The unit of the numbers.</param>
-    /// <param name="densityName">What the density is called.</param>
-    /// <param name="waterName">What the water content is called.</param>
+    /// <param name="densityName">What the density is called; by itself, that of the material it is for.</param>
+    /// <param name="waterName">What the water content is called; likewise.</param>
     public static IReadOnlyList<WorkingStep> Of(
         DensityAndWater given, Oversize oversize, Density water, bool toTotal, DensityUnit unit,
-        string densityName = "dry density", string waterName = "water content")
+        string? densityName = null, string? waterName = null)
     {
         var gravity = oversize.SpecificGravity!.Value;
         var (coarse, fine) = (Number(oversize.Fraction * 100), $"(100 - {Number(oversize.Fraction * 100)})");
@@ -27,8 +27,8 @@ public static class OversizeWorking
             var total = OversizeCorrection.ToTotal(given, oversize.Fraction, gravity, oversize.WaterContent, water);
             return
             [
-                Formulas.CorrectedDensity.Step(densityName + " of the total material", $"100/({fine}/{density} + {stone})", total.DryDensity.In(unit), unit.Symbol()),
-                Formulas.CorrectedWater.Step(waterName + " of the total material", $"({fine}*{w} + {coarse}*{stoneWater})/100", total.WaterContent.Percent, "%"),
+                Formulas.CorrectedDensity.Step(densityName ?? "dry density of the total material", $"100/({fine}/{density} + {stone})", total.DryDensity.In(unit), unit.Symbol()),
+                Formulas.CorrectedWater.Step(waterName ?? "water content of the total material", $"({fine}*{w} + {coarse}*{stoneWater})/100", total.WaterContent.Percent, "%"),
             ];
         }
 
@@ -36,8 +36,8 @@ public static class OversizeWorking
             ?? throw new ArgumentException("The oversize leaves nothing for the fines.", nameof(oversize));
         return
         [
-            Formulas.DensityOfFines.Step(densityName + " of the fines", $"{fine}/(100/{density} - {stone})", fines.DryDensity.In(unit), unit.Symbol()),
-            Formulas.WaterOfFines.Step(waterName + " of the fines", $"(100*{w} - {coarse}*{stoneWater})/{fine}", fines.WaterContent.Percent, "%"),
+            Formulas.DensityOfFines.Step(densityName ?? "dry density of the fines", $"{fine}/(100/{density} - {stone})", fines.DryDensity.In(unit), unit.Symbol()),
+            Formulas.WaterOfFines.Step(waterName ?? "water content of the fines", $"(100*{w} - {coarse}*{stoneWater})/{fine}", fines.WaterContent.Percent, "%"),
         ];
     }
 }

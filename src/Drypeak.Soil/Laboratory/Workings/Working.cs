@@ -115,7 +115,7 @@ public static class Working
                 ? (adopted.WaterContent, adopted.MaximumDryDensity)
                 : (new WaterContent(result.Optimum!.WaterContent.Value), new Density(result.Optimum.MaximumDryDensity.Value));
             _steps.AddRange(OversizeWorking.Of(
-                new DensityAndWater(density, w), oversize, test.WaterDensity, toTotal: true, DensityUnit, "maximum dry density", "optimum water content"));
+                new DensityAndWater(density, w), oversize, test.WaterDensity, toTotal: true, DensityUnit, "maximum dry density corrected for oversize", "optimum water content corrected for oversize"));
         }
 
         private void WaterContent(SpecimenMeasurement measured, Specimen specimen, string of)
