@@ -39,7 +39,7 @@ public sealed class ChartLinkTests(RunningService service)
     [Fact]
     public async Task What_cannot_be_drawn_is_answered_without_links_and_refused_as_a_picture()
     {
-        var body = Body.With(("/units/density", "\"kg/m3\""), ("/specimens", """[{"waterContent":10,"wetMass":1e9,"mold":{"volume":1e-9}}]"""));
+        var body = Body.With(("/units/density", "\"kg/m3\""), ("/specimens", """[{"waterContent":10,"wetMass":5500,"mold":{"volume":1e-3}}]"""));
         var answer = await service.AnswerAsync(body);
         Assert.Equal(System.Text.Json.JsonValueKind.Null, answer.At("/links/svg").ValueKind);
         Assert.Contains("cannot be drawn", answer.Finding("no-chart-address").Text("/message"), StringComparison.Ordinal);
