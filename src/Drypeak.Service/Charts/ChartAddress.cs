@@ -2,6 +2,7 @@ using System.Buffers;
 using System.Buffers.Text;
 using System.IO.Compression;
 using System.Text.Json;
+using System.Text.Json.Serialization.Metadata;
 using Drypeak.Figures;
 using Drypeak.Service.Contracts;
 using Drypeak.Service.Hosting;
@@ -20,28 +21,50 @@ internal static class ChartAddress
     /// <summary>Room in the address for its path and the picture's size.</summary>
     private const int RoomForTheRest = 120;
 
+    /// <summary>
+    /// As strict as requests, where what must be given is never null, but for the intervals: a peak without one has null in its place.
+    /// </summary>
+    private static readonly JsonTypeInfo<CompactionChart> Json = new JsonSerializerOptions(ServiceJson.Options)
+    {
+        TypeInfoResolver = ServiceJson.Options.TypeInfoResolver!.WithAddedModifier(type =>
+        {
+            foreach (var interval in type.Properties.Where(member => type.Type == typeof(ChartOptimum) && member.PropertyType == typeof(double[])))
+            {
+                interval.IsSetNullable = true;
+            }
+        }),
+    }.Contract<CompactionChart>();
+
     private const int BrotliQuality = 5;
     private const int BrotliWindow = 18;
 
-    /// <summary>Said where a chart is too large for an address.</summary>
-    public static FindingKind TooLongForALink { get; } = new("no-chart-address", Severity.Note,
-        "The chart holds more than an address can carry.",
-        "An address that a server or a browser cuts short would open no picture.",
-        "Post the request with Accept: image/svg+xml, image/png or application/pdf to get the picture.",
+    /// <summary>Said where no address is given.</summary>
+    public static FindingKind NoAddress { get; } = new("no-chart-address", Severity.Note,
+        "There is no address that would give the chart.",
+        "An address that is cut short by a server or a browser, or that is refused, would open no picture.",
+        "Where the chart is large, post the request with Accept: image/svg+xml, image/png or application/pdf. Where its numbers cannot be drawn, check them and their units.",
         "RFC 9110 section 4.1: request lines of 8000 bytes are the most to count on");
 
-    /// <summary>The addresses of a chart's pictures; none where it is too large.</summary>
-    public static LinksContract LinksFor(string job, CompactionChart chart, int addressBytes)
+    /// <summary>The addresses of a chart's pictures; none where the service would not answer them.</summary>
+    /// <param name="job">The chart's job.</param>
+    /// <param name="chart">The chart.</param>
+    /// <param name="limits">Bounds of an address and of what it may hold.</param>
+    /// <param name="whyNot">Why there are none, or null.</param>
+    public static LinksContract LinksFor(string job, CompactionChart chart, Limits limits, out Finding? whyNot)
     {
         var data = Encode(chart);
-        string? Link(string suffix) => data.Length + RoomForTheRest <= addressBytes ? $"/v1/charts/{job}.{suffix}?d={data}" : null;
+        whyNot = new ChartRules(limits).Check(chart) is [var fault, ..] ? NoAddress.At("", $"The chart cannot be drawn, so no links are given. {fault.Message}")
+            : data.Length + RoomForTheRest > limits.AddressBytes ? NoAddress.At("", "The chart holds more than an address can carry, so no links are given. Post the request with Accept: image/svg+xml, image/png or application/pdf to get the picture.")
+            : null;
+        var given = whyNot is null;
+        string? Link(string suffix) => given ? $"/v1/charts/{job}.{suffix}?d={data}" : null;
         return new LinksContract { Svg = Link("svg"), Png = Link("png"), Pdf = Link("pdf") };
     }
 
     /// <summary>The chart as the text of an address.</summary>
     public static string Encode(CompactionChart chart)
     {
-        var json = JsonSerializer.SerializeToUtf8Bytes(chart, ServiceJson.Of<CompactionChart>());
+        var json = JsonSerializer.SerializeToUtf8Bytes(chart, Json);
         var packed = new byte[BrotliEncoder.GetMaxCompressedLength(json.Length)];
         return BrotliEncoder.TryCompress(json, packed, out var length, BrotliQuality, BrotliWindow)
             ? Base64Url.EncodeToString(packed.AsSpan(0, length))
@@ -77,7 +100,7 @@ internal static class ChartAddress
 
         try
         {
-            chart = JsonSerializer.Deserialize(inflated.AsSpan(0, length), ServiceJson.Of<CompactionChart>());
+            chart = JsonSerializer.Deserialize(inflated.AsSpan(0, length), Json);
         }
         catch (JsonException)
         {

@@ -9,7 +9,7 @@ internal static class FindingKindsEndpoint
 {
     private static readonly IReadOnlyList<FindingKindAnswer> Kinds =
     [
-        .. FindingKinds.All.Append(ChartAddress.TooLongForALink).Select(kind => new FindingKindAnswer(
+        .. FindingKinds.All.Append(ChartAddress.NoAddress).Select(kind => new FindingKindAnswer(
             kind.Code, kind.Severity.ToString().ToLowerInvariant(), kind.Meaning, kind.Why, kind.Remedy, kind.Basis)),
     ];
 

@@ -1,3 +1,4 @@
+using Drypeak.Figures;
 using Drypeak.Service.Charts;
 using Drypeak.Service.Hosting;
 
@@ -47,9 +48,14 @@ internal static class MoistureDensityEndpoint
 
         var outcome = job.Compute(request.Value);
         context.Response.Headers.Vary = "Accept";
-        return options is { } picture
-            ? Results.Bytes(picture.Format.Draw(outcome.Chart, picture.Options), mediaType)
-            : Results.Json(outcome.Answer, ServiceJson.Of<MoistureDensityAnswer>());
+        if (options is not { } picture)
+        {
+            return Results.Json(outcome.Answer, ServiceJson.Of<MoistureDensityAnswer>());
+        }
+
+        return CompactionFigure.Refusal(outcome.Chart, picture.Options.Size) is { } refusal
+            ? Problems.InvalidValues([new Fault("", "not-drawable", refusal + " Check the values and their units; with Accept: application/json they are answered.")])
+            : Results.Bytes(picture.Format.Draw(outcome.Chart, picture.Options), mediaType);
     }
 
     /// <summary>The picture asked for, or null where the answer is JSON; then the query has no parameters.</summary>

@@ -31,13 +31,8 @@ internal sealed class MoistureDensityJob(Limits limits)
         var (test, result) = Analyze(request);
         var specimens = result.Specimens;
         var chart = MoistureDensityChart.Of(request, test, result);
-        var links = ChartAddress.LinksFor(ChartAddress.MoistureDensity, chart, limits.AddressBytes);
-        var findings = result.Findings.Select(FindingContract.Of);
-        if (links is { Svg: null })
-        {
-            findings = findings.Append(FindingContract.Of(ChartAddress.TooLongForALink.At("", "The chart holds more than an address can carry, so no links are given. Post the request with Accept: image/svg+xml, image/png or application/pdf to get the picture.")));
-        }
-
+        var links = ChartAddress.LinksFor(ChartAddress.MoistureDensity, chart, limits, out var whyNoLink);
+        var findings = (whyNoLink is null ? result.Findings : result.Findings.Append(whyNoLink)).Select(FindingContract.Of);
         return new MoistureDensityOutcome(
             new MoistureDensityAnswer
             {

@@ -157,7 +157,7 @@ public sealed class ChartAddressTests(RunningService service)
                     ["waterContentInterval"] = new JsonArray(w), ["maximumDryDensityInterval"] = new JsonArray(density, w, w),
                 },
                 "curve" => new JsonArray(new JsonObject { ["waterContent"] = w, ["dryDensity"] = density }, new JsonObject { ["waterContent"] = density, ["dryDensity"] = w }),
-                "specimens" => new JsonArray(new JsonObject { ["waterContent"] = w, ["dryDensity"] = density, ["label"] = null, ["setAside"] = true }),
+                "specimens" => new JsonArray(new JsonObject { ["waterContent"] = w, ["dryDensity"] = density, ["label"] = "", ["setAside"] = true }),
                 _ => w,
             };
             foreach (var address in new[] { ChartLink.Svg, ChartLink.Png })

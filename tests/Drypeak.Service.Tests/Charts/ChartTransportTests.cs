@@ -5,7 +5,7 @@ using Xunit;
 namespace Drypeak.Service.Tests.Charts;
 
 /// <summary>Charts over HTTP: links, media types, caches, sizes.</summary>
-public sealed class ChartTransportTests(RunningService service)
+public sealed class ChartTransportTests(RunningService service, SecondInstance another)
 {
     [Theory]
     [InlineData("svg", "image/svg+xml", "<svg ")]
@@ -33,7 +33,6 @@ public sealed class ChartTransportTests(RunningService service)
     [InlineData("pdf")]
     public async Task Two_instances_draw_the_same_bytes(string format)
     {
-        using var another = RunningService.Another();
         var link = await ChartLink.OfSoundTest(another, format);
         Assert.Equal(link, await ChartLink.OfSoundTest(service, format));
         Assert.Equal(await service.BytesAsync(link), await another.BytesAsync(link));

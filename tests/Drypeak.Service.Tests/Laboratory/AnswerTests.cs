@@ -5,7 +5,7 @@ using Xunit;
 
 namespace Drypeak.Service.Tests.Laboratory;
 
-public sealed class AnswerTests(RunningService service)
+public sealed class AnswerTests(RunningService service, SecondInstance another)
 {
     [Fact]
     public async Task The_services_own_example_is_answered_without_an_error_or_a_warning()
@@ -49,7 +49,6 @@ public sealed class AnswerTests(RunningService service)
     public async Task The_same_request_has_the_same_bytes_from_any_instance()
     {
         var body = Body.With(("/uncertainty", """{"mass":0.5,"volume":1.5}"""), ("/trace", "true"), ("/lines", """{"airVoids":[5]}"""));
-        using var another = RunningService.Another();
         using var first = await service.PostAsync(body);
         using var again = await service.PostAsync(body);
         using var elsewhere = await another.PostAsync(body);

@@ -9,11 +9,12 @@ using Serilog;
 using Xunit;
 
 [assembly: AssemblyFixture(typeof(RunningService))]
+[assembly: AssemblyFixture(typeof(SecondInstance))]
 
 namespace Drypeak.Service.Tests.Laboratory;
 
 /// <summary>The service on a port of its own, as a client meets it. One for all the tests: it keeps nothing.</summary>
-public sealed class RunningService : IDisposable
+public class RunningService : IDisposable
 {
     public const string MoistureDensity = "/v1/moisture-density";
 
@@ -30,9 +31,6 @@ public sealed class RunningService : IDisposable
     }
 
     public HttpClient Client { get; }
-
-    /// <summary>Another instance that serves the same program.</summary>
-    public static RunningService Another() => new();
 
     /// <summary>Posts a laboratory test and gives whatever is answered.</summary>
     public async Task<HttpResponseMessage> PostAsync(string body, string? accept = null, string address = MoistureDensity)
@@ -78,6 +76,7 @@ public sealed class RunningService : IDisposable
     {
         Client.Dispose();
         _service.Dispose();
+        GC.SuppressFinalize(this);
     }
 
     /// <summary>As in production, but for the log.</summary>
@@ -87,3 +86,6 @@ public sealed class RunningService : IDisposable
             builder.UseEnvironment("Production").ConfigureServices(services => services.AddSerilog(log => log.MinimumLevel.Fatal()));
     }
 }
+
+/// <summary>Another instance of the same program, for what must not depend on the instance. Started before the tests, since two starts at once disturb each other.</summary>
+public sealed class SecondInstance : RunningService;
