@@ -21,19 +21,7 @@ internal static class ChartAddress
     /// <summary>Room in the address for its path and the picture's size.</summary>
     private const int RoomForTheRest = 120;
 
-    /// <summary>
-    /// As strict as requests, where what must be given is never null, but for the intervals: a peak without one has null in its place.
-    /// </summary>
-    private static readonly JsonTypeInfo<CompactionChart> Json = new JsonSerializerOptions(ServiceJson.Options)
-    {
-        TypeInfoResolver = ServiceJson.Options.TypeInfoResolver!.WithAddedModifier(type =>
-        {
-            foreach (var interval in type.Properties.Where(member => type.Type == typeof(ChartOptimum) && member.PropertyType == typeof(double[])))
-            {
-                interval.IsSetNullable = true;
-            }
-        }),
-    }.Contract<CompactionChart>();
+    private static readonly JsonTypeInfo<CompactionChart> Json = ServiceJson.Of<CompactionChart>();
 
     private const int BrotliQuality = 5;
     private const int BrotliWindow = 18;

@@ -1,8 +1,7 @@
 using System.Text;
-using System.Text.Json;
+using Drypeak.Figures;
 using Drypeak.Service.Charts;
-using Drypeak.Service.Hosting;
-using Drypeak.Service.Laboratory;
+using Drypeak.Soil.Quantities;
 
 namespace Drypeak.Service;
 
@@ -33,11 +32,26 @@ internal static class Examples
     }
 }
 
-/// <summary>The address of the example's chart.</summary>
+/// <summary>An address of a chart, for the API description. Its numbers are written here, not computed, so that it reads the same on every machine.</summary>
 internal static class ExampleChart
 {
     /// <summary>The query's <c>d</c>.</summary>
-    public static string Address { get; } = ChartAddress.Encode(
-        new MoistureDensityJob(new Limits()).Compute(
-            JsonSerializer.Deserialize(Examples.MoistureDensityRequest, ServiceJson.Of<MoistureDensityRequest>())!).Chart);
+    public static string Address { get; } = ChartAddress.Encode(new CompactionChart
+    {
+        Reference = "Ternmarsh, borrow area 7, sample 3",
+        DensityUnit = DensityUnit.MegagramPerCubicMeter,
+        Specimens =
+        [
+            new ChartSpecimen(10.1, 1.749, "1", false), new ChartSpecimen(12.0, 1.821, "2", false), new ChartSpecimen(13.8, 1.861, "3", false),
+            new ChartSpecimen(16.1, 1.83, "4", false), new ChartSpecimen(18.0, 1.77, "5", false),
+        ],
+        Curve =
+        [
+            new ChartPoint(10.1, 1.75), new ChartPoint(11, 1.782), new ChartPoint(12, 1.817), new ChartPoint(13, 1.848), new ChartPoint(14.2, 1.864),
+            new ChartPoint(15, 1.855), new ChartPoint(16, 1.83), new ChartPoint(17, 1.799), new ChartPoint(18, 1.767),
+        ],
+        Optimum = new ChartOptimum(14.2, 1.864, "14.2 %", "1.86 Mg/m³", [13.7, 15.3], [1.843, 1.885]),
+        SpecificGravity = 2.7,
+        WaterDensity = 998.2,
+    });
 }

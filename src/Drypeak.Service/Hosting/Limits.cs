@@ -66,10 +66,6 @@ public sealed record Limits
     [Range(1, 1_000)]
     public int IdentificationLabels { get; init; } = 30;
 
-    /// <summary>Width or height of a chart, px before scaling. Default 4,000.</summary>
-    [Range(100, 20_000)]
-    public int ChartSide { get; init; } = 4_000;
-
     /// <summary>Connections open at once, or 0 for as many as the system gives. Default 0.</summary>
     [Range(0, 1_000_000)]
     public int Connections { get; init; }

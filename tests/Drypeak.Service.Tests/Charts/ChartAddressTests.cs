@@ -153,8 +153,12 @@ public sealed class ChartAddressTests(RunningService service)
             {
                 "optimum" => new JsonObject
                 {
-                    ["waterContent"] = w, ["maximumDryDensity"] = density, ["reportedWaterContent"] = "", ["reportedMaximumDryDensity"] = "<&>",
-                    ["waterContentInterval"] = new JsonArray(w), ["maximumDryDensityInterval"] = new JsonArray(density, w, w),
+                    ["waterContent"] = w,
+                    ["maximumDryDensity"] = density,
+                    ["reportedWaterContent"] = "",
+                    ["reportedMaximumDryDensity"] = "<&>",
+                    ["waterContentInterval"] = new JsonArray(w),
+                    ["maximumDryDensityInterval"] = new JsonArray(density, w, w),
                 },
                 "curve" => new JsonArray(new JsonObject { ["waterContent"] = w, ["dryDensity"] = density }, new JsonObject { ["waterContent"] = density, ["dryDensity"] = w }),
                 "specimens" => new JsonArray(new JsonObject { ["waterContent"] = w, ["dryDensity"] = density, ["label"] = "", ["setAside"] = true }),

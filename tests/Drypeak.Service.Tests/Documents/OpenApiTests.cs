@@ -1,27 +1,18 @@
 using System.Net.Http.Headers;
 using System.Text;
 using System.Text.Json.Nodes;
-using Microsoft.AspNetCore.Mvc.Testing;
+using Drypeak.Service.Tests.Laboratory;
 using Xunit;
 
 namespace Drypeak.Service.Tests.Documents;
 
 /// <summary>The exported description is the running service's.</summary>
-public sealed class OpenApiTests : IDisposable
+public sealed class OpenApiTests(RunningService service)
 {
-    private readonly WebApplicationFactory<Program> _service = new();
-
-    public OpenApiTests()
-    {
-        _service.UseKestrel(0);
-        _service.StartServer();
-    }
-
     [Fact]
     public async Task The_served_description_is_the_exported_file_byte_for_byte()
     {
-        using var client = _service.CreateClient();
-        var served = await client.GetByteArrayAsync("/openapi/v1.json", TestContext.Current.CancellationToken);
+        var served = await service.Client.GetByteArrayAsync("/openapi/v1.json", TestContext.Current.CancellationToken);
         var exported = await File.ReadAllBytesAsync(Repository.File("openapi/v1.json"), TestContext.Current.CancellationToken);
         Assert.True(served.AsSpan().SequenceEqual(exported),
             "openapi/v1.json differs from the service. Run: dotnet run --project src/Drypeak.Service -- openapi \"$PWD/openapi/v1.json\"");
@@ -49,14 +40,11 @@ public sealed class OpenApiTests : IDisposable
             .Select(path => (path.Key, Example: path.Value!["post"]?["requestBody"]?["content"]?["application/json"]?["example"]))
             .Where(path => path.Example is not null).ToList();
         Assert.NotEmpty(examples);
-        using var client = _service.CreateClient();
         foreach (var (path, example) in examples)
         {
             using var body = new StringContent(example!.ToJsonString(), Encoding.UTF8, new MediaTypeHeaderValue("application/json"));
-            using var answer = await client.PostAsync(path, body, TestContext.Current.CancellationToken);
+            using var answer = await service.Client.PostAsync(path, body, TestContext.Current.CancellationToken);
             Assert.True(answer.IsSuccessStatusCode, $"{path} refuses its own example with {(int)answer.StatusCode}.");
         }
     }
-
-    public void Dispose() => _service.Dispose();
 }

@@ -2,22 +2,14 @@ using System.Net.Http.Headers;
 using System.Text;
 using System.Text.Json.Nodes;
 using System.Text.RegularExpressions;
-using Microsoft.AspNetCore.Mvc.Testing;
+using Drypeak.Service.Tests.Laboratory;
 using Xunit;
 
 namespace Drypeak.Service.Tests.Documents;
 
 /// <summary>What the README shows is what the service does.</summary>
-public sealed partial class ReadmeTests : IDisposable
+public sealed partial class ReadmeTests(RunningService service)
 {
-    private readonly WebApplicationFactory<Program> _service = new();
-
-    public ReadmeTests()
-    {
-        _service.UseKestrel(0);
-        _service.StartServer();
-    }
-
     [Fact]
     public async Task The_request_of_the_readme_gives_the_answer_of_the_readme()
     {
@@ -26,16 +18,13 @@ public sealed partial class ReadmeTests : IDisposable
         Assert.True(shown.Success, "The README has no curl with its answer.");
 
         using var body = new StringContent(shown.Groups["body"].Value, Encoding.UTF8, new MediaTypeHeaderValue("application/json"));
-        using var client = _service.CreateClient();
-        using var answer = await client.PostAsync(shown.Groups["path"].Value, body, TestContext.Current.CancellationToken);
+        using var answer = await service.Client.PostAsync(shown.Groups["path"].Value, body, TestContext.Current.CancellationToken);
         answer.EnsureSuccessStatusCode();
         var actual = JsonNode.Parse(await answer.Content.ReadAsStringAsync(TestContext.Current.CancellationToken))!["optimum"];
 
         // Another processor may round the last digits otherwise.
         AssertSame(JsonNode.Parse(shown.Groups["answer"].Value), actual, "");
     }
-
-    public void Dispose() => _service.Dispose();
 
     private static void AssertSame(JsonNode? expected, JsonNode? actual, string place)
     {

@@ -11,9 +11,20 @@ public sealed class UnitsTests(RunningService service)
     /// <summary>One in each unit, in g, cm³ and Mg/m³. The pound, the foot and standard gravity are exact by definition.</summary>
     private static readonly Dictionary<string, double> InTheUsual = new()
     {
-        ["g"] = 1, ["kg"] = 1000, ["lb"] = Pound,
-        ["cm3"] = 1, ["L"] = 1000, ["m3"] = 1e6, ["in3"] = 16.387064, ["ft3"] = CubicFoot, ["yd3"] = 27 * CubicFoot,
-        ["Mg/m3"] = 1, ["g/cm3"] = 1, ["kg/m3"] = 1e-3, ["lb/ft3"] = Pound / CubicFoot, ["kN/m3"] = 1 / 9.80665,
+        ["g"] = 1,
+        ["kg"] = 1000,
+        ["lb"] = Pound,
+        ["cm3"] = 1,
+        ["L"] = 1000,
+        ["m3"] = 1e6,
+        ["in3"] = 16.387064,
+        ["ft3"] = CubicFoot,
+        ["yd3"] = 27 * CubicFoot,
+        ["Mg/m3"] = 1,
+        ["g/cm3"] = 1,
+        ["kg/m3"] = 1e-3,
+        ["lb/ft3"] = Pound / CubicFoot,
+        ["kN/m3"] = 1 / 9.80665,
     };
 
     [Theory]

@@ -38,10 +38,10 @@ public static class StrictJson
         options.TypeInfoResolver = JsonTypeInfoResolver.Combine([.. contracts]).WithAddedModifier(RefuseNullWhereRequired);
     }
 
-    /// <summary>A member that has to be given has to have a value, even where its type could be null.</summary>
+    /// <summary>A member that is marked as required has to have a value, even where its type could be null; a constructor's parameter says by its own type.</summary>
     private static void RefuseNullWhereRequired(JsonTypeInfo type)
     {
-        foreach (var member in type.Properties.Where(member => member.IsRequired && member.IsSetNullable))
+        foreach (var member in type.Properties.Where(member => member is { IsRequired: true, IsSetNullable: true, AssociatedParameter: null }))
         {
             member.IsSetNullable = false;
         }

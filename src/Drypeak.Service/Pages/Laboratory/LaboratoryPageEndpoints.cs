@@ -50,11 +50,13 @@ internal static class LaboratoryPageEndpoints
             return Problems.UnsupportedMediaType(FormType);
         }
 
-        if (context.Features.Get<IHttpMaxRequestBodySizeFeature>() is { IsReadOnly: false } size)
+        if (await RequestReader.ReadBytesAsync(context, limits.BodyBytes) is not { } body)
         {
-            size.MaxRequestBodySize = limits.BodyBytes;
+            return Problems.TooLarge(limits.BodyBytes);
         }
 
+        // Read to its bound first, so that who sends too much hears it and is not cut off; the form is read from what came.
+        context.Request.Body = new MemoryStream(body.ToArray(), writable: false);
         IFormCollection posted;
         try
         {
