@@ -72,8 +72,8 @@ public sealed class TraceTests(RunningService service)
         Assert.Equal(answer.Number("/optimum/waterContent"), values["optimum water content"]);
         Assert.Equal(answer.Number("/optimum/maximumDryDensity"), values["maximum dry density"]);
         Assert.Equal(answer.Number("/optimum/saturation"), values["saturation at the optimum"]);
-        Assert.Equal(answer.Number("/corrected/maximumDryDensity"), values["maximum dry density corrected for oversize"]);
-        Assert.Equal(answer.Number("/corrected/waterContent"), values["optimum water content corrected for oversize"]);
+        Assert.Equal(answer.Number("/corrected/maximumDryDensity"), values["maximum dry density of the total material"]);
+        Assert.Equal(answer.Number("/corrected/waterContent"), values["optimum water content of the total material"]);
         Assert.All(answer.At("/specimens").EnumerateArray(), specimen =>
         {
             var of = $" of specimen {specimen.Text("/label")}";

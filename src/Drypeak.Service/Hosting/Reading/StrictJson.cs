@@ -41,7 +41,7 @@ public static class StrictJson
     /// <summary>A member that is marked as required has to have a value, even where its type could be null; a constructor's parameter says by its own type.</summary>
     private static void RefuseNullWhereRequired(JsonTypeInfo type)
     {
-        foreach (var member in type.Properties.Where(member => member is { IsRequired: true, IsSetNullable: true, AssociatedParameter: null }))
+        foreach (var member in type.Properties.Where(member => member.IsSetNullable && member.AttributeProvider?.IsDefined(typeof(JsonRequiredAttribute), false) is true))
         {
             member.IsSetNullable = false;
         }
