@@ -36,7 +36,7 @@ public sealed record FittedOptimum(Estimate WaterContent, Estimate MaximumDryDen
 /// <summary>A parameter of a fitted model.</summary>
 /// <param name="Name">camelCase name, as it stands in an answer.</param>
 /// <param name="Value">The value, in <paramref name="Unit"/>.</param>
-/// <param name="Unit">kg/m³, %, or empty for a ratio.</param>
+/// <param name="Unit">kg/m³, kg/m³ per %, kg/m³ per %² or %³, %, or empty for a ratio.</param>
 /// <param name="StandardError">Standard error, or null.</param>
 /// <param name="Meaning">What it is, in words; with its prior where it has one.</param>
 public sealed record CurveParameter(string Name, double Value, string Unit, double? StandardError, string Meaning);

@@ -18,6 +18,9 @@ internal readonly struct LiSegoCurve : ICurve
     /// <summary>At w = 0 the saturation is 0 and the density its limit. This water content (0.001 %) gives it, without the digits that 1 − F would lose nearer to 0.</summary>
     private const double LeastWaterContent = 1e-5;
 
+    /// <summary>The same against wm, for water contents that no soil has.</summary>
+    private const double LeastShareOfWm = 1e-10;
+
     /// <summary>Nearer to wm than this, relative, the logarithm of u would run away.</summary>
     private const double LeastDistance = 1e-12;
 
@@ -30,6 +33,7 @@ internal readonly struct LiSegoCurve : ICurve
     private readonly double logQ;
     private readonly double k;
     private readonly double volumeOfSolids;
+    private readonly double least;
     private readonly double waterDensity;
 
     /// <param name="parameters">logit Sm, ln wm, ln n, ln p.</param>
@@ -43,20 +47,21 @@ internal readonly struct LiSegoCurve : ICurve
         logQ = parameters[3] - parameters[1];
         k = Power(n * logQ);
         volumeOfSolids = 1 / specificGravity;
+        least = Math.Max(LeastWaterContent, LeastShareOfWm * wm);
         this.waterDensity = waterDensity;
     }
 
     /// <summary>Dry density, Mg/m³.</summary>
     public double Density(double waterContent)
     {
-        var w = Math.Max(waterContent, LeastWaterContent);
+        var w = Math.Max(waterContent, least);
         return waterDensity / (volumeOfSolids + (w / Saturation(w)));
     }
 
     /// <summary>Dry density, and its derivatives by the four parameters.</summary>
     public double Density(double waterContent, Span<double> gradient)
     {
-        var w = Math.Max(waterContent, LeastWaterContent);
+        var w = Math.Max(waterContent, least);
         double saturation, byWm, byN, byP;
         if (w >= wm)
         {
@@ -89,7 +94,7 @@ internal readonly struct LiSegoCurve : ICurve
     /// <summary>dρd/dw, Mg/m³: −ρ²/ρw·(Sr − w·dSr/dw)/Sr².</summary>
     public double Slope(double waterContent)
     {
-        var w = Math.Max(waterContent, LeastWaterContent);
+        var w = Math.Max(waterContent, least);
         var (saturation, fall) = (greatestSaturation, greatestSaturation);
         if (w < wm)
         {

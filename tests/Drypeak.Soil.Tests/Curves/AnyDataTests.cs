@@ -140,6 +140,13 @@ public sealed class AnyDataTests
     }
 
     [Fact]
+    public void Water_contents_that_no_soil_has_make_no_number_that_is_none()
+    {
+        var data = new CompactionData([new(0, 1695), new(5e-14, 2064), new(0.18, 1785), new(0.20, 1359), new(3.7e12, 8e-10)], 2.73, 961.5);
+        Assert.DoesNotContain(Numbers(CompactionCurve.Analyze(data)), number => !double.IsFinite(number));
+    }
+
+    [Fact]
     public void Three_points_with_their_highest_in_the_middle_have_an_optimum()
     {
         var data = new CompactionData([new(0.10, 1800), new(0.13, 1860), new(0.16, 1790)], 2.7, 998.2);
