@@ -78,7 +78,7 @@ public static class MoldVolumes
         if (depth is { Given: { } given, Mean: { } mean } && Apart(mean.Meters, given.Meters, height.Meters) is { } apart)
         {
             faults.Add(new Fault(place + "/depthsBelowRim", "contradiction",
-                $"The depth below the rim given is {ReaderText.Of(given, units.Length)}, but the mean of its readings {ReaderText.Of(mean, units.Length)}: {ReaderText.Percent(apart, 2)} of the mold's height apart, where {ReaderText.Percent(SpecimenReduction.DensityTolerance)} is allowed. Correct one, or leave one out."));
+                $"The depth below the rim given is {ReaderText.Of(given, units.Length)}, but the mean of its readings {ReaderText.Of(mean, units.Length)}: on the mold's height that is {Allowed(apart)} Correct one, or leave one out."));
         }
 
         if (depth.Value.Meters >= height.Meters)
