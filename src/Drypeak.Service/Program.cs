@@ -15,6 +15,7 @@ app.MapSaturationLines();
 app.MapOversizeCorrection();
 app.MapTestMethods();
 app.MapFindingKinds();
+app.MapSpecimenSheet();
 app.MapCharts();
 app.MapPages();
 
