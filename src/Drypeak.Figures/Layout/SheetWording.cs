@@ -45,8 +45,8 @@ internal sealed class SheetWording(LaboratorySheet sheet)
                 ("Vibration of each layer", Text(method.VibrationSecondsPerLayer!, seconds => $"{ReaderText.Significant(seconds)} s")),
                 ("Layers", Count(method.Layers)),
             },
-        ("Soil passing", method.LargestParticleMillimeters is { } particle ? Text(particle, Millimeters) : "not stated"),
-        ("Specimens, at least", method.MinimumSpecimens is { } fewest ? Count(fewest) : "not stated"),
+        ("Soil passing", method.LargestParticleMillimeters is { } particle ? Text(particle, Millimeters) : "not at hand"),
+        ("Specimens, at least", method.MinimumSpecimens is { } fewest ? Count(fewest) : "not at hand"),
         ("Water contents apart", Spacing(method)),
     ];
 
@@ -97,7 +97,7 @@ internal sealed class SheetWording(LaboratorySheet sheet)
         ({ } advised, { } most) => $"about {Text(advised, Percent)}, to {Text(most, Percent)}",
         ({ } advised, null) => $"about {Text(advised, Percent)}",
         (null, { } most) => $"up to {Text(most, Percent)}",
-        _ => "not stated",
+        _ => "not at hand",
     };
 
     private static string Percent(double percent) => $"{ReaderText.Significant(percent)} %";
