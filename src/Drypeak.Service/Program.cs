@@ -4,7 +4,7 @@ using Drypeak.Service.Laboratory;
 using Drypeak.Service.Pages;
 
 var builder = WebApplication.CreateBuilder(args).AddDrypeakHosting();
-builder.Services.AddSingleton<MoistureDensityJob>().AddSingleton<ComparisonJob>();
+builder.Services.AddSingleton<ChartRules>().AddSingleton<MoistureDensityJob>().AddSingleton<ComparisonJob>();
 
 var app = builder.Build();
 app.UseDrypeakHosting(PageEndpoints.NotFound);

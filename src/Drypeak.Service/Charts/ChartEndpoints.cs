@@ -13,7 +13,7 @@ internal static class ChartEndpoints
         var charts = app.MapGroup("/v1/charts").WithTags("Charts");
         foreach (var format in ChartFormat.All)
         {
-            var chart = charts.MapRead($"/{ChartAddress.MoistureDensity}.{format.Suffix}", (HttpContext context, Limits limits) => Draw(context, limits, format))
+            var chart = charts.MapRead($"/{ChartAddress.MoistureDensity}.{format.Suffix}", (HttpContext context, ChartRules rules, Limits limits) => Draw(context, rules, limits, format))
                 .WithName($"moisture-density-chart-{format.Suffix}")
                 .WithSummary($"The chart of a laboratory test as {format.Suffix.ToUpperInvariant()}")
                 .WithDescription("The address comes from an answer's links and holds all that the picture shows. The same address gives the same bytes, with a strong ETag.")
@@ -24,12 +24,12 @@ internal static class ChartEndpoints
                 .Refuses(400);
             if (format == ChartFormat.Png)
             {
-                chart.TakesQuery<double>("scale", $"Pixels for each px: {ChartOptions.SmallestScale} to {ChartOptions.LargestScale}.", "1");
+                chart.TakesQuery<double>("scale", $"Pixels for each px: {PngWriter.SmallestScale} to {PngWriter.LargestScale}.", "1");
             }
         }
     }
 
-    private static IResult Draw(HttpContext context, Limits limits, ChartFormat format)
+    private static IResult Draw(HttpContext context, ChartRules rules, Limits limits, ChartFormat format)
     {
         var query = context.Request.Query;
         var faults = new List<Fault>();
@@ -44,7 +44,7 @@ internal static class ChartEndpoints
             return Problems.InvalidQuery(faults);
         }
 
-        faults.AddRange(ChartAddress.Decode(data, limits, out var chart));
+        faults.AddRange(ChartAddress.Decode(data, rules, limits.UnpackedAddressBytes, out var chart));
         return faults.Count > 0
             ? Problems.InvalidQuery(faults)
             : new CachedBytes(format.Draw(chart!, options), format.MediaType);

@@ -8,8 +8,6 @@ namespace Drypeak.Service.Charts;
 /// <param name="Scale">Pixels of the PNG for each px.</param>
 internal sealed record ChartOptions(FigureSize Size, double Scale)
 {
-    public const double SmallestScale = 0.5;
-    public const double LargestScale = 4;
     private const string Width = "width", Height = "height", ScaleName = "scale";
 
     /// <summary>Reads a query.</summary>
@@ -37,13 +35,21 @@ internal sealed record ChartOptions(FigureSize Size, double Scale)
             }
         }
 
-        return new ChartOptions(
-            new FigureSize(
-                (int)Number(query, Width, FigureSize.Smallest, FigureSize.Largest, FigureSize.Default.Width, NumberStyles.None, faults),
-                (int)Number(query, Height, FigureSize.Smallest, FigureSize.Largest, FigureSize.Default.Height, NumberStyles.None, faults)),
-            known.Contains(ScaleName)
-                ? Number(query, ScaleName, SmallestScale, LargestScale, 1, NumberStyles.AllowDecimalPoint, faults)
-                : 1);
+        var size = new FigureSize(
+            (int)Number(query, Width, FigureSize.Smallest, FigureSize.Largest, FigureSize.Default.Width, NumberStyles.None, faults),
+            (int)Number(query, Height, FigureSize.Smallest, FigureSize.Largest, FigureSize.Default.Height, NumberStyles.None, faults));
+        if (format != ChartFormat.Png)
+        {
+            return new ChartOptions(size, 1);
+        }
+
+        var scale = Number(query, ScaleName, PngWriter.SmallestScale, PngWriter.LargestScale, 1, NumberStyles.AllowDecimalPoint, faults);
+        if (PngWriter.Refusal(size, scale) is { } tooLarge)
+        {
+            faults.Add(new Fault("/" + ScaleName, "out-of-range", tooLarge));
+        }
+
+        return new ChartOptions(size, scale);
     }
 
     private static double Number(

@@ -18,6 +18,7 @@ internal sealed record MoistureDensityOutcome(MoistureDensityAnswer Answer, Comp
 internal sealed class MoistureDensityJob(Limits limits)
 {
     private readonly MoistureDensityRules _rules = new(limits);
+    private readonly ChartRules _drawable = new(limits);
 
     private const int LinePoints = 41;
     private const double Coverage = 0.95;
@@ -31,7 +32,7 @@ internal sealed class MoistureDensityJob(Limits limits)
         var (test, result) = Analyze(request);
         var specimens = result.Specimens;
         var chart = MoistureDensityChart.Of(request, test, result);
-        var links = ChartAddress.LinksFor(ChartAddress.MoistureDensity, chart, limits, out var whyNoLink);
+        var links = ChartAddress.LinksFor(ChartAddress.MoistureDensity, chart, _drawable, limits.AddressBytes, out var whyNoLink);
         var findings = (whyNoLink is null ? result.Findings : result.Findings.Append(whyNoLink)).Select(FindingContract.Of);
         return new MoistureDensityOutcome(
             new MoistureDensityAnswer

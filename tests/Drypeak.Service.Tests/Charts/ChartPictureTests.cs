@@ -105,6 +105,7 @@ public sealed class ChartPictureTests(RunningService service)
     [InlineData("png", "scale=0.49", "/scale out-of-range")]
     [InlineData("png", "scale=4.1", "/scale out-of-range")]
     [InlineData("png", "scale=NaN", "/scale out-of-range")]
+    [InlineData("png", "width=2400&height=2400&scale=4", "/scale out-of-range")]
     [InlineData("png", "scale=2&scale=2", "/scale repeated-parameter")]
     [InlineData("svg", "width=500&width=500", "/width repeated-parameter")]
     [InlineData("svg", "scale=2", "/scale unknown-parameter")]
