@@ -77,6 +77,7 @@ public sealed class TraceTests(RunningService service)
         Assert.Equal(answer.Number("/optimum/saturation"), values["saturation at the optimum"]);
         Assert.Equal(answer.Number("/corrected/maximumDryDensity"), values["maximum dry density of the total material"]);
         Assert.Equal(answer.Number("/corrected/waterContent"), values["optimum water content of the total material"]);
+        Assert.Equal(answer.Number("/method/effort/computed"), values["compactive effort"]);
         Assert.All(answer.At("/specimens").EnumerateArray(), specimen =>
         {
             var of = $" of specimen {specimen.Text("/label")}";
