@@ -1,10 +1,12 @@
 using Drypeak.Service.Charts;
+using Drypeak.Service.Field;
 using Drypeak.Service.Hosting;
 using Drypeak.Service.Laboratory;
 using Drypeak.Service.Pages;
 
 var builder = WebApplication.CreateBuilder(args).AddDrypeakHosting();
-builder.Services.AddSingleton<MoistureDensityJob>().AddSingleton<ComparisonJob>();
+builder.Services.AddSingleton<MoistureDensityJob>().AddSingleton<ComparisonJob>()
+    .AddSingleton<FieldDensityJob>();
 
 var app = builder.Build();
 app.UseDrypeakHosting(PageEndpoints.NotFound);
@@ -13,6 +15,7 @@ app.MapComparison();
 EffortSeriesJob.Map(app);
 app.MapSaturationLines();
 app.MapOversizeCorrection();
+FieldDensityJob.Map(app);
 app.MapTestMethods();
 app.MapFindingKinds();
 app.MapCharts();

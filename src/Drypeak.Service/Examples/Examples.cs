@@ -23,6 +23,9 @@ internal static class Examples
     /// <summary>One soil at standard and modified effort, as JSON.</summary>
     public static string EffortSeriesRequest { get; } = Text("effort-series.json");
 
+    /// <summary>A sand cone test of a lift, as JSON.</summary>
+    public static string FieldDensityRequest { get; } = Text("field-density.json");
+
     private static string Text(string name)
     {
         using var stream = typeof(Examples).Assembly.GetManifestResourceStream($"Drypeak.Service.Examples.{name}")

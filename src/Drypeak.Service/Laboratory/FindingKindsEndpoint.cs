@@ -1,5 +1,6 @@
 using Drypeak.Service.Charts;
 using Drypeak.Service.Hosting;
+using Drypeak.Soil.FieldDensity.Review;
 using Drypeak.Soil.Laboratory.Review;
 
 namespace Drypeak.Service.Laboratory;
@@ -9,7 +10,7 @@ internal static class FindingKindsEndpoint
 {
     private static readonly IReadOnlyList<FindingKindAnswer> Kinds =
     [
-        .. FindingKinds.All.Append(ChartAddress.NoAddress).Select(kind => new FindingKindAnswer(
+        .. FindingKinds.All.Concat(FieldFindingKinds.All).Append(ChartAddress.NoAddress).Select(kind => new FindingKindAnswer(
             kind.Code, kind.Severity.ToString().ToLowerInvariant(), kind.Meaning, kind.Why, kind.Remedy, kind.Basis)),
     ];
 
