@@ -42,5 +42,11 @@ internal static class ServiceJson
 [JsonSerializable(typeof(IReadOnlyList<TestMethodAnswer>))]
 [JsonSerializable(typeof(FieldDensityRequest))]
 [JsonSerializable(typeof(FieldDensityAnswer))]
+[JsonSerializable(typeof(RelativeDensityRequest))]
+[JsonSerializable(typeof(RelativeDensityAnswer))]
+[JsonSerializable(typeof(OnePointRequest))]
+[JsonSerializable(typeof(OnePointAnswer))]
+[JsonSerializable(typeof(RapidMethodRequest))]
+[JsonSerializable(typeof(RapidMethodAnswer))]
 [JsonSerializable(typeof(CompactionChart))]
 internal sealed partial class ContractsJson : JsonSerializerContext;
