@@ -5,8 +5,7 @@ using Drypeak.Service.Laboratory;
 using Drypeak.Service.Pages;
 
 var builder = WebApplication.CreateBuilder(args).AddDrypeakHosting();
-builder.Services.AddSingleton<MoistureDensityJob>().AddSingleton<ComparisonJob>()
-    .AddSingleton<FieldDensityJob>();
+builder.Services.AddSingleton<ChartRules>().AddSingleton<MoistureDensityJob>().AddSingleton<ComparisonJob>().AddSingleton<FieldDensityJob>();
 
 var app = builder.Build();
 app.UseDrypeakHosting(PageEndpoints.NotFound);
@@ -21,6 +20,7 @@ OnePointJob.Map(app);
 RapidMethodJob.Map(app);
 app.MapTestMethods();
 app.MapFindingKinds();
+app.MapSpecimenSheet();
 app.MapCharts();
 app.MapPages();
 

@@ -1,6 +1,3 @@
-using System.Buffers;
-using System.Buffers.Text;
-using System.IO.Compression;
 using System.Text.Json;
 using System.Text.Json.Serialization.Metadata;
 using Drypeak.Figures;
@@ -23,9 +20,6 @@ internal static class ChartAddress
 
     private static readonly JsonTypeInfo<CompactionChart> Json = ServiceJson.Of<CompactionChart>();
 
-    private const int BrotliQuality = 5;
-    private const int BrotliWindow = 18;
-
     /// <summary>Said where no address is given.</summary>
     public static FindingKind NoAddress { get; } = new("no-chart-address", Severity.Note,
         "There is no address that would give the chart.",
@@ -36,13 +30,14 @@ internal static class ChartAddress
     /// <summary>The addresses of a chart's pictures; none where the service would not answer them.</summary>
     /// <param name="job">The chart's job.</param>
     /// <param name="chart">The chart.</param>
-    /// <param name="limits">Bounds of an address and of what it may hold.</param>
+    /// <param name="rules">What it must keep to be drawn.</param>
+    /// <param name="addressBytes">The longest address.</param>
     /// <param name="whyNot">Why there are none, or null.</param>
-    public static LinksContract LinksFor(string job, CompactionChart chart, Limits limits, out Finding? whyNot)
+    public static LinksContract LinksFor(string job, CompactionChart chart, ChartRules rules, int addressBytes, out Finding? whyNot)
     {
         var data = Encode(chart);
-        whyNot = new ChartRules(limits).Check(chart) is [var fault, ..] ? NoAddress.At("", $"The chart cannot be drawn, so no links are given. {fault.Message}")
-            : data.Length + RoomForTheRest > limits.AddressBytes ? NoAddress.At("", "The chart holds more than an address can carry, so no links are given. Post the request with Accept: image/svg+xml, image/png or application/pdf to get the picture.")
+        whyNot = rules.Check(chart) is [var fault, ..] ? NoAddress.At("", $"The chart cannot be drawn, so no links are given. {fault.Message}")
+            : data.Length + RoomForTheRest > addressBytes ? NoAddress.At("", "The chart holds more than an address can carry, so no links are given. Post the request with Accept: image/svg+xml, image/png or application/pdf to get the picture.")
             : null;
         var given = whyNot is null;
         string? Link(string suffix) => given ? $"/v1/charts/{job}.{suffix}?d={data}" : null;
@@ -50,52 +45,35 @@ internal static class ChartAddress
     }
 
     /// <summary>The chart as the text of an address.</summary>
-    public static string Encode(CompactionChart chart)
-    {
-        var json = JsonSerializer.SerializeToUtf8Bytes(chart, Json);
-        var packed = new byte[BrotliEncoder.GetMaxCompressedLength(json.Length)];
-        return BrotliEncoder.TryCompress(json, packed, out var length, BrotliQuality, BrotliWindow)
-            ? Base64Url.EncodeToString(packed.AsSpan(0, length))
-            : throw new InvalidOperationException("A buffer of the greatest compressed length was too small.");
-    }
+    public static string Encode(CompactionChart chart) => PackedText.Pack(JsonSerializer.SerializeToUtf8Bytes(chart, Json));
 
     /// <summary>The chart in an address's text.</summary>
     /// <param name="data">The query's <c>d</c>.</param>
-    /// <param name="limits">Bounds of what it may hold.</param>
+    /// <param name="rules">What it must keep to be drawn.</param>
+    /// <param name="unpackedBytes">Bytes that it may unpack to.</param>
     /// <param name="chart">The chart, or null where there is a fault.</param>
     /// <returns>Every fault; empty where the chart can be drawn.</returns>
-    public static IReadOnlyList<Fault> Decode(string data, Limits limits, out CompactionChart? chart)
+    public static IReadOnlyList<Fault> Decode(string data, ChartRules rules, int unpackedBytes, out CompactionChart? chart)
     {
         chart = null;
-        var packed = new byte[Base64Url.GetMaxDecodedLength(data.Length)];
-        if (!Base64Url.IsValid(data) || !Base64Url.TryDecodeFromChars(data, packed, out var packedLength))
+        switch (PackedText.Unpack(data, unpackedBytes, out var json))
         {
-            return [Damaged("d is not base64url")];
-        }
-
-        var inflated = new byte[limits.UnpackedAddressBytes];
-        using var decoder = new BrotliDecoder();
-        var status = decoder.Decompress(packed.AsSpan(0, packedLength), inflated, out var consumed, out var length);
-        if (status == OperationStatus.DestinationTooSmall)
-        {
-            return [new Fault("/d", "inflates-beyond-bound", $"The address inflates beyond {limits.UnpackedAddressBytes} bytes. Post the request itself with Accept: image/svg+xml instead.")];
-        }
-
-        if (status != OperationStatus.Done || consumed != packedLength)
-        {
-            return [Damaged("d does not unpack")];
+            case PackedText.Outcome.TooLarge:
+                return [new Fault("/d", "inflates-beyond-bound", $"The address inflates beyond {unpackedBytes} bytes. Post the request itself with Accept: image/svg+xml instead.")];
+            case PackedText.Outcome.Damaged:
+                return [Damaged("d does not unpack")];
         }
 
         try
         {
-            chart = JsonSerializer.Deserialize(inflated.AsSpan(0, length), Json);
+            chart = JsonSerializer.Deserialize(json.Span, Json);
         }
         catch (JsonException)
         {
             return [Damaged("d holds no chart")];
         }
 
-        return chart is null ? [Damaged("d holds no chart")] : new ChartRules(limits).Check(chart);
+        return chart is null ? [Damaged("d holds no chart")] : rules.Check(chart);
     }
 
     private static Fault Damaged(string how) =>

@@ -1,4 +1,3 @@
-using Drypeak.Figures;
 using Drypeak.Service.Hosting;
 
 namespace Drypeak.Service.Charts;
@@ -13,23 +12,18 @@ internal static class ChartEndpoints
         var charts = app.MapGroup("/v1/charts").WithTags("Charts");
         foreach (var format in ChartFormat.All)
         {
-            var chart = charts.MapRead($"/{ChartAddress.MoistureDensity}.{format.Suffix}", (HttpContext context, Limits limits) => Draw(context, limits, format))
+            var chart = charts.MapRead($"/{ChartAddress.MoistureDensity}.{format.Suffix}", (HttpContext context, ChartRules rules, Limits limits) => Draw(context, rules, limits, format))
                 .WithName($"moisture-density-chart-{format.Suffix}")
                 .WithSummary($"The chart of a laboratory test as {format.Suffix.ToUpperInvariant()}")
                 .WithDescription("The address comes from an answer's links and holds all that the picture shows. The same address gives the same bytes, with a strong ETag.")
                 .TakesQuery<string>(Data, "The chart, as an answer's links give it.", ExampleChart.Address, required: true)
-                .TakesQuery<int>("width", $"Width, px: {FigureSize.Smallest} to {FigureSize.Largest}.", "960")
-                .TakesQuery<int>("height", $"Height, px: {FigureSize.Smallest} to {FigureSize.Largest}.", "640")
                 .Gives<byte[]>(format.MediaType)
                 .Refuses(400);
-            if (format == ChartFormat.Png)
-            {
-                chart.TakesQuery<double>("scale", $"Pixels for each px: {ChartOptions.SmallestScale} to {ChartOptions.LargestScale}.", "1");
-            }
+            ChartOptions.Describe(chart, format);
         }
     }
 
-    private static IResult Draw(HttpContext context, Limits limits, ChartFormat format)
+    private static IResult Draw(HttpContext context, ChartRules rules, Limits limits, ChartFormat format)
     {
         var query = context.Request.Query;
         var faults = new List<Fault>();
@@ -44,7 +38,7 @@ internal static class ChartEndpoints
             return Problems.InvalidQuery(faults);
         }
 
-        faults.AddRange(ChartAddress.Decode(data, limits, out var chart));
+        faults.AddRange(ChartAddress.Decode(data, rules, limits.UnpackedAddressBytes, out var chart));
         return faults.Count > 0
             ? Problems.InvalidQuery(faults)
             : new CachedBytes(format.Draw(chart!, options), format.MediaType);

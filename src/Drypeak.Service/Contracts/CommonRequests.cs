@@ -86,9 +86,17 @@ public sealed record MoldContract
     /// <example>101.6</example>
     public double? Diameter { get; init; }
 
+    /// <summary>Several readings of the inside diameter, up to 20; their mean counts. Beside diameter they must agree with it to 0.2 %.</summary>
+    /// <example>[101.58, 101.63, 101.6]</example>
+    public IReadOnlyList<double>? Diameters { get; init; }
+
     /// <summary>Inside height, in units.length.</summary>
     /// <example>116.4</example>
     public double? Height { get; init; }
+
+    /// <summary>Several readings of the inside height, up to 20; their mean counts. Beside height they must agree with it to 0.2 %.</summary>
+    /// <example>[116.4, 116.5, 116.3]</example>
+    public IReadOnlyList<double>? Heights { get; init; }
 
     /// <summary>By water: mass of the empty mold, with the plate where one is used, in units.mass.</summary>
     /// <example>4250.0</example>

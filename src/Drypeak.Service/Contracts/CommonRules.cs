@@ -58,15 +58,22 @@ internal sealed class CarbideRules : AbstractValidator<CarbideContract>
 
 internal sealed class MoldRules : AbstractValidator<MoldContract>
 {
+    /// <summary>Readings of one length.</summary>
+    public const int MostReadings = 20;
+
     public MoldRules()
     {
         RuleFor(mold => mold.Mass).NotNegative();
         RuleFor(mold => mold.Volume).Positive();
         RuleFor(mold => mold.Diameter).Positive();
+        RuleFor(mold => mold.Diameters).Counted(MostReadings);
+        RuleForEach(mold => mold.Diameters).Positive();
         RuleFor(mold => mold.Height).Positive();
-        RuleFor(mold => mold.Height).NotNull().When(mold => mold.Diameter is { })
+        RuleFor(mold => mold.Heights).Counted(MostReadings);
+        RuleForEach(mold => mold.Heights).Positive();
+        RuleFor(mold => mold.Height).NotNull().When(mold => (mold.Diameter is { } || mold.Diameters is { }) && mold.Heights is null)
             .WithErrorCode("incomplete").WithMessage("A diameter needs a height: give both, or the volume.");
-        RuleFor(mold => mold.Diameter).NotNull().When(mold => mold.Height is { })
+        RuleFor(mold => mold.Diameter).NotNull().When(mold => (mold.Height is { } || mold.Heights is { }) && mold.Diameters is null)
             .WithErrorCode("incomplete").WithMessage("A height needs a diameter: give both, or the volume.");
 
         RuleFor(mold => mold.Empty).Positive();

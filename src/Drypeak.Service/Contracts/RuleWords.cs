@@ -17,23 +17,32 @@ internal static class RuleWords
     public const double Least = 1e-9;
 
     public static IRuleBuilderOptions<T, double?> Positive<T>(this IRuleBuilder<T, double?> rule) =>
-        rule.Must(value => value is null or >= Least)
-            .WithErrorCode("not-positive")
-            .WithMessage((_, value) => value > 0
-                ? $"It must be at least {Text(Least)}; {Text(value)} was received. Check the value and its unit."
-                : $"It must be greater than 0; {Text(value)} was received.")
-            .NotTooLarge();
+        rule.Must(value => value is null or >= Least).WithErrorCode("not-positive").WithMessage((_, value) => NotPositive(value))
+            .Must(NotTooLarge).WithErrorCode("out-of-range").WithMessage((_, value) => TooLarge(value));
+
+    /// <summary>The same for an item of a list.</summary>
+    public static IRuleBuilderOptions<T, double> Positive<T>(this IRuleBuilder<T, double> rule) =>
+        rule.Must(value => value >= Least).WithErrorCode("not-positive").WithMessage((_, value) => NotPositive(value))
+            .Must(value => NotTooLarge(value)).WithErrorCode("out-of-range").WithMessage((_, value) => TooLarge(value));
 
     public static IRuleBuilderOptions<T, double?> NotNegative<T>(this IRuleBuilder<T, double?> rule) =>
-        rule.Must(value => value is null or >= 0)
-            .WithErrorCode("negative")
-            .WithMessage((_, value) => $"It must not be negative; {Text(value)} was received.")
-            .NotTooLarge();
+        rule.Must(value => value is null or >= 0).WithErrorCode("negative").WithMessage((_, value) => Negative(value))
+            .Must(NotTooLarge).WithErrorCode("out-of-range").WithMessage((_, value) => TooLarge(value));
 
-    private static IRuleBuilderOptions<T, double?> NotTooLarge<T>(this IRuleBuilderOptions<T, double?> rule) =>
-        rule.Must(value => !(value > Greatest))
-            .WithErrorCode("out-of-range")
-            .WithMessage((_, value) => $"It must not be over {Text(Greatest)}; {Text(value)} was received. Check the value and its unit.");
+    /// <summary>The same for an item of a list.</summary>
+    public static IRuleBuilderOptions<T, double> NotNegative<T>(this IRuleBuilder<T, double> rule) =>
+        rule.Must(value => value >= 0).WithErrorCode("negative").WithMessage((_, value) => Negative(value))
+            .Must(value => NotTooLarge(value)).WithErrorCode("out-of-range").WithMessage((_, value) => TooLarge(value));
+
+    private static bool NotTooLarge(double? value) => !(value > Greatest);
+
+    private static string NotPositive(double? value) => value > 0
+        ? $"It must be at least {Text(Least)}; {Text(value)} was received. Check the value and its unit."
+        : $"It must be greater than 0; {Text(value)} was received.";
+
+    private static string Negative(double? value) => $"It must not be negative; {Text(value)} was received.";
+
+    private static string TooLarge(double? value) => $"It must not be over {Text(Greatest)}; {Text(value)} was received. Check the value and its unit.";
 
     public static IRuleBuilderOptions<T, double?> Within<T>(this IRuleBuilder<T, double?> rule, double least, double greatest, string unit = "") =>
         rule.Must(value => value is null || (value >= least && value <= greatest))

@@ -18,6 +18,7 @@ internal sealed record MoistureDensityOutcome(MoistureDensityAnswer Answer, Comp
 internal sealed class MoistureDensityJob(Limits limits)
 {
     private readonly MoistureDensityRules _rules = new(limits);
+    private readonly ChartRules _drawable = new(limits);
 
     private const int LinePoints = 41;
     private const double Coverage = 0.95;
@@ -31,7 +32,7 @@ internal sealed class MoistureDensityJob(Limits limits)
         var (test, result) = Analyze(request);
         var specimens = result.Specimens;
         var chart = MoistureDensityChart.Of(request, test, result);
-        var links = ChartAddress.LinksFor(ChartAddress.MoistureDensity, chart, limits, out var whyNoLink);
+        var links = ChartAddress.LinksFor(ChartAddress.MoistureDensity, chart, _drawable, limits.AddressBytes, out var whyNoLink);
         var findings = (whyNoLink is null ? result.Findings : result.Findings.Append(whyNoLink)).Select(FindingContract.Of);
         return new MoistureDensityOutcome(
             new MoistureDensityAnswer
@@ -180,11 +181,16 @@ internal sealed class MoistureDensityJob(Limits limits)
         };
     }
 
-    private static ParameterAnswer InCallersUnit(CurveParameter parameter, DensityUnit unit) => parameter.Unit == DensityUnit.KilogramPerCubicMeter.Symbol()
-        ? new ParameterAnswer(
-            new Density(parameter.Value).In(unit), unit.Symbol(),
-            parameter.StandardError is { } error ? new Density(error).In(unit) : null, parameter.Meaning)
-        : new ParameterAnswer(parameter.Value, parameter.Unit, parameter.StandardError, parameter.Meaning);
+    /// <summary>A density, or a density per something (<c>kg/m³ per %</c>), in the caller's unit; any other parameter as it is.</summary>
+    private static ParameterAnswer InCallersUnit(CurveParameter parameter, DensityUnit unit)
+    {
+        var inside = DensityUnit.KilogramPerCubicMeter.Symbol();
+        return parameter.Unit.StartsWith(inside, StringComparison.Ordinal)
+            ? new ParameterAnswer(
+                new Density(parameter.Value).In(unit), unit.Symbol() + parameter.Unit[inside.Length..],
+                parameter.StandardError is { } error ? new Density(error).In(unit) : null, parameter.Meaning)
+            : new ParameterAnswer(parameter.Value, parameter.Unit, parameter.StandardError, parameter.Meaning);
+    }
 
     private static IReadOnlyList<LineAnswer> LinesOf(LinesRequest? lines, MoistureDensityTest test, IReadOnlyList<Specimen> specimens) =>
         test.SpecificGravity is not { Value: var gravity } ? [] :

@@ -64,6 +64,7 @@ internal static class MoistureDensityMapping
             WetDensity = specimen.WetDensity is { } wetDensity ? Density.From(wetDensity, units.Density) : null,
             DryDensity = specimen.DryDensity is { } dryDensity ? Density.From(dryDensity, units.Density) : null,
             Mold = specimen.Mold.ToMold(units),
+            DepthBelowRim = ToLength(specimen.DepthBelowRim, specimen.DepthsBelowRim, units),
             Tins = water.Tins,
             WaterContent = water.Given,
             WaterContentFromWetBasis = water.FromWetBasis,
@@ -76,8 +77,8 @@ internal static class MoistureDensityMapping
     {
         Mass = mold.Mass is { } mass ? Mass.From(mass, units.Mass) : null,
         Volume = mold.Volume is { } volume ? Volume.From(volume, units.Volume) : null,
-        Diameter = mold.Diameter is { } diameter ? Length.From(diameter, units.Length) : null,
-        Height = mold.Height is { } height ? Length.From(height, units.Length) : null,
+        Diameter = ToLength(mold.Diameter, mold.Diameters, units),
+        Height = ToLength(mold.Height, mold.Heights, units),
         WaterFilling = mold is { Empty: { } empty, WithWater: { } full }
             ? new WaterFilling(
                 Mass.From(empty, units.Mass),
@@ -90,6 +91,12 @@ internal static class MoistureDensityMapping
     public static Oversize? ToOversize(this OversizeContract oversize) => oversize.Percent is { } percent
         ? new Oversize(percent / 100, oversize.SpecificGravity, WaterContent.FromPercent(oversize.WaterContent ?? 0), oversize.Sieve)
         : null;
+
+    private static MeasuredLength? ToLength(double? given, IReadOnlyList<double>? readings, UnitSet units) => given is null && readings is null ? null : new MeasuredLength
+    {
+        Given = given is { } value ? Length.From(value, units.Length) : null,
+        Readings = [.. (readings ?? []).Select(reading => Length.From(reading, units.Length))],
+    };
 
     private static MeasurementUncertainty ToUncertainty(this UncertaintyRequest uncertainty, UnitSet units) => new()
     {

@@ -75,6 +75,14 @@ public sealed record SpecimenContract : IWaterContentGiven
     /// <summary>The specimen's own mold; what it leaves out is the test's.</summary>
     public MoldContract? Mold { get; init; }
 
+    /// <summary>How far below the mold's rim the soil ends, in units.length, as after a vibrating hammer: its volume is then V·(h − z)/h. The mold needs diameter and height.</summary>
+    /// <example>3.2</example>
+    public double? DepthBelowRim { get; init; }
+
+    /// <summary>Several readings of that depth, up to 20; their mean counts. Beside depthBelowRim they must agree with it.</summary>
+    /// <example>[3.1, 3.3, 3.2]</example>
+    public IReadOnlyList<double>? DepthsBelowRim { get; init; }
+
     /// <summary>Mass of the wet soil alone, in units.mass.</summary>
     /// <example>1771.4</example>
     public double? WetMass { get; init; }

@@ -140,6 +140,9 @@ internal sealed class MoistureDensityRules(Limits limits)
             RuleFor(specimen => specimen.Label).NotBlank("A label").AtMost(limits.NameCharacters);
             RuleFor(specimen => specimen.MoldAndWetSoil).Positive();
             RuleFor(specimen => specimen.Mold!).SetValidator(new MoldRules()).When(specimen => specimen.Mold is { });
+            RuleFor(specimen => specimen.DepthBelowRim).NotNegative();
+            RuleFor(specimen => specimen.DepthsBelowRim).Counted(MoldRules.MostReadings);
+            RuleForEach(specimen => specimen.DepthsBelowRim).NotNegative();
             RuleFor(specimen => specimen.WetMass).Positive();
             RuleFor(specimen => specimen.WetDensity).Positive();
             RuleFor(specimen => specimen.DryDensity).Positive();

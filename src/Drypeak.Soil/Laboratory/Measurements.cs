@@ -36,10 +36,10 @@ public sealed record Mold
     public Volume? Volume { get; init; }
 
     /// <summary>Inside diameter.</summary>
-    public Length? Diameter { get; init; }
+    public MeasuredLength? Diameter { get; init; }
 
     /// <summary>Inside height, without the collar.</summary>
-    public Length? Height { get; init; }
+    public MeasuredLength? Height { get; init; }
 
     /// <summary>A calibration by water.</summary>
     public WaterFilling? WaterFilling { get; init; }
@@ -87,6 +87,9 @@ public sealed record SpecimenMeasurement
 
     /// <summary>The specimen's own mold, over the test's.</summary>
     public Mold? Mold { get; init; }
+
+    /// <summary>How far below the mold's rim the soil ends, or null where it fills the mold.</summary>
+    public MeasuredLength? DepthBelowRim { get; init; }
 
     /// <summary>Moisture tins; the water content is the mean over them.</summary>
     public IReadOnlyList<MoistureTin> Tins { get; init; } = [];

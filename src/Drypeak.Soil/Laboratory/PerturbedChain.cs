@@ -82,10 +82,11 @@ internal sealed class PerturbedChain
             if (!item.DryDensityGiven)
             {
                 var wet = item.Specimen.WetDensity.KilogramsPerCubicMeter;
-                if (item.Specimen.MoldVolume is { } volume)
+                if (item.Specimen is { SoilVolume: { } volume, MoldVolume: { } whole })
                 {
                     var mass = (wet * volume.CubicMeters) + Error(item.MassError, u.Mass?.Kilograms) - Error(item.MoldMassError, u.Mass?.Kilograms);
-                    wet = mass / (volume.CubicMeters + Error(item.VolumeError, u.Volume?.CubicMeters));
+                    var filled = volume.CubicMeters / whole.CubicMeters;
+                    wet = mass / (volume.CubicMeters + (filled * Error(item.VolumeError, u.Volume?.CubicMeters)));
                 }
 
                 dryDensity = wet / (1 + w);

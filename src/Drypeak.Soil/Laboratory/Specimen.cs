@@ -9,6 +9,7 @@ namespace Drypeak.Soil.Laboratory;
 /// <param name="WetDensity">Wet density.</param>
 /// <param name="DryDensity">Dry density.</param>
 /// <param name="MoldVolume">Volume of the mold, where the data begin with masses.</param>
+/// <param name="SoilVolume">Volume of the soil, where the data begin with masses: the mold's, less what stays empty below its rim.</param>
 /// <param name="SetAside">Why the point is not fitted, or null where it is.</param>
 public sealed record Specimen(
     string Label,
@@ -16,6 +17,7 @@ public sealed record Specimen(
     Density WetDensity,
     Density DryDensity,
     Volume? MoldVolume,
+    Volume? SoilVolume,
     string? SetAside)
 {
     /// <summary>The phases of the specimen, or null where the density of solids is unknown or not above the dry density.</summary>

@@ -19,7 +19,7 @@ public static class SpecimenReduction
     public const double GreatestDryDensity = 1e10;
 
     /// <summary>Room for the arithmetic at an inclusive limit.</summary>
-    private const double Arithmetic = 1e-9;
+    internal const double Arithmetic = 1e-9;
 
     /// <summary>Reduces one specimen.</summary>
     /// <param name="measured">The specimen.</param>
@@ -35,7 +35,8 @@ public static class SpecimenReduction
         var moldPlace = measured.Mold is null ? "/mold" : place + "/mold";
 
         var givenWater = measured.Water.Reduce(place, faults);
-        var volume = VolumeOf(mold, moldPlace, units, faults);
+        var moldVolume = MoldVolumes.Of(mold, moldPlace, units, faults);
+        var volume = MoldVolumes.OfSoil(measured, mold, moldVolume, place, units, faults);
         var wetMass = WetMassOf(measured, mold, place, units, faults);
         var massDensity = wetMass is { } mass && volume is { } v ? mass / v : (Density?)null;
         var wet = Agreeing(
@@ -89,48 +90,7 @@ public static class SpecimenReduction
         }
 
         return new Specimen(measured.Label, w, wet ?? PhaseRelations.WetDensity(dryDensity, w), dryDensity,
-            massDensity is null ? null : volume, measured.SetAside);
-    }
-
-    /// <summary>The mold's volume: as given, from its dimensions, or by water; null where unknown.</summary>
-    public static Volume? VolumeOf(Mold? mold, string place, UnitSet units, ICollection<Fault> faults)
-    {
-        if (mold is null)
-        {
-            return null;
-        }
-
-        ReadOnlySpan<(Volume? Volume, string Name)> ways =
-        [
-            (mold.Volume, "the volume given"),
-            (mold.WaterFilling?.Volume, "the water that fills it"),
-            (mold is { Diameter: { } diameter, Height: { } height } ? Volume.OfCylinder(diameter, height) : null, "diameter and height"),
-        ];
-
-        (Volume Volume, string Name)? first = null;
-        foreach (var (volume, name) in ways)
-        {
-            if (volume is not { } other)
-            {
-                continue;
-            }
-
-            if (first is not { } taken)
-            {
-                first = (other, name);
-            }
-            else if (Math.Abs((other.CubicMeters / taken.Volume.CubicMeters) - 1) is var apart && apart > DensityTolerance * (1 + Arithmetic))
-            {
-                var fault = new Fault(place, "contradiction",
-                    $"By {taken.Name} the mold holds {ReaderText.Of(taken.Volume, units.Volume)}, by {name} {ReaderText.Of(other, units.Volume)}: {ReaderText.Percent(apart, 2)} apart, where {ReaderText.Percent(DensityTolerance)} is allowed. Correct one, or leave one out.");
-                if (!faults.Contains(fault))
-                {
-                    faults.Add(fault);
-                }
-            }
-        }
-
-        return first?.Volume;
+            massDensity is null ? null : moldVolume, massDensity is null ? null : volume, measured.SetAside);
     }
 
     private static Mass? WetMassOf(SpecimenMeasurement measured, Mold? mold, string place, UnitSet units, ICollection<Fault> faults)

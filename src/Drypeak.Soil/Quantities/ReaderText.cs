@@ -27,6 +27,9 @@ public static class ReaderText
     /// <summary>A mass: <c>6021.4 g</c>.</summary>
     public static string Of(Mass mass, MassUnit unit) => $"{Significant(mass.In(unit))} {unit.Code()}";
 
+    /// <summary>A length: <c>116.4 mm</c>.</summary>
+    public static string Of(Length length, LengthUnit unit) => $"{Significant(length.In(unit))} {unit.Code()}";
+
     /// <summary>A fraction as percent: <c>3.1 %</c>.</summary>
     public static string Percent(double fraction, int decimals = 1) => $"{Fixed(fraction * 100, decimals)} %";
 

@@ -71,6 +71,10 @@ public sealed record TestMethod
     /// <summary>How the method rounds a reported result; null where it says nothing, and <see cref="TestMethods.Reporting"/> has its defaults.</summary>
     public ReportingRule? Reporting { get; init; }
 
+    /// <summary>The method as the basis of a finding, with the document that a value of it comes from, and the reservation where there is one.</summary>
+    /// <param name="source">Source of the value.</param>
+    public string Cite(ValueSource source) => (source.Origin == Standard ? Title : $"{Title}; {source.Origin}") + (source.Read ? "" : " (from memory)");
+
     /// <summary>What the rammer does to the soil, from mass, drop, layers, blows and volume as nominal; null for a vibrating hammer.</summary>
     public CompactiveEffort? Effort => RammerMass is { } rammer && Drop is { } drop && BlowsPerLayer is { } blows
         ? CompactiveEffort.Of(rammer.Value, drop.Value, Layers.Value, blows.Value, MoldVolume.Value)

@@ -105,10 +105,15 @@ public sealed class ChartPictureTests(RunningService service)
     [InlineData("png", "scale=0.49", "/scale out-of-range")]
     [InlineData("png", "scale=4.1", "/scale out-of-range")]
     [InlineData("png", "scale=NaN", "/scale out-of-range")]
+    [InlineData("png", "width=2400&height=2400&scale=4", "/scale out-of-range")]
     [InlineData("png", "scale=2&scale=2", "/scale repeated-parameter")]
     [InlineData("svg", "width=500&width=500", "/width repeated-parameter")]
     [InlineData("svg", "scale=2", "/scale unknown-parameter")]
     [InlineData("pdf", "scale=2", "/scale unknown-parameter")]
+    [InlineData("svg", "theme=sepia", "/theme unknown-choice")]
+    [InlineData("pdf", "theme=Dark", "/theme unknown-choice")]
+    [InlineData("png", "theme=", "/theme unknown-choice")]
+    [InlineData("svg", "theme=dark&theme=dark", "/theme repeated-parameter")]
     [InlineData("svg", "colour=red", "/colour unknown-parameter")]
     [InlineData("svg", "Width=500", "/Width unknown-parameter")]
     [InlineData("png", "width=1&height=1&scale=9&zoom=2", "/width out-of-range,/height out-of-range,/scale out-of-range,/zoom unknown-parameter")]
@@ -122,6 +127,19 @@ public sealed class ChartPictureTests(RunningService service)
             Assert.Equal(400, refusal.Status);
             Assert.Equal(expected.Split(',').Order(), refusal.Faults.Order());
         }
+    }
+
+    [Theory]
+    [InlineData("light", "#FCFBF8")]
+    [InlineData("dark", "#161513")]
+    [InlineData("print", "#FFFFFF")]
+    public async Task A_theme_is_drawn_in_its_colors_by_link_and_by_post_in_the_same_bytes(string theme, string ground)
+    {
+        var linked = await service.BytesAsync($"{await ChartLink.OfSoundTest(service)}&theme={theme}");
+        using var posted = await service.PostAsync(Body.Sound, "image/svg+xml", $"{RunningService.MoistureDensity}?theme={theme}");
+        Assert.Equal(linked, await posted.Content.ReadAsByteArrayAsync(TestContext.Current.CancellationToken));
+        var paper = XDocument.Parse(System.Text.Encoding.UTF8.GetString(linked)).Root!.Element(Namespace + "rect")!;
+        Assert.Equal(ground, (string?)paper.Attribute("fill"));
     }
 
     [Fact]

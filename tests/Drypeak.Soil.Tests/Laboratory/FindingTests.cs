@@ -15,6 +15,10 @@ public class FindingTests
     private static readonly Oversize Coarse = new(0.094, 2.65, new WaterContent(0.01), 4.75);
     private static readonly MoistureDensityTest SixPoints = Points((8, 1752), (10, 1812), (12, 1853), (14, 1838), (16, 1787), (18, 1731));
 
+
+    /// <summary>A method without a tolerance on its mold and without a procedure for oversize.</summary>
+    private static readonly TestMethod OneLiter = TestMethodCatalogue.Find("bs-1377-4-3.3")!;
+
     private static readonly Provocation[] Table =
     [
         new("mixed-units", Severity.Error, "/specimens/3", Clay.With(3, specimen => specimen with { DryDensity = new Density(1.829) }), Clay),
@@ -46,10 +50,16 @@ public class FindingTests
         new("specific-gravity-unusual", Severity.Warning, "/specificGravity/value", Clay with { SpecificGravity = new(2.19, Measured: true) }, Clay with { SpecificGravity = new(2.2, Measured: true) }),
         new("mold-outside-tolerance", Severity.Warning, "/mold", Weighed with { Mold = Weighed.Mold! with { Volume = Volume.From(958.5, VolumeUnit.CubicCentimeter) } }, Weighed with { Mold = Weighed.Mold! with { Volume = Volume.From(956.5, VolumeUnit.CubicCentimeter) } }),
         new("mold-outside-tolerance", Severity.Warning, "/specimens/2/mold", Weighed.With(2, specimen => specimen with { Mold = new Mold { Volume = Volume.From(928, VolumeUnit.CubicCentimeter) } }), Weighed.With(2, specimen => specimen with { Mold = new Mold { Volume = Volume.From(930, VolumeUnit.CubicCentimeter) } })),
+        new("mold-outside-tolerance", Severity.Warning, "/mold/diameter", InMold(new Length(0.10201), new Length(0.1164)), InMold(new Length(0.1020), new Length(0.1164))),
+        new("mold-outside-tolerance", Severity.Warning, "/mold/heights", InMold(new Length(0.1016), Readings(0.1171, 0.1168)), InMold(new Length(0.1016), Readings(0.1169, 0.1168))),
+        new("mold-outside-tolerance", Severity.Warning, "/specimens/1/mold/diameter", InMold(new Length(0.1016), new Length(0.1164)).With(1, specimen => specimen with { Mold = new Mold { Diameter = new Length(0.1011), Height = new Length(0.1164) } }), InMold(new Length(0.1016), new Length(0.1164))),
+        new("mold-outside-tolerance", Severity.Note, "/mold", Weighed with { Method = OneLiter, Mold = Weighed.Mold! with { Volume = Volume.From(979.9, VolumeUnit.CubicCentimeter) } }, Weighed with { Method = OneLiter, Mold = Weighed.Mold! with { Volume = Volume.From(980, VolumeUnit.CubicCentimeter) } }),
         new("particles-above-limit", Severity.Warning, "/particlesAbove", Clay with { ParticlesAbove = new(4.75, 0.26) }, Clay with { ParticlesAbove = new(4.75, 0.25) }),
         new("oversize-above-limit", Severity.Warning, "/oversize/percent", Clay with { Oversize = Coarse with { Fraction = 0.26 } }, Clay with { Oversize = Coarse with { Fraction = 0.25 } }),
         new("oversize-above-limit", Severity.Warning, "/oversize/percent", Clay with { Method = null, Oversize = Coarse with { Fraction = 0.41 } }, Clay with { Method = null, Oversize = Coarse with { Fraction = 0.40 } }),
         new("oversize-above-limit", Severity.Warning, "/oversize/percent", Clay with { Method = null, Oversize = Coarse with { Fraction = 0.31, SieveMillimeters = 19 } }, Clay with { Method = null, Oversize = Coarse with { Fraction = 0.30, SieveMillimeters = 19 } }),
+        new("oversize-outside-method", Severity.Note, "/oversize", Clay with { Method = OneLiter, Oversize = Coarse }, Clay with { Oversize = Coarse }),
+        new("oversize-outside-method", Severity.Warning, "/oversize/sieve", Clay with { Oversize = Coarse with { SieveMillimeters = 19 } }, Clay with { Oversize = Coarse with { SieveMillimeters = 4.76 } }),
         new("oversize-not-corrected", Severity.Warning, "/oversize", Clay with { Oversize = Coarse with { SpecificGravity = null } }, Clay with { Oversize = Coarse with { SpecificGravity = null, Fraction = 0.05 } }),
         new("oversize-small", Severity.Note, "/oversize/percent", Clay with { Oversize = Coarse with { Fraction = 0.05 } }, Clay with { Oversize = Coarse with { Fraction = 0.0501 } }),
         new("wet-leg-not-parallel", Severity.Note, "/specimens/4", Clay.With(4, specimen => specimen with { DryDensity = new Density(1590) }), Clay),
@@ -141,6 +151,20 @@ public class FindingTests
         Assert.Contains("fit from 2.7213 on", finding.Message, StringComparison.Ordinal);
     }
 
+    /// <summary>What was read in the standard is cited as it stands; what was not says so.</summary>
+    [Fact]
+    public void A_finding_on_the_method_cites_the_method_and_says_what_is_from_memory()
+    {
+        string BasisOf(string code, MoistureDensityTest test) => Bench.Analyze(test).Findings.First(finding => finding.Code == code).Basis;
+        Assert.Equal("ASTM D698, method A (from memory)", BasisOf("mold-outside-tolerance", Weighed with { Mold = Weighed.Mold! with { Volume = Volume.From(960, VolumeUnit.CubicCentimeter) } }));
+        Assert.Equal("AASHTO T 99, method A", BasisOf("mold-outside-tolerance", InMold(new Length(0.103), new Length(0.1164))));
+        Assert.Equal("ASTM D698, method A", BasisOf("particles-above-limit", Clay with { ParticlesAbove = new(4.75, 0.3) }));
+        Assert.Equal("ASTM D698, method A", BasisOf("oversize-above-limit", Clay with { Oversize = Coarse with { Fraction = 0.3 } }));
+        Assert.Equal("ASTM D698, method A", BasisOf("oversize-outside-method", Clay with { Oversize = Coarse with { SieveMillimeters = 19 } }));
+        Assert.Equal("ASTM D698, method A (from memory)", BasisOf("wide-spacing", Points((9.8, 1742), (11.9, 1815), (14, 1858), (18.1, 1765))));
+        Assert.Equal("JIS A 1210, method A", BasisOf("too-few-specimens", Clay with { Method = TestMethodCatalogue.Find("jis-a-1210-a") }));
+    }
+
     [Fact]
     public void A_method_asks_for_its_own_number_of_specimens()
     {
@@ -157,6 +181,15 @@ public class FindingTests
         Assert.Null(result.Optimum);
         Assert.Superset(new HashSet<string> { "no-optimum", "specific-gravity-missing" }, result.Findings.Select(finding => finding.Code).ToHashSet());
     }
+
+    /// <summary>The weighed test by AASHTO T 99, method A, which has tolerances on both dimensions of its mold (as read).</summary>
+    private static MoistureDensityTest InMold(MeasuredLength diameter, MeasuredLength height) => Weighed with
+    {
+        Method = TestMethodCatalogue.Find("aashto-t99-a"),
+        Mold = new Mold { Mass = Weighed.Mold!.Mass, Diameter = diameter, Height = height },
+    };
+
+    private static MeasuredLength Readings(params double[] meters) => new() { Readings = [.. meters.Select(meter => new Length(meter))] };
 
     /// <summary>A finding that a test provokes, and the twin that does not.</summary>
     public sealed record Provocation(string Code, Severity Severity, string Place, MoistureDensityTest Provoking, MoistureDensityTest Clean)

@@ -15,6 +15,7 @@ public class GivenTwiceTests
     private const double JustBeyond = 1 + 2e-9;
 
     private static readonly Mold Liter = new() { Mass = Grams(4000), Volume = Volume.From(1, VolumeUnit.Liter) };
+    private static readonly Mold InMold = new() { Mass = Grams(4000), Diameter = new Length(0.1), Height = new Length(0.12) };
     private static readonly SpecimenMeasurement Base = new() { Label = "1", WetMass = Grams(1980), WaterContent = WaterContent.FromPercent(10) };
 
     /// <summary>What is given twice, its place, and the specimen and mold in which the second differs from the first by so large a share of the limit.</summary>
@@ -24,6 +25,9 @@ public class GivenTwiceTests
         { "wet density against mass and volume", "/specimens/0/wetDensity", limits => (Base with { WetDensity = new Density(1980 * (1 + (0.002 * limits))) }, Liter) },
         { "dry density against wet density and water", "/specimens/0/dryDensity", limits => (Base with { DryDensity = new Density(1800 * (1 + (0.002 * limits))) }, Liter) },
         { "dimensions against volume", "/mold", limits => (Base, Liter with { Diameter = new Length(0.1), Height = new Length(0.004 / (Math.PI * 0.01) * (1 + (0.002 * limits))) }) },
+        { "readings of the diameter against the diameter", "/mold/diameters", limits => (Base, InMold with { Diameter = Readings(0.1, 0.1 * (1 + (0.002 * limits))) }) },
+        { "readings of the height against the height", "/mold/heights", limits => (Base, InMold with { Height = Readings(0.12, 0.12 * (1 + (0.002 * limits))) }) },
+        { "readings of the depth against the depth, by the mold's height", "/specimens/0/depthsBelowRim", limits => (Base with { DepthBelowRim = Readings(0.003, 0.003 + (0.12 * 0.002 * limits)) }, InMold) },
         { "water filling against volume", "/mold", limits => (Base, Liter with { WaterFilling = new WaterFilling(new Mass(4), new Mass(4 + (1 + (0.002 * limits))), null, new Density(1000)) }) },
         { "water content against tins", "/specimens/0/waterContent", limits => (Base with { Tins = [Tin(20, 130, 120)], WaterContent = new WaterContent(0.1 + (0.001 * limits)) }, Liter) },
         { "number on wet mass against water content", "/specimens/0/wetBasis", limits => (Base with { WaterContentFromWetBasis = new WaterContent(0.1 + (0.001 * limits)) }, Liter) },
@@ -102,6 +106,9 @@ public class GivenTwiceTests
         var own = Base with { Mold = Liter with { Diameter = new Length(0.1), Height = new Length(0.14) } };
         Assert.Equal("/specimens/0/mold", Assert.Single(Bench.FaultsOf(Clay with { Specimens = [own], Mold = Liter })).Place);
     }
+
+    /// <summary>A length, and two readings whose mean is another.</summary>
+    private static MeasuredLength Readings(double given, double mean) => new() { Given = new Length(given), Readings = [new Length(mean * 0.999), new Length(mean * 1.001)] };
 
     private static IReadOnlyList<Fault> FaultsOf((SpecimenMeasurement Specimen, Mold Mold) given) =>
         Bench.FaultsOf(Clay with { Specimens = [given.Specimen], Mold = given.Mold });

@@ -15,6 +15,8 @@ public class WorkingTests
     private static readonly XNamespace MathMl = "http://www.w3.org/1998/Math/MathML";
     private static readonly Mold ByWater = new() { WaterFilling = new WaterFilling(Grams(4246 + 310), Grams(4246 + 310 + 941.3), Grams(310), new Density(998.2)) };
 
+    private static readonly Mold Read = new() { Mass = Grams(4246), Diameter = Readings(101.58, 101.63, 101.6), Height = Readings(116.4, 116.5, 116.2) };
+
     /// <summary>Tests that between them take every way to a step.</summary>
     public static TheoryData<string, MoistureDensityTest> Tests
     {
@@ -29,6 +31,9 @@ public class WorkingTests
                 { "dry densities", Clay },
                 { "wet and dry densities", Clay.WithEach(specimen => specimen with { WaterContent = null, WetDensity = new Density(specimen.DryDensity!.Value.KilogramsPerCubicMeter * 1.12) }).With(0, specimen => specimen with { WaterContent = WaterContent.FromPercent(12) }) },
                 { "wet masses and a mold by its dimensions", Weighed.WithEach(specimen => specimen with { WetMass = specimen.MoldAndWetSoil - Grams(4246), MoldAndWetSoil = null }) with { Mold = new Mold { Diameter = new Length(0.1016), Height = new Length(0.11632) } } },
+                { "readings of a mold", Weighed with { Mold = Read, Units = new UnitSet(Volume: VolumeUnit.CubicInch, Length: LengthUnit.Inch) } },
+                { "a mold below whose rim the soil ends", Weighed.WithEach(specimen => specimen with { DepthBelowRim = Readings(2.1, 2.4, 1.8) }).With(1, specimen => specimen with { DepthBelowRim = new Length(0.003) }) with { Mold = Read } },
+                { "a mold of known volume below whose rim the soil ends", Weighed.With(1, specimen => specimen with { DepthBelowRim = Readings(3.1) }) with { Mold = Read with { Volume = Volume.From(943, VolumeUnit.CubicCentimeter) } } },
                 { "a mold by water", Weighed with { Mold = ByWater, Units = new UnitSet(Mass: MassUnit.Pound, Volume: VolumeUnit.CubicInch) } },
                 { "a specimen's own mold", Weighed.With(2, specimen => specimen with { Mold = ByWater }) },
                 { "wet basis and carbide", Clay.WithEach(specimen => specimen with { WaterContent = null, WaterContentFromWetBasis = specimen.WaterContent }).With(1, specimen => specimen with { WaterContentFromWetBasis = null, WaterContentFromCarbide = specimen.WaterContentFromWetBasis }) },
@@ -161,4 +166,6 @@ public class WorkingTests
             Math.Abs(value - step.Value) <= 1e-9 * Math.Max(Math.Abs(step.Value), Math.Abs(value)),
             $"{step.Quantity}: {step.Substitution} is {value:R}, not {step.Value:R}");
     }
+
+    private static MeasuredLength Readings(params double[] millimeters) => new() { Readings = [.. millimeters.Select(reading => Length.From(reading, LengthUnit.Millimeter))] };
 }

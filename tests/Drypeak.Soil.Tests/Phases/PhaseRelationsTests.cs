@@ -119,7 +119,7 @@ public class PhaseRelationsTests
             Assert.True(WaterDensity.At(celsius + step).KilogramsPerCubicMeter < WaterDensity.At(celsius).KilogramsPerCubicMeter));
 
     private static Specimen Specimen(double dry, double w) =>
-        new("1", new WaterContent(w), new Density(dry * (1 + w)), new Density(dry), null, null);
+        new("1", new WaterContent(w), new Density(dry * (1 + w)), new Density(dry), null, null, null);
 
     private static void Near(double expected, double actual) => Assert.Equal(expected, actual, Math.Abs(expected) * 1e-12);
 

@@ -17,21 +17,24 @@ internal static class CoverageReview
 
     private static IEnumerable<Finding> TooFew(ReviewedTest review)
     {
-        var needed = review.Test.Method?.MinimumSpecimens?.Value ?? UsualMinimum;
+        var method = review.Test.Method;
+        var needed = method?.MinimumSpecimens?.Value ?? UsualMinimum;
         var kept = review.Kept.Count;
         if (kept < needed)
         {
-            var who = review.Test.Method?.MinimumSpecimens is { } ? review.Test.Method.Title + " asks" : "A compaction curve asks";
+            var who = method?.MinimumSpecimens is { } ? method.Title + " asks" : "A compaction curve asks";
             yield return FindingKinds.TooFewSpecimens.At("/specimens",
                 $"{who} for at least {needed} specimens; {kept} {(kept == 1 ? "is" : "are")} kept. Make {needed - kept} more, so that two stand on each side of the optimum.",
-                kept < 3 ? Severity.Error : Severity.Warning);
+                kept < 3 ? Severity.Error : Severity.Warning,
+                method?.MinimumSpecimens is { } asked ? method.Cite(asked.Source) : null);
         }
     }
 
     private static IEnumerable<Finding> Spacing(ReviewedTest review)
     {
-        var methods = review.Test.Method?.GreatestSpacingPercent?.Value;
-        var greatest = methods ?? UsualGreatestSpacing;
+        var method = review.Test.Method;
+        var methods = method?.GreatestSpacingPercent;
+        var greatest = methods?.Value ?? UsualGreatestSpacing;
         var sorted = review.Sorted;
         for (var i = 1; i < sorted.Count; i++)
         {
@@ -41,7 +44,8 @@ internal static class CoverageReview
             {
                 yield return FindingKinds.WideSpacing.At(PlaceOf(sorted[i].Index),
                     $"Specimens {drier.Label} and {wetter.Label} are {ReaderText.Fixed(apart, 1)} % water apart ({ReaderText.Of(drier.WaterContent)} and {ReaderText.Of(wetter.WaterContent)}), where {ReaderText.Significant(greatest)} % is the most. Make a specimen between them.",
-                    methods is null ? Severity.Note : Severity.Warning);
+                    methods is null ? Severity.Note : Severity.Warning,
+                    methods is null ? null : method!.Cite(methods.Source));
             }
         }
     }

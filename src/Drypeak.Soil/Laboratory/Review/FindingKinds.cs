@@ -13,7 +13,8 @@ public sealed record FindingKind(string Code, Severity Severity, string Meaning,
     /// <param name="place">JSON pointer.</param>
     /// <param name="message">The sentence with the numbers.</param>
     /// <param name="severity">Its severity where it is not the usual one.</param>
-    public Finding At(string place, string message, Severity? severity = null) => new(Code, severity ?? Severity, message, place, Basis);
+    /// <param name="basis">The very clause that it stands on, where a method names one.</param>
+    public Finding At(string place, string message, Severity? severity = null, string? basis = null) => new(Code, severity ?? Severity, message, place, basis ?? Basis);
 }
 
 /// <summary>Every kind of finding on a laboratory test, in one table.</summary>
@@ -36,9 +37,9 @@ public static class FindingKinds
         "Make another specimen on that side.",
         "ASTM D698 and D1557: two dry and two wet of the optimum (from memory)");
 
-    /// <summary>Neighbours too far apart.</summary>
+    /// <summary>Neighbors too far apart.</summary>
     public static readonly FindingKind WideSpacing = new("wide-spacing", Severity.Warning,
-        "Two neighbouring water contents are further apart than the method allows.",
+        "Two neighboring water contents are further apart than the method allows.",
         "Between them the curve is not held by anything, and the peak may lie there.",
         "Make a specimen between the two.",
         "ASTM D698 and D1557: about 2 % apart and not over 4 % (from memory); the method's own spacing where it names one");
@@ -101,7 +102,7 @@ public static class FindingKinds
 
     /// <summary>A value in another unit.</summary>
     public static readonly FindingKind MixedUnits = new("mixed-units", Severity.Error,
-        "A value is out of line with its neighbours by the factor between two units.",
+        "A value is out of line with its neighbors by the factor between two units.",
         "It was most likely written in another unit than the rest.",
         "Write all values of a kind in the unit that the request names.",
         "Ratio near 1000, 453.6 or 62.4 to the median of the other specimens");
@@ -167,7 +168,7 @@ public static class FindingKinds
         "The mold is outside the method's tolerance.",
         "Effort and volume are not those of the method.",
         "Calibrate the mold; check volume and unit.",
-        "The method's tolerance on volume and dimensions");
+        "The method's tolerance on volume, diameter and height; where none is at hand, a volume more than 2 % off is noted (common practice, no source)");
 
     /// <summary>Particles too large for the method.</summary>
     public static readonly FindingKind ParticlesAboveLimit = new("particles-above-limit", Severity.Warning,
@@ -182,6 +183,13 @@ public static class FindingKinds
         "The corrected values are computed, but outside the procedure.",
         "Use a larger mold, or a method for such material.",
         "ASTM D4718: up to 40 % on 4.75 mm, 30 % on 19 mm; the method's own limit where it names one");
+
+    /// <summary>A correction for oversize that the method does not have.</summary>
+    public static readonly FindingKind OversizeOutsideMethod = new("oversize-outside-method", Severity.Note,
+        "The method has no procedure for oversize, or parts the oversize at another sieve.",
+        "The corrected values are no result of that method, whatever they are by themselves.",
+        "Agree on the correction with who asked for the test, and report it as outside the method.",
+        "The method's own procedure; ASTM D4718 and AASHTO T 99 annex / T 224 for the correction");
 
     /// <summary>Oversize without a correction.</summary>
     public static readonly FindingKind OversizeNotCorrected = new("oversize-not-corrected", Severity.Warning,
@@ -230,7 +238,7 @@ public static class FindingKinds
     [
         MixedUnits, FractionsForPercent, ImpossibleDensity, DensityAboveSolids, AboveZeroAirVoids, TwoPeaks, NoOptimum,
         OptimumAtEdge, TooFewSpecimens, FewOnASide, WideSpacing, PointFarOff, TinsDisagree, RepeatedValues,
-        SpecificGravityUnusual, MoldOutsideTolerance, ParticlesAboveLimit, OversizeAboveLimit, OversizeNotCorrected,
+        SpecificGravityUnusual, MoldOutsideTolerance, ParticlesAboveLimit, OversizeAboveLimit, OversizeOutsideMethod, OversizeNotCorrected,
         WetLegNotParallel, SaturationAtOptimumUnusual, ModelsDisagree, PeakAdopted, OversizeSmall,
         SpecificGravityAssumed, SpecificGravityMissing, SpecimenSetAside, MethodNotGiven, EffortOutsideRange,
     ];

@@ -3,14 +3,14 @@ using Drypeak.Soil.TestMethods;
 
 namespace Drypeak.Soil.Laboratory.Review;
 
-/// <summary>What is wrong with solids, mold, particles and oversize, against the method and in themselves. Places are those of a laboratory request.</summary>
+/// <summary>What is wrong with solids, particles and oversize, against the method and in themselves. Places are those of a laboratory request.</summary>
 public static class MaterialReview
 {
     private const double LeastSpecificGravity = 2.2;
     private const double GreatestSpecificGravity = 3.2;
 
     internal static IEnumerable<Finding> Of(ReviewedTest review) =>
-        [.. (review.Test.SpecificGravity is { } gravity ? SpecificGravity(gravity) : NoSpecificGravity()), .. MoldTolerance(review), .. Particles(review.Test), .. (review.Test.Oversize is { } oversize ? Oversize(oversize, review.Test.Method) : []), .. Method(review.Test)];
+        [.. (review.Test.SpecificGravity is { } gravity ? SpecificGravity(gravity) : NoSpecificGravity()), .. MoldReview.Of(review), .. Particles(review.Test), .. (review.Test.Oversize is { } oversize ? Oversize(oversize, review.Test.Method) : []), .. Method(review.Test)];
 
     /// <summary>What is said of a specific gravity.</summary>
     public static IEnumerable<Finding> SpecificGravity(SpecificGravity gravity)
@@ -34,34 +34,14 @@ public static class MaterialReview
             "No specific gravity was given: there are no saturations, no lines and no saturation model, and no check against the zero-air-voids line. Give it, marked as assumed if it was not measured."),
     ];
 
-    private static IEnumerable<Finding> MoldTolerance(ReviewedTest review)
-    {
-        if (review.Test.Method is not { MoldVolume: { Value: var nominal, Tolerance: { } tolerance } } method)
-        {
-            yield break;
-        }
-
-        var units = review.Test.Units;
-        var volumes = review.Result.Specimens
-            .Select((specimen, i) => (specimen.MoldVolume, Place: review.Test.Specimens[i].Mold is null ? "/mold" : ReviewedTest.PlaceOf(i) + "/mold"))
-            .Where(item => item.MoldVolume is { }).DistinctBy(item => item.Place);
-        foreach (var (volume, place) in volumes)
-        {
-            if (Math.Abs(volume!.Value.CubicMeters - nominal.CubicMeters) > tolerance.CubicMeters * (1 + 1e-9))
-            {
-                yield return FindingKinds.MoldOutsideTolerance.At(place,
-                    $"The mold holds {ReaderText.Of(volume.Value, units.Volume)}; {method.Title} asks for {ReaderText.Of(nominal, units.Volume)} ± {ReaderText.Of(tolerance, units.Volume)}. Calibrate it; check volume and unit.");
-            }
-        }
-    }
-
     private static IEnumerable<Finding> Particles(MoistureDensityTest test)
     {
-        if (test is { Method: { OversizeSieveMillimeters.Value: var sieve, OversizeLimitPercent.Value: var limit } method, ParticlesAbove: { } particles }
+        if (test is { Method: { OversizeSieveMillimeters.Value: var sieve, OversizeLimitPercent: { Value: var limit, Source: var source } } method, ParticlesAbove: { } particles }
             && particles.SieveMillimeters >= sieve && particles.Fraction * 100 > limit * (1 + 1e-9))
         {
             yield return FindingKinds.ParticlesAboveLimit.At("/particlesAbove",
-                $"{ReaderText.Percent(particles.Fraction)} of the material stays on {ReaderText.Significant(particles.SieveMillimeters)} mm; {method.Title} allows {ReaderText.Significant(limit)} % on {ReaderText.Significant(sieve)} mm. Use the method for coarser material.");
+                $"{ReaderText.Percent(particles.Fraction)} of the material stays on {ReaderText.Significant(particles.SieveMillimeters)} mm; {method.Title} allows {ReaderText.Significant(limit)} % on {ReaderText.Significant(sieve)} mm. Use the method for coarser material.",
+                basis: method.Cite(source));
         }
     }
 
@@ -75,7 +55,13 @@ public static class MaterialReview
         if (oversize.Fraction > limit * (1 + 1e-9))
         {
             yield return FindingKinds.OversizeAboveLimit.At("/oversize/percent",
-                $"Oversize is {ReaderText.Percent(oversize.Fraction)} of the dry mass; {(methods is null ? "the correction" : method!.Title)} is valid to {ReaderText.Percent(limit, 0)}. The corrected values are outside the procedure: use a larger mold or another method.");
+                $"Oversize is {ReaderText.Percent(oversize.Fraction)} of the dry mass; {(methods is null ? "the correction" : method!.Title)} is valid to {ReaderText.Percent(limit, 0)}. The corrected values are outside the procedure: use a larger mold or another method.",
+                basis: method?.OversizeLimitPercent is { } asked ? method.Cite(asked.Source) : null);
+        }
+
+        if (method is not null && oversize is { SpecificGravity: { }, Fraction: > 0 } && OutsideMethod(oversize, method) is { } outside)
+        {
+            yield return outside;
         }
 
         if (oversize.Fraction > OversizeCorrection.NeededAbove * (1 + 1e-9))
@@ -91,6 +77,23 @@ public static class MaterialReview
             yield return FindingKinds.OversizeSmall.At("/oversize/percent",
                 $"Oversize is {ReaderText.Percent(oversize.Fraction)} of the dry mass: up to {ReaderText.Percent(OversizeCorrection.NeededAbove, 0)} the standards ask for no correction. It is computed all the same.");
         }
+    }
+
+    /// <summary>Whether the method has a procedure for this oversize at all.</summary>
+    private static Finding? OutsideMethod(Oversize oversize, TestMethod method)
+    {
+        if (method.OversizeLimitPercent is null)
+        {
+            return FindingKinds.OversizeOutsideMethod.At("/oversize",
+                $"{method.Title} has no procedure for oversize that is at hand: the corrected values are ASTM D4718's. Agree on them, and report them as outside the method.",
+                basis: $"No procedure for oversize in the catalogue's row of {method.Title}; ASTM D4718");
+        }
+
+        return method.OversizeSieveMillimeters is { } asked && oversize.SieveMillimeters is { } sieve && Math.Abs(sieve - asked.Value) > 0.01 * asked.Value
+            ? FindingKinds.OversizeOutsideMethod.At("/oversize/sieve",
+                $"The oversize was parted on {ReaderText.Significant(sieve)} mm; {method.Title} parts it on {ReaderText.Significant(asked.Value)} mm. Name the method that goes with the sieve, or report the corrected values as outside it.",
+                Severity.Warning, method.Cite(asked.Source))
+            : null;
     }
 
     private static IEnumerable<Finding> Method(MoistureDensityTest test)

@@ -33,6 +33,12 @@ internal static class Formulas
     public static readonly Formula VolumeOfCylinder = new("V = π·d²·h/4",
         Formula("V", "=", Over(Row("π", Squared("d"), "h"), "4")), Reduction);
 
+    public static readonly Formula MeanOfReadings = new("x = (x1 + … + xn)/n",
+        Formula("x", "=", Over(Row(Sub("x", "1"), "+", "…", "+", Sub("x", "n")), "n")), "Arithmetic mean of the readings");
+
+    public static readonly Formula VolumeOfSoil = new("V = Vm·(h − z)/h",
+        Formula("V", "=", Sub("V", "m"), Over(Row("h", "−", "z"), "h")), "Geometry of a cylinder; BS 1377-4 cl. 3.7 (from memory)");
+
     public static readonly Formula VolumeByWater = new("V = (m2 − m1)/ρw",
         Formula("V", "=", Over(Row(Sub("m", "2"), "−", Sub("m", "1")), RhoW)), "ASTM D698, calibration of the mold by water (from memory)");
 

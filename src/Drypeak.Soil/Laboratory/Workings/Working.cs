@@ -61,9 +61,11 @@ public static class Working
         {
             var of = $" of specimen {specimen.Label}";
             WaterContent(measured, specimen, of);
-            if (specimen.MoldVolume is { } volume)
+            if (specimen is { MoldVolume: { } moldVolume, SoilVolume: { } volume })
             {
-                MoldVolume(measured.Mold?.Over(test.Mold) ?? test.Mold!, volume);
+                var mold = measured.Mold?.Over(test.Mold) ?? test.Mold!;
+                MoldVolume(mold, moldVolume);
+                SoilVolume(measured.DepthBelowRim, mold, moldVolume, volume, of);
                 var mass = WetMass(measured, of);
                 var factor = test.Units.Mass.InKilograms() / test.Units.Volume.InCubicMeters() / DensityUnit.InKilogramsPerCubicMeter();
                 Add("wet density" + of, Formulas.WetDensity, $"{Number(mass)}/{Number(volume.In(test.Units.Volume))}{Factor(factor)}",
@@ -151,7 +153,14 @@ public static class Working
 
         private void MoldVolume(Mold mold, Volume volume)
         {
-            if (mold.Volume is { } || !_shown.Add(test.Mold is { } shared && ReferenceEquals(mold, shared) ? shared : mold))
+            if (!_shown.Add(mold))
+            {
+                return;
+            }
+
+            Readings("diameter of the mold", mold.Diameter);
+            Readings("height of the mold", mold.Height);
+            if (mold.Volume is { })
             {
                 return;
             }
@@ -169,6 +178,32 @@ public static class Working
                 Add("volume of the mold", Formulas.VolumeOfCylinder,
                     $"{Number(Math.PI)}*{Number(mold.Diameter!.Value.In(test.Units.Length))}^2*{Number(mold.Height!.Value.In(test.Units.Length))}/4{Factor(length * length * length / test.Units.Volume.InCubicMeters())}",
                     value, test.Units.Volume.Symbol());
+            }
+        }
+
+        /// <summary>What the soil takes up where it ends below the rim.</summary>
+        private void SoilVolume(MeasuredLength? depth, Mold mold, Volume whole, Volume soil, string of)
+        {
+            if (depth is null)
+            {
+                return;
+            }
+
+            Readings("depth below the rim" + of, depth);
+            string In(MeasuredLength length) => Number(length.Value.In(test.Units.Length));
+            Add("volume" + of, Formulas.VolumeOfSoil,
+                $"{Number(whole.In(test.Units.Volume))}*({In(mold.Height!)} - {In(depth)})/{In(mold.Height!)}",
+                soil.In(test.Units.Volume), test.Units.Volume.Symbol());
+        }
+
+        /// <summary>The mean of readings, where it is what is reckoned with.</summary>
+        private void Readings(string quantity, MeasuredLength? length)
+        {
+            if (length is { Given: null, Mean: { } mean, Readings: { Count: > 1 } readings })
+            {
+                Add(quantity, Formulas.MeanOfReadings,
+                    $"({string.Join(" + ", readings.Select(reading => Number(reading.In(test.Units.Length))))})/{readings.Count}",
+                    mean.In(test.Units.Length), test.Units.Length.Code());
             }
         }
 
