@@ -56,6 +56,9 @@ internal sealed class PerturbedChain
 
     public int SpecimenCount => _specimens.Count;
 
+    /// <summary>The specimens' labels, in the order of the points.</summary>
+    public IEnumerable<string> Labels => _specimens.Select(item => item.Specimen.Label);
+
     /// <summary>The points with these errors, each in standard uncertainties.</summary>
     public CompactionData Points(double[] draws)
     {

@@ -129,6 +129,22 @@ public sealed class ChartPictureTests(RunningService service)
         }
     }
 
+    /// <summary>By hand: 1.96 · 0.3 % and, of 1 % of the mold's volume, 1.96 · 1 % of each dry density.</summary>
+    [Fact]
+    public async Task Specimens_have_error_bars_where_the_request_gives_uncertainties_and_none_elsewhere()
+    {
+        Assert.DoesNotContain((await Draw(Body.Sound)).Descendants(), element => (string?)element.Attribute("class") == "error-bars");
+        var answer = await service.AnswerAsync(Body.With("/uncertainty", """{"waterContent":0.3,"volume":9.44}"""));
+        Assert.Single((await Draw(Body.With("/uncertainty", """{"waterContent":0.3,"volume":9.44}"""))).Descendants(), element => (string?)element.Attribute("class") == "error-bars");
+        var chart = ChartLink.Unpack(ChartLink.Data(answer.Text("/links/svg")!));
+        foreach (var specimen in chart["specimens"]!.AsArray())
+        {
+            var (w, density) = ((double)specimen!["waterContent"]! / 100, (double)specimen["dryDensity"]!);
+            Assert.Equal(1.96 * 0.3, (double)specimen["waterContentPlusMinus"]!, 0.001);
+            Assert.Equal(1.96 * density * Math.Sqrt(Math.Pow(0.01, 2) + Math.Pow(0.003 / (1 + w), 2)), (double)specimen["dryDensityPlusMinus"]!, 0.0005);
+        }
+    }
+
     [Theory]
     [InlineData("light", "#FCFBF8")]
     [InlineData("dark", "#161513")]
