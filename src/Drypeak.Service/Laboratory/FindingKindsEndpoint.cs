@@ -1,15 +1,17 @@
 using Drypeak.Service.Charts;
 using Drypeak.Service.Hosting;
+using Drypeak.Soil.FieldDensity.Review;
 using Drypeak.Soil.Laboratory.Review;
+using Drypeak.Soil.References;
 
 namespace Drypeak.Service.Laboratory;
 
 /// <summary><c>GET /v1/findings</c>: what each kind of finding means.</summary>
 internal static class FindingKindsEndpoint
 {
-    private static readonly IReadOnlyList<FindingKindAnswer> Kinds =
+    internal static IReadOnlyList<FindingKindAnswer> Kinds { get; } =
     [
-        .. FindingKinds.All.Append(ChartAddress.NoAddress).Select(kind => new FindingKindAnswer(
+        .. FindingKinds.All.Concat(FieldFindingKinds.All).Concat(ReferenceFindingKinds.All).Append(ChartAddress.NoAddress).Select(kind => new FindingKindAnswer(
             kind.Code, kind.Severity.ToString().ToLowerInvariant(), kind.Meaning, kind.Why, kind.Remedy, kind.Basis)),
     ];
 

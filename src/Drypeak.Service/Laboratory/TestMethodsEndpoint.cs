@@ -26,13 +26,15 @@ namespace Drypeak.Service.Laboratory;
 /// <param name="MinimumSpecimens">Fewest specimens.</param>
 /// <param name="RecommendedSpacing">Spacing of water contents, percentage points.</param>
 /// <param name="GreatestSpacing">Greatest spacing of water contents, percentage points.</param>
+/// <param name="Reporting">How the result is rounded; null where the method says nothing that is at hand.</param>
 public sealed record TestMethodAnswer(
     string Code, string Title, string Summary, string Standard, string Clause,
     CatalogueValue MoldVolume, CatalogueValue? MoldDiameter, CatalogueValue? MoldHeight,
     CatalogueValue? RammerMass, CatalogueValue? Drop, CatalogueValue Layers, CatalogueValue? BlowsPerLayer, CatalogueValue? VibrationPerLayer,
     double? ComputedEffort, CatalogueValue? NominalEffort,
     CatalogueValue? LargestParticle, CatalogueValue? OversizeSieve, CatalogueValue? OversizeLimit,
-    CatalogueValue? MinimumSpecimens, CatalogueValue? RecommendedSpacing, CatalogueValue? GreatestSpacing)
+    CatalogueValue? MinimumSpecimens, CatalogueValue? RecommendedSpacing, CatalogueValue? GreatestSpacing,
+    CatalogueReporting? Reporting)
 {
     internal static TestMethodAnswer Of(TestMethod method) => new(
         method.Code, method.Title, method.Summary, method.Standard, method.Clause,
@@ -51,7 +53,8 @@ public sealed record TestMethodAnswer(
         method.OversizeLimitPercent is { } limit ? CatalogueValue.Of(limit, Same, "%") : null,
         method.MinimumSpecimens is { } fewest ? CatalogueValue.Of(fewest, Same, "") : null,
         method.RecommendedSpacingPercent is { } spacing ? CatalogueValue.Of(spacing, Same, "%") : null,
-        method.GreatestSpacingPercent is { } greatest ? CatalogueValue.Of(greatest, Same, "%") : null);
+        method.GreatestSpacingPercent is { } greatest ? CatalogueValue.Of(greatest, Same, "%") : null,
+        method.Reporting is { } rule ? CatalogueReporting.Of(rule) : null);
 
     private static double InMillimeters(Length length) => length.In(LengthUnit.Millimeter);
 
@@ -76,10 +79,21 @@ public sealed record CatalogueValue(double Value, double? Tolerance, string Unit
         new(Math.Round(inUnit(sourced.Value), Decimals), sourced.Tolerance is { } tolerance ? Math.Round(inUnit(tolerance), Decimals) : null, unit, sourced.Source.Origin, sourced.Source.Read);
 }
 
+/// <summary>How a method rounds its result, halves to the even digit.</summary>
+/// <param name="WaterContent" example="to 0.1 %">Optimum water content.</param>
+/// <param name="DryDensity" example="to 0.1 lb/ft³">Maximum dry density.</param>
+/// <param name="Source" example="ASTM D698">Where it comes from.</param>
+/// <param name="Read" example="true">Whether it was read there; else it is from memory.</param>
+public sealed record CatalogueReporting(string WaterContent, string DryDensity, string Source, bool Read)
+{
+    internal static CatalogueReporting Of(ReportingRule rule) => new(
+        rule.WaterContent.Describe("%"), rule.DryDensity.Describe(rule.DryDensityUnit.Symbol()), rule.Source.Origin, rule.Source.Read);
+}
+
 /// <summary><c>GET /v1/test-methods</c> and <c>/v1/test-methods/{code}</c>.</summary>
 internal static class TestMethodsEndpoint
 {
-    private static readonly IReadOnlyList<TestMethodAnswer> Methods = [.. TestMethodCatalogue.All.Select(TestMethodAnswer.Of)];
+    internal static IReadOnlyList<TestMethodAnswer> Methods { get; } = [.. TestMethodCatalogue.All.Select(TestMethodAnswer.Of)];
 
     public static void MapTestMethods(this IEndpointRouteBuilder app)
     {

@@ -1,4 +1,7 @@
+using Drypeak.Service.Pages.Catalogues;
 using Drypeak.Service.Pages.Laboratory;
+using Drypeak.Service.Pages.Preparation;
+using Microsoft.AspNetCore.Components;
 
 namespace Drypeak.Service.Pages;
 
@@ -10,7 +13,15 @@ internal static class PageEndpoints
     {
         PageFiles.Map(app);
         LaboratoryPageEndpoints.Map(app);
+        SpecimenSheetPageEndpoint.Map(app);
+        MapStill<TestMethodsPage>(app, "/test-methods");
+        MapStill<FindingsPage>(app, "/findings");
     }
+
+    /// <summary>A page that is the same for all who ask.</summary>
+    private static void MapStill<TPage>(IEndpointRouteBuilder app, string address)
+        where TPage : IComponent =>
+        app.MapMethods(address, [HttpMethods.Get, HttpMethods.Head], () => new PageResult<TPage>(new Dictionary<string, object?>())).ExcludeFromDescription();
 
     /// <summary>The page for an unknown address; it sets no status of its own.</summary>
     public static IResult NotFound(HttpContext _) => new PageResult<NotFoundPage>(new Dictionary<string, object?>());

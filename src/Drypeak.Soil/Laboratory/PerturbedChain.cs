@@ -80,7 +80,7 @@ internal sealed class PerturbedChain
                 w += (perturbed.WaterContent.Fraction - item.Tins[t].WaterContent.Fraction) / item.Tins.Count;
             }
 
-            w = Math.Clamp(w + Error(item.WaterError, u.WaterContent?.Fraction), 0, SpecimenReduction.GreatestWaterContent);
+            w = Math.Clamp(w + Error(item.WaterError, u.WaterContent?.Fraction), 0, MeasuredWater.Greatest);
             var dryDensity = item.Specimen.DryDensity.KilogramsPerCubicMeter;
             if (!item.DryDensityGiven)
             {

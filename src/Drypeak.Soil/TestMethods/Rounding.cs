@@ -46,6 +46,15 @@ public abstract record Rounding
         return ApplyToFinite(value);
     }
 
+    /// <summary>The rule in words: <c>to 0.1 lb/ft³</c>, <c>to 2 significant figures</c>.</summary>
+    /// <param name="unitSymbol">The symbol for readers: <c>%</c>, <c>Mg/m³</c>.</param>
+    public string Describe(string unitSymbol) => this switch
+    {
+        Step step => string.Create(CultureInfo.InvariantCulture, $"to {step.Size} {unitSymbol}"),
+        SignificantFigures figures => string.Create(CultureInfo.InvariantCulture, $"to {figures.Count} significant figures"),
+        _ => throw new InvalidOperationException("There is no third kind of rounding."),
+    };
+
     private protected abstract string ApplyToFinite(double value);
 
     private sealed record Step(decimal Size) : Rounding

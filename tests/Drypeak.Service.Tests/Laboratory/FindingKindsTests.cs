@@ -32,6 +32,7 @@ public sealed class FindingKindsTests(RunningService service)
     [InlineData("mold-outside-tolerance", "/mold/volume", "958", "/mold/volume", "956")]
     [InlineData("particles-above-limit", "/particlesAbove", "{\"sieve\":4.75,\"percent\":30}", "/particlesAbove", "{\"sieve\":4.75,\"percent\":20}")]
     [InlineData("oversize-above-limit", "/oversize", "{\"percent\":30,\"specificGravity\":2.65}", "/oversize", "{\"percent\":20,\"specificGravity\":2.65}")]
+    [InlineData("oversize-outside-method", "/oversize", "{\"percent\":20,\"specificGravity\":2.65,\"sieve\":19}", "/oversize", "{\"percent\":20,\"specificGravity\":2.65,\"sieve\":4.75}")]
     [InlineData("oversize-not-corrected", "/oversize", "{\"percent\":6}", "/oversize", "{\"percent\":6,\"specificGravity\":2.65}")]
     [InlineData("specimen-set-aside", "/specimens/0/setAside", "\"torn\"", "/specimens/0/setAside", "null")]
     [InlineData("method-not-given", "/method", "null", "/method", "\"custom\"")]

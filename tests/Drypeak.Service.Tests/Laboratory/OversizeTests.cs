@@ -57,6 +57,21 @@ public sealed class OversizeTests(RunningService service)
         Assert.Equal(JsonValueKind.Null, answer.GetProperty("corrected").ValueKind);
     }
 
+    /// <summary>What is reported of the corrected peak follows the method too: ASTM D698 to 0.1 lb/ft³, BS 1377-4 to 0.01 Mg/m³ and two significant figures (from memory).</summary>
+    [Theory]
+    [InlineData("astm-d698-a", "lb/ft3", 116.0, @"^\d+\.\d %$", @"^\d+\.\d lb/ft³$")]
+    [InlineData("astm-d698-a", "Mg/m3", 1.85, @"^\d+\.\d %$", @"^\d\.\d\d Mg/m³$")]
+    [InlineData("bs-1377-4-3.3", "Mg/m3", 1.85, @"^\d\d %$", @"^\d\.\d\d Mg/m³$")]
+    [InlineData("bs-1377-4-3.3", "kg/m3", 1850, @"^\d\d %$", @"^\d{3}0 kg/m³$")]
+    public async Task The_corrected_peak_is_reported_as_the_method_says(string method, string unit, double density, string water, string dry)
+    {
+        var answer = await service.AnswerAsync(Body.With(
+            ("/method", $"\"{method}\""), ("/units/density", $"\"{unit}\""), ("/oversize", """{"percent":10,"specificGravity":2.65}"""),
+            ("/curve", string.Create(System.Globalization.CultureInfo.InvariantCulture, $$$"""{"adopted":{"waterContent":14,"maximumDryDensity":{{{density}}},"reason":"by hand"}}"""))));
+        Assert.Matches(water, answer.Text("/corrected/reported/waterContent"));
+        Assert.Matches(dry, answer.Text("/corrected/reported/maximumDryDensity"));
+    }
+
     /// <summary>ASTM D698, method A: up to 25 % on 4.75 mm.</summary>
     [Theory]
     [InlineData("25", false)]

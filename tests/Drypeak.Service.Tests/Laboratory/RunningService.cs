@@ -44,20 +44,20 @@ public class RunningService : IDisposable
         return await Client.SendAsync(request, TestContext.Current.CancellationToken);
     }
 
-    /// <summary>Posts a laboratory test that has to be computed.</summary>
-    public async Task<JsonElement> AnswerAsync(string body)
+    /// <summary>Posts a laboratory test, or another job, that has to be computed.</summary>
+    public async Task<JsonElement> AnswerAsync(string body, string address = MoistureDensity)
     {
-        using var response = await PostAsync(body);
+        using var response = await PostAsync(body, address: address);
         var text = await TextOf(response);
         Assert.True(response.StatusCode == HttpStatusCode.OK, text);
         Assert.Equal("application/json", response.Content.Headers.ContentType?.MediaType);
         return JsonElement.Parse(text);
     }
 
-    /// <summary>Posts a laboratory test that has to be refused.</summary>
-    public async Task<Refusal> RefusalAsync(string body)
+    /// <summary>Posts a laboratory test, or another job, that has to be refused.</summary>
+    public async Task<Refusal> RefusalAsync(string body, string address = MoistureDensity)
     {
-        using var response = await PostAsync(body);
+        using var response = await PostAsync(body, address: address);
         return await Refusal.Of(response);
     }
 

@@ -13,6 +13,9 @@ public sealed class TraceTests(RunningService service)
         Body.With(("/trace", "true"), ("/oversize", """{"percent":9.4,"specificGravity":2.7}"""), ("/curve", """{"adopted":{"waterContent":14,"maximumDryDensity":1.85,"reason":"by hand"}}""")),
         Body.With(("/trace", "true"), ("/method", "\"custom\""), ("/effort", """{"rammerMass":2495,"drop":305,"layers":3,"blows":25}""")),
         Body.With(("/trace", "true"), ("/mold", """{"mass":4250,"diameter":101.6,"height":116.4}""")),
+        Body.With(
+            ("/trace", "true"), ("/units/length", "\"in\""), ("/mold", """{"mass":4250,"diameters":[3.999,4.001,4.002],"heights":[4.58,4.59]}"""),
+            ("/specimens/1/depthBelowRim", "0.12"), ("/specimens/2/depthsBelowRim", "[0.11,0.13,0.1]")),
         Body.With(("/trace", "true"), ("/mold", """{"empty":4550,"withWater":5491.6,"plate":300,"waterTemperature":24}""")),
         Body.With(("/trace", "true"), ("/waterDensity", "0.9975")),
         Body.With(
@@ -74,6 +77,7 @@ public sealed class TraceTests(RunningService service)
         Assert.Equal(answer.Number("/optimum/saturation"), values["saturation at the optimum"]);
         Assert.Equal(answer.Number("/corrected/maximumDryDensity"), values["maximum dry density of the total material"]);
         Assert.Equal(answer.Number("/corrected/waterContent"), values["optimum water content of the total material"]);
+        Assert.Equal(answer.Number("/method/effort/computed"), values["compactive effort"]);
         Assert.All(answer.At("/specimens").EnumerateArray(), specimen =>
         {
             var of = $" of specimen {specimen.Text("/label")}";

@@ -109,4 +109,20 @@ public sealed class UnitsTests(RunningService service)
 
         return Body.With([.. edits]);
     }
+
+    /// <summary>The parabola's coefficients in the caller's unit give the fitted densities in that unit.</summary>
+    [Theory]
+    [InlineData("kg/m3", "kg/m³")]
+    [InlineData("lb/ft3", "lb/ft³")]
+    [InlineData("kN/m3", "kN/m³")]
+    public async Task Parameters_of_the_curve_are_in_the_unit_of_density_per_percent(string unit, string symbol)
+    {
+        var answer = await service.AnswerAsync(Body.With(("/units/density", $"\"{unit}\""), ("/curve", """{"model":"parabola"}""")));
+        var parameters = answer.At("/curve/parameters");
+        Assert.Equal([symbol, symbol + " per %", symbol + " per %²"], new[] { "constant", "linear", "quadratic" }.Select(name => parameters.GetProperty(name).Text("/unit")));
+        double Value(string name) => parameters.GetProperty(name).Number("/value");
+        Assert.All(answer.At("/curve/residuals").EnumerateArray().Zip(answer.Numbers("/specimens", "waterContent")), pair =>
+            Assert.Equal(pair.First.Number("/fitted"), Value("constant") + (pair.Second * (Value("linear") + (pair.Second * Value("quadratic")))), 1e-9 * pair.First.Number("/fitted")));
+        Assert.All(parameters.EnumerateObject(), parameter => Assert.True(parameter.Value.Number("/standardError") > 0));
+    }
 }

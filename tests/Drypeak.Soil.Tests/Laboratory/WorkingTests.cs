@@ -119,7 +119,7 @@ public class WorkingTests
         var steps = Working.Of(test, Bench.Analyze(test)).Select(step => step.Quantity).ToList();
         string[] firstAndLast =
         [
-            "density of water", "water content of specimen 1", "volume of the mold", "mass of wet soil of specimen 1", "wet density of specimen 1", "dry density of specimen 1",
+            "density of water", "compactive effort", "water content of specimen 1", "volume of the mold", "mass of wet soil of specimen 1", "wet density of specimen 1", "dry density of specimen 1",
             "void ratio of specimen 1", "porosity of specimen 1", "saturation of specimen 1", "air voids of specimen 1", "water content of specimen 2",
         ];
         Assert.Equal(firstAndLast, steps[..firstAndLast.Length]);

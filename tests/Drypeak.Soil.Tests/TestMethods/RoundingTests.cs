@@ -178,4 +178,12 @@ public class RoundingTests
         Gen.OneOf(Steps.Select(Rounding.ToStep), Gen.Int[1, 6].Select(Rounding.ToSignificantFigures));
 
     private static decimal Decimal(string text) => decimal.Parse(text, CultureInfo.InvariantCulture);
+
+    [Fact]
+    public void A_rounding_says_itself_in_words()
+    {
+        Assert.Equal("to 0.1 lb/ft³", Rounding.ToStep(0.1m).Describe("lb/ft³"));
+        Assert.Equal("to 10 kg/m³", Rounding.ToStep(10m).Describe("kg/m³"));
+        Assert.Equal("to 2 significant figures", Rounding.ToSignificantFigures(2).Describe("%"));
+    }
 }

@@ -116,4 +116,7 @@ internal static class AnswerWords
         var (below, above) = (Number(value - lower, decimals), Number(upper - value, decimals));
         return below == above ? $"± {above} {unit}" : $"+{above} −{below} {unit}";
     }
+
+    /// <summary>The weight of a finding as a word.</summary>
+    public static string SeverityWord(string severity) => severity switch { "error" => "Error", "warning" => "Warning", _ => "Note" };
 }

@@ -37,9 +37,9 @@ public static class FindingKinds
         "Make another specimen on that side.",
         "ASTM D698 and D1557: two dry and two wet of the optimum (from memory)");
 
-    /// <summary>Neighbours too far apart.</summary>
+    /// <summary>Neighbors too far apart.</summary>
     public static readonly FindingKind WideSpacing = new("wide-spacing", Severity.Warning,
-        "Two neighbouring water contents are further apart than the method allows.",
+        "Two neighboring water contents are further apart than the method allows.",
         "Between them the curve is not held by anything, and the peak may lie there.",
         "Make a specimen between the two.",
         "ASTM D698 and D1557: about 2 % apart and not over 4 % (from memory); the method's own spacing where it names one");
@@ -102,7 +102,7 @@ public static class FindingKinds
 
     /// <summary>A value in another unit.</summary>
     public static readonly FindingKind MixedUnits = new("mixed-units", Severity.Error,
-        "A value is out of line with its neighbours by the factor between two units.",
+        "A value is out of line with its neighbors by the factor between two units.",
         "It was most likely written in another unit than the rest.",
         "Write all values of a kind in the unit that the request names.",
         "Ratio near 1000, 453.6 or 62.4 to the median of the other specimens");

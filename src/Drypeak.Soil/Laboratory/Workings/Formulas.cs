@@ -57,6 +57,9 @@ internal static class Formulas
     public static readonly Formula WetMass = new("m = m2 − m1",
         Formula("m", "=", Sub("m", "2"), "−", Sub("m", "1")), Reduction);
 
+    public static readonly Formula MassWithoutPlate = new("m = m1 − mp",
+        Formula("m", "=", Sub("m", "1"), "−", Sub("m", "p")), Reduction);
+
     public static readonly Formula WetDensity = new("ρ = m/V",
         Formula("ρ", "=", Over("m", "V")), Reduction);
 

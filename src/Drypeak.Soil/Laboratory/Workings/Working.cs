@@ -47,14 +47,21 @@ public static class Working
             }
         }
 
+        /// <summary>Of the method with its nominal apparatus, or of the caller's own in the mold that was used.</summary>
         public void Effort(IReadOnlyList<Specimen> specimens)
         {
-            if (test.CustomEffort is { } effort && specimens.Select(specimen => specimen.MoldVolume).FirstOrDefault(volume => volume is { }) is { } mold)
+            if (EffortSeries.EffortOf(test, specimens) is not { } effort)
             {
-                Add("compactive effort", Formulas.Effort,
-                    $"{Number(effort.Rammer.Kilograms)}*{Number(UnitTable.StandardGravity)}*{Number(effort.Drop.Meters)}*{effort.Layers}*{effort.BlowsPerLayer}/{Number(mold.CubicMeters)}/1000",
-                    EffortSeries.EffortOf(test, specimens)!.Value.KilojoulesPerCubicMeter, "kJ/m³");
+                return;
             }
+
+            var (rammer, drop, layers, blows, mold) = test.Method is { RammerMass: { } mass, Drop: { } height, BlowsPerLayer: { } perLayer } method
+                ? (mass.Value, height.Value, method.Layers.Value, perLayer.Value, method.MoldVolume.Value)
+                : (test.CustomEffort!.Rammer, test.CustomEffort.Drop, test.CustomEffort.Layers, test.CustomEffort.BlowsPerLayer,
+                    specimens.Select(specimen => specimen.MoldVolume).First(volume => volume is { })!.Value);
+            Add("compactive effort", Formulas.Effort,
+                $"{Number(rammer.Kilograms)}*{Number(UnitTable.StandardGravity)}*{Number(drop.Meters)}*{layers}*{blows}/{Number(mold.CubicMeters)}/1000",
+                effort.KilojoulesPerCubicMeter, "kJ/m³");
         }
 
         public void Specimen(SpecimenMeasurement measured, Specimen specimen)
@@ -156,6 +163,11 @@ public static class Working
             if (!_shown.Add(mold))
             {
                 return;
+            }
+
+            if (mold is { Mass: null, WaterFilling: { Plate: { } plate } filling })
+            {
+                Add("mass of the mold", Formulas.MassWithoutPlate, $"{Number(filling.Empty.In(test.Units.Mass))} - {Number(plate.In(test.Units.Mass))}", filling.MoldMass.In(test.Units.Mass), test.Units.Mass.Code());
             }
 
             Readings("diameter of the mold", mold.Diameter);
