@@ -8,6 +8,7 @@ internal static class ChartBounds
         Refusal(size)
         ?? Numbers(chart).Where(number => !(Math.Abs(number.Value) <= CompactionChart.LargestNumber))
             .Select(number => $"{number.What} must be a number between −1e9 and 1e9, not {number.Value}.").FirstOrDefault()
+        ?? chart.Specimens.SelectMany(Bars).Where(half => half < 0).Select(half => $"Half of an interval must be 0 or more, not {half}.").FirstOrDefault()
         ?? (Intervals(chart).Any(interval => interval is not [_, _]) ? "An interval must have two ends." : null)
         ?? (chart.SpecificGravity <= 0 ? $"The specific gravity must be over 0, not {chart.SpecificGravity}." : null)
         ?? (chart.WaterDensity <= 0 ? $"The density of water must be over 0, not {chart.WaterDensity}." : null)
@@ -24,6 +25,9 @@ internal static class ChartBounds
     private static IEnumerable<double[]> Intervals(CompactionChart chart) =>
         chart.Optima.SelectMany(optimum => new[] { optimum.WaterContentInterval, optimum.MaximumDryDensityInterval }).OfType<double[]>();
 
+    private static IEnumerable<double> Bars(ChartSpecimen specimen) =>
+        new[] { specimen.WaterContentPlusMinus, specimen.DryDensityPlusMinus }.OfType<double>();
+
     private static IEnumerable<(string What, double Value)> Numbers(CompactionChart chart)
     {
         var points = chart.Specimens.Select(specimen => ("A specimen's", specimen.Point))
@@ -33,6 +37,11 @@ internal static class ChartBounds
         {
             yield return ($"{whose} water content", point.WaterContent);
             yield return ($"{whose} dry density", point.DryDensity);
+        }
+
+        foreach (var half in chart.Specimens.SelectMany(Bars))
+        {
+            yield return ("Half of a specimen's interval", half);
         }
 
         foreach (var end in Intervals(chart).SelectMany(interval => interval))

@@ -1,3 +1,4 @@
+using System.Text.Json.Serialization;
 using Drypeak.Soil.Quantities;
 
 namespace Drypeak.Figures;
@@ -64,6 +65,17 @@ public readonly record struct ChartPoint(double WaterContent, double DryDensity)
 /// <param name="SetAside">Not fitted: drawn hollow.</param>
 public sealed record ChartSpecimen(double WaterContent, double DryDensity, string? Label, bool SetAside)
 {
+    /// <summary>Half of the 95 % interval of the water content, %, 0 or more; null where its uncertainty is not known.</summary>
+    [JsonIgnore(Condition = JsonIgnoreCondition.WhenWritingNull)]
+    public double? WaterContentPlusMinus { get; init; }
+
+    /// <summary>Half of the 95 % interval of the dry density, in the chart's unit, 0 or more; null where its uncertainty is not known.</summary>
+    [JsonIgnore(Condition = JsonIgnoreCondition.WhenWritingNull)]
+    public double? DryDensityPlusMinus { get; init; }
+
+    /// <summary>Whether an error bar is drawn.</summary>
+    internal bool IsUncertain => WaterContentPlusMinus > 0 || DryDensityPlusMinus > 0;
+
     /// <summary>Where the specimen stands.</summary>
     internal ChartPoint Point => new(WaterContent, DryDensity);
 }

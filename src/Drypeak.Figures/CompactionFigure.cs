@@ -4,7 +4,7 @@ using Drypeak.Figures.Layout;
 namespace Drypeak.Figures;
 
 /// <summary>
-/// The compaction figure: dry density against water content. Reading <see cref="Draw"/> is reading the picture.
+/// The compaction figure: dry density against water content. Reading <see cref="Draw(CompactionChart, FigureOptions)"/> is reading the picture.
 /// </summary>
 public static class CompactionFigure
 {
@@ -13,12 +13,19 @@ public static class CompactionFigure
     /// <param name="size">px.</param>
     public static string? Refusal(CompactionChart chart, FigureSize size) => ChartBounds.Refusal(chart, size);
 
-    /// <summary>Lays the figure out. Equal charts and sizes give equal figures.</summary>
+    /// <summary>Lays the figure out in the usual manner. Equal charts and sizes give equal figures.</summary>
     /// <param name="chart">What to show.</param>
     /// <param name="size">px.</param>
     /// <exception cref="ArgumentException">The chart or the size is outside its bounds; the message is that of <see cref="Refusal"/>.</exception>
-    public static Figure Draw(CompactionChart chart, FigureSize size)
+    public static Figure Draw(CompactionChart chart, FigureSize size) => Draw(chart, new FigureOptions { Size = size });
+
+    /// <summary>Lays the figure out. Equal charts and options give equal figures.</summary>
+    /// <param name="chart">What to show.</param>
+    /// <param name="options">How to draw it.</param>
+    /// <exception cref="ArgumentException">The chart or the size is outside its bounds; the message is that of <see cref="Refusal"/>.</exception>
+    public static Figure Draw(CompactionChart chart, FigureOptions options)
     {
+        var (size, theme) = (options.Size, options.Theme);
         if (Refusal(chart, size) is { } refusal)
         {
             throw new ArgumentException(refusal);
@@ -30,11 +37,11 @@ public static class CompactionFigure
         var heading = Heading.Lay(wording, size, type);
         var plot = Plot.Lay(View.Of(chart, lines), heading.Bottom, wording, size, type);
 
-        var axes = new Axes(plot, wording, size, type);
-        var phaseLines = new PhaseLineMarks(lines, plot, type);
+        var axes = new Axes(plot, wording, size, type, theme);
+        var phaseLines = new PhaseLineMarks(lines, plot, type, theme);
         var curve = new CurveLine(chart, plot, type);
         var specimens = new SpecimenMarks(chart, plot, type);
-        var optima = new OptimumMarks(chart, wording, plot, type);
+        var optima = new OptimumMarks(chart, wording, plot, type, theme);
 
         var space = new LabelSpace(new Area(0, 0, size.Width, size.Height).Grown(-1));
         axes.Block(space);
@@ -51,7 +58,7 @@ public static class CompactionFigure
         var labeledLines = phaseLines.DrawLabeled(space);
         specimens.Label(space);
 
-        return new Figure(size, wording.Title, wording.Description, Palette.Light,
+        return new Figure(size, wording.Title, wording.Description, theme.Palette,
         [
             axes.Grid(),
             labeledLines,

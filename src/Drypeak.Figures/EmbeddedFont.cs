@@ -7,13 +7,16 @@ namespace Drypeak.Figures;
 public static class EmbeddedFont
 {
     /// <summary>Weight 400.</summary>
-    public static FontFace Regular { get; } = new(400, Read("SourceSans3-Regular.ttf"));
+    public static FontFace Regular { get; } = Face(400, "Regular");
 
     /// <summary>Weight 600.</summary>
-    public static FontFace SemiBold { get; } = new(600, Read("SourceSans3-SemiBold.ttf"));
+    public static FontFace SemiBold { get; } = Face(600, "SemiBold");
 
     /// <summary>The font's copyright notice and license.</summary>
     public static string License { get; } = Encoding.UTF8.GetString(Read("LICENSE.txt"));
+
+    private static FontFace Face(int weight, string style) =>
+        new(weight, Read($"SourceSans3-{style}.ttf")) { Cut = new FontFace(weight, Read($"Cut-{style}.ttf")) };
 
     private static byte[] Read(string name)
     {

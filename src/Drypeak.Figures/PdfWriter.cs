@@ -2,7 +2,10 @@ using SkiaSharp;
 
 namespace Drypeak.Figures;
 
-/// <summary>Writes a figure as a PDF of one page with embedded font and real text. Equal figures give equal bytes.</summary>
+/// <summary>
+/// Writes a figure as a PDF of one page with embedded fonts and real text. Equal figures give equal bytes, in every process. A file holds
+/// the cut fonts; the whole one comes in only for a text with letters beyond European languages' Latin and Greek.
+/// </summary>
 public static class PdfWriter
 {
     /// <summary>Points (1/72 inch) to a px (1/96 inch).</summary>
@@ -28,7 +31,7 @@ public static class PdfWriter
         {
             var page = document.BeginPage(figure.Size.Width * PointsPerPixel, figure.Size.Height * PointsPerPixel);
             page.Scale(PointsPerPixel);
-            using (var canvas = new SkiaCanvas(page, figure.Palette))
+            using (var canvas = new SkiaCanvas(page, figure.Palette, holdsFonts: true))
             {
                 figure.DrawOn(canvas);
             }

@@ -1,4 +1,5 @@
 using Drypeak.Figures.Drawing;
+using Drypeak.Figures.Layout;
 using SkiaSharp;
 
 namespace Drypeak.Figures;
@@ -6,16 +7,23 @@ namespace Drypeak.Figures;
 /// <summary>Draws a figure on a SkiaSharp canvas, for the raster and the PDF writer. For one picture, on one thread.</summary>
 internal sealed class SkiaCanvas : ICanvas, IDisposable
 {
+    /// <summary>Between corners of a halo's outline, em.</summary>
+    private const float CornerDistance = 0.15f;
+
     private readonly SKCanvas _canvas;
     private readonly Palette _palette;
     private readonly SKPaint _paint = new() { IsAntialias = true, StrokeCap = SKStrokeCap.Butt, StrokeJoin = SKStrokeJoin.Round };
-    private readonly SKFont _regular = FontOf(EmbeddedFont.Regular);
-    private readonly SKFont _semiBold = FontOf(EmbeddedFont.SemiBold);
+    private readonly Dictionary<FontFace, SKFont> _fonts = [];
+    private readonly bool _holdsFonts;
 
-    public SkiaCanvas(SKCanvas canvas, Palette palette)
+    /// <param name="canvas">Where to draw.</param>
+    /// <param name="palette">The colors of the roles.</param>
+    /// <param name="holdsFonts">Whether what is written holds the fonts that it uses: then a cut one is used where it has the letters.</param>
+    public SkiaCanvas(SKCanvas canvas, Palette palette, bool holdsFonts = false)
     {
         _canvas = canvas;
         _palette = palette;
+        _holdsFonts = holdsFonts;
         canvas.Clear(ColorOf(ColorRole.Paper));
     }
 
@@ -31,7 +39,7 @@ internal sealed class SkiaCanvas : ICanvas, IDisposable
     public void Draw(Lines lines)
     {
         using var builder = new SKPathBuilder();
-        foreach (var run in lines.Runs)
+        foreach (var run in lines.Stroke.Dash.Count > 0 ? lines.Runs.SelectMany(run => Dashed(run, lines.Stroke.Dash)) : lines.Runs)
         {
             builder.MoveTo(PointOf(run[0]));
             foreach (var place in run.Skip(1))
@@ -41,13 +49,8 @@ internal sealed class SkiaCanvas : ICanvas, IDisposable
         }
 
         using var path = builder.Detach();
-        using var dash = lines.Stroke.Dash.Count > 0
-            ? SKPathEffect.CreateDash([.. lines.Stroke.Dash.Select(length => (float)length)], 0)
-            : null;
         UseStroke(lines.Stroke);
-        _paint.PathEffect = dash;
         _canvas.DrawPath(path, _paint);
-        _paint.PathEffect = null;
     }
 
     public void Draw(Disc disc)
@@ -67,7 +70,7 @@ internal sealed class SkiaCanvas : ICanvas, IDisposable
 
     public void Draw(TextRun text)
     {
-        var font = text.Face == EmbeddedFont.SemiBold ? _semiBold : _regular;
+        var font = FontFor(text);
         font.Size = (float)text.Size;
         var offset = text.Anchor switch { TextAnchor.Start => 0, TextAnchor.Middle => -text.Width / 2, _ => -text.Width };
 
@@ -76,10 +79,9 @@ internal sealed class SkiaCanvas : ICanvas, IDisposable
         _canvas.RotateDegrees((float)text.Angle);
         if (text.Halo)
         {
-            // As outlines: a PDF would hold a second font for stroked letters.
-            using var outlines = font.GetTextPath(text.Text, new SKPoint((float)offset, 0));
+            using var outline = CoarseOutline(text.Text, font, (float)offset);
             UseStroke(new Stroke(ColorRole.Paper, text.HaloWidth));
-            _canvas.DrawPath(outlines, _paint);
+            _canvas.DrawPath(outline, _paint);
         }
 
         UseFill(text.Color);
@@ -89,8 +91,11 @@ internal sealed class SkiaCanvas : ICanvas, IDisposable
 
     public void Dispose()
     {
-        _semiBold.Dispose();
-        _regular.Dispose();
+        foreach (var font in _fonts.Values)
+        {
+            font.Dispose();
+        }
+
         _paint.Dispose();
     }
 
@@ -111,6 +116,54 @@ internal sealed class SkiaCanvas : ICanvas, IDisposable
 
     private static SKPoint PointOf(Place place) => new((float)place.X, (float)place.Y);
 
-    private static SKFont FontOf(FontFace face) =>
-        new(face.Typeface) { Hinting = SKFontHinting.None, LinearMetrics = true, Subpixel = true, Edging = SKFontEdging.Antialias };
+    /// <summary>The dashes of a run. The drawing library's own come as a filled rectangle each, at twice the numbers.</summary>
+    private static IEnumerable<IReadOnlyList<Place>> Dashed(IReadOnlyList<Place> run, IReadOnlyList<double> pattern)
+    {
+        var course = new Course(run);
+        for (var (start, i) = (0.0, 0); start < course.Length; start += pattern[i++ % pattern.Count])
+        {
+            if (i % 2 == 0)
+            {
+                yield return course.Part(start, Math.Min(start + pattern[i % pattern.Count], course.Length));
+            }
+        }
+    }
+
+    /// <summary>
+    /// The letters' outline as polygons, for their halo. As outlines, because a PDF would hold a second font for stroked letters; with few
+    /// corners at round numbers, because their curves would take most of its bytes, and the halo is wider than what is lost.
+    /// </summary>
+    private static SKPath CoarseOutline(string text, SKFont font, float offset)
+    {
+        using var letters = font.GetTextPath(text, new SKPoint(offset, 0));
+        using var contours = new SKPathMeasure(letters, forceClosed: true);
+        using var outline = new SKPathBuilder();
+        do
+        {
+            var corners = new SKPoint[Math.Max(3, (int)Math.Ceiling(contours.Length / (font.Size * CornerDistance)))];
+            for (var i = 0; i < corners.Length; i++)
+            {
+                var corner = contours.GetPosition(contours.Length * i / corners.Length);
+                corners[i] = new SKPoint(Rounded(corner.X), Rounded(corner.Y));
+            }
+
+            outline.AddPoly(corners, close: true);
+        }
+        while (contours.NextContour());
+        return outline.Detach();
+    }
+
+    private static float Rounded(float coordinate) => MathF.Round(coordinate * 4) / 4;
+
+    private SKFont FontFor(TextRun text)
+    {
+        var face = _holdsFonts && text.Face.Cut is { } cut && cut.Covers(text.Text) ? cut : text.Face;
+        if (!_fonts.TryGetValue(face, out var font))
+        {
+            font = new SKFont(face.Typeface) { Hinting = SKFontHinting.None, LinearMetrics = true, Subpixel = true, Edging = SKFontEdging.Antialias };
+            _fonts.Add(face, font);
+        }
+
+        return font;
+    }
 }

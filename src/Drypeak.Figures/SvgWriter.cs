@@ -28,7 +28,7 @@ public static class SvgWriter
             _palette = figure.Palette;
 
             // Several figures may stand in one page: their identifiers must differ, and be the same each time.
-            var id = Digest(figure.Title + figure.Description).ToString("x8", CultureInfo.InvariantCulture);
+            var id = Digest(figure.Title + figure.Description + _palette.Paper.Hex).ToString("x8", CultureInfo.InvariantCulture);
             var (width, height) = (figure.Size.Width, figure.Size.Height);
             _svg.Append(CultureInfo.InvariantCulture, $"<svg xmlns=\"http://www.w3.org/2000/svg\" viewBox=\"0 0 {width} {height}\" width=\"{width}\" height=\"{height}\"");
             _svg.Append(CultureInfo.InvariantCulture, $" role=\"img\" aria-labelledby=\"title-{id} desc-{id}\" font-family=\"'{FontFace.Family}', 'Liberation Sans', Arial, sans-serif\">\n");

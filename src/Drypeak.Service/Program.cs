@@ -1,10 +1,11 @@
 using Drypeak.Service.Charts;
+using Drypeak.Service.Field;
 using Drypeak.Service.Hosting;
 using Drypeak.Service.Laboratory;
 using Drypeak.Service.Pages;
 
 var builder = WebApplication.CreateBuilder(args).AddDrypeakHosting();
-builder.Services.AddSingleton<ChartRules>().AddSingleton<MoistureDensityJob>().AddSingleton<ComparisonJob>();
+builder.Services.AddSingleton<ChartRules>().AddSingleton<MoistureDensityJob>().AddSingleton<ComparisonJob>().AddSingleton<FieldDensityJob>();
 
 var app = builder.Build();
 app.UseDrypeakHosting(PageEndpoints.NotFound);
@@ -13,6 +14,10 @@ app.MapComparison();
 EffortSeriesJob.Map(app);
 app.MapSaturationLines();
 app.MapOversizeCorrection();
+FieldDensityJob.Map(app);
+RelativeDensityJob.Map(app);
+OnePointJob.Map(app);
+RapidMethodJob.Map(app);
 app.MapTestMethods();
 app.MapFindingKinds();
 app.MapSpecimenSheet();

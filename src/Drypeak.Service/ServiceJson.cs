@@ -2,6 +2,7 @@ using System.Text.Json;
 using System.Text.Json.Serialization;
 using System.Text.Json.Serialization.Metadata;
 using Drypeak.Figures;
+using Drypeak.Service.Field;
 using Drypeak.Service.Hosting;
 using Drypeak.Service.Laboratory;
 
@@ -39,5 +40,13 @@ internal static class ServiceJson
 [JsonSerializable(typeof(EffortSeriesRequest))]
 [JsonSerializable(typeof(EffortSeriesAnswer))]
 [JsonSerializable(typeof(IReadOnlyList<TestMethodAnswer>))]
+[JsonSerializable(typeof(FieldDensityRequest))]
+[JsonSerializable(typeof(FieldDensityAnswer))]
+[JsonSerializable(typeof(RelativeDensityRequest))]
+[JsonSerializable(typeof(RelativeDensityAnswer))]
+[JsonSerializable(typeof(OnePointRequest))]
+[JsonSerializable(typeof(OnePointAnswer))]
+[JsonSerializable(typeof(RapidMethodRequest))]
+[JsonSerializable(typeof(RapidMethodAnswer))]
 [JsonSerializable(typeof(CompactionChart))]
 internal sealed partial class ContractsJson : JsonSerializerContext;

@@ -111,9 +111,7 @@ public sealed class CompactionFigureTests
         var picture = SvgPicture.Of(chart, FigureSize.Default);
         var line = Assert.Single(picture.OfClass("zero-air-voids"));
         var marks = picture.OfClass("specimen").ToList();
-        var places = line.Attribute("d")!.Value.Split(['M', 'L'], StringSplitOptions.RemoveEmptyEntries)
-            .Select(pair => pair.Split(' ').Select(number => double.Parse(number, System.Globalization.CultureInfo.InvariantCulture)).ToArray())
-            .ToList();
+        var places = Places(line);
         Assert.True(places.Count >= 4);
         foreach (var place in places)
         {
@@ -122,6 +120,28 @@ public sealed class CompactionFigureTests
             var saturation = PhaseRelations.Saturation(water, PhaseRelations.VoidRatio(density, 2.68, new Density(998.2)), 2.68);
             Assert.Equal(1, saturation, 1e-3);
         }
+    }
+
+    [Fact]
+    public void Error_bars_reach_as_far_as_their_numbers_to_both_sides_of_the_mark()
+    {
+        var chart = Charts.Ternmarsh with { Specimens = [.. Charts.Ternmarsh.Specimens.Select((specimen, i) => i == 2 ? specimen with { WaterContentPlusMinus = 0.25, DryDensityPlusMinus = 0.02 } : specimen)] };
+        var picture = SvgPicture.Of(chart, FigureSize.Default);
+        var marks = picture.OfClass("specimen").ToList();
+        var places = Places(Assert.Single(picture.OfClass("error-bars")));
+        Assert.Equal(4, places.Count);
+        Assert.Equal([12.95, 13.45], places.Take(2).Select(place => Math.Round(Unscaled(marks, "cx", "data-x", place[0]), 3)));
+        Assert.Equal([1.806, 1.846], places.Skip(2).Select(place => Math.Round(Unscaled(marks, "cy", "data-y", place[1]), 4)));
+        Assert.Contains(picture.Texts, text => text.EndsWith("bars: 95 % of each measurement", StringComparison.Ordinal));
+    }
+
+    [Fact]
+    public void An_error_bar_that_its_mark_hides_is_not_drawn_and_one_beyond_the_plot_ends_at_its_edge()
+    {
+        CompactionChart With(double plusMinus) => Charts.Ternmarsh with { Specimens = [.. Charts.Ternmarsh.Specimens.Select(specimen => specimen with { WaterContentPlusMinus = plusMinus })] };
+        Assert.Empty(SvgPicture.Of(With(0.001), FigureSize.Default).OfClass("error-bars"));
+        var bars = Places(SvgPicture.Of(With(1e6), FigureSize.Default).OfClass("error-bars").Single());
+        Assert.All(bars, place => Assert.InRange(place[0], 0, 960));
     }
 
     [Theory]
@@ -141,6 +161,8 @@ public sealed class CompactionFigureTests
         Refused(Charts.Full with { Curve = [new(12, double.PositiveInfinity)] }, "The curve's dry density must be a number between −1e9 and 1e9, not Infinity.");
         Refused(Charts.Full with { NextSpecimen = 1e10 }, "The next specimen's water content must be a number between −1e9 and 1e9, not 10000000000.");
         Refused(Charts.Ternmarsh with { Optimum = Charts.Ternmarsh.Optimum! with { WaterContentInterval = [13.6] } }, "An interval must have two ends.");
+        Refused(Charts.Full with { Specimens = [new(12, 1.8, null, false) { DryDensityPlusMinus = -1 }] }, "Half of an interval must be 0 or more, not -1.");
+        Refused(Charts.Full with { Specimens = [new(12, 1.8, null, false) { WaterContentPlusMinus = double.NaN }] }, "Half of a specimen's interval must be a number between −1e9 and 1e9, not NaN.");
         Refused(Charts.Full with { SpecificGravity = 0 }, "The specific gravity must be over 0, not 0.");
         Refused(Charts.Full with { WaterDensity = -1 }, "The density of water must be over 0, not -1.");
         Refused(Charts.Full with { Saturation = [90, 0] }, "A saturation must be over 0 and up to 100 %, not 0.");
@@ -148,6 +170,10 @@ public sealed class CompactionFigureTests
 
         static void Refused(CompactionChart chart, string reason) => Assert.Equal(reason, CompactionFigure.Refusal(chart, FigureSize.Default));
     }
+
+    private static List<double[]> Places(System.Xml.Linq.XElement path) =>
+        [.. path.Attribute("d")!.Value.Split(['M', 'L'], StringSplitOptions.RemoveEmptyEntries)
+            .Select(pair => pair.Split(' ').Select(number => double.Parse(number, System.Globalization.CultureInfo.InvariantCulture)).ToArray())];
 
     /// <summary>The number at a place, by the scale that the marks show.</summary>
     private static double Unscaled(IReadOnlyList<System.Xml.Linq.XElement> marks, string place, string data, double at)

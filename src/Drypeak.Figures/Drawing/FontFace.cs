@@ -38,6 +38,9 @@ public sealed class FontFace
     /// <summary>The font file, TrueType.</summary>
     public ReadOnlyMemory<byte> File { get; }
 
+    /// <summary>The same letters, but only those that figures usually need: for a format that holds its fonts whole. Null where the face itself is cut.</summary>
+    internal FontFace? Cut { get; init; }
+
     /// <summary>Height of a line above its baseline, em.</summary>
     internal double Ascent { get; }
 

@@ -55,6 +55,20 @@ public sealed record Palette(Color Paper, Color Ink, Color Quiet, Color Rule, Co
         Water: new(0x0B, 0x5B, 0x73),
         Clay: new(0xA3, 0x43, 0x1B));
 
+    /// <summary>The same roles on a dark ground.</summary>
+    public static Palette Dark { get; } = new(
+        Paper: new(0x16, 0x15, 0x13),
+        Ink: new(0xF1, 0xED, 0xE5),
+        Quiet: new(0xB4, 0xAC, 0x9E),
+        Rule: new(0x47, 0x42, 0x3A),
+        Water: new(0x6C, 0xC3, 0xDC),
+        Clay: new(0xF0, 0x94, 0x6A));
+
+    /// <summary>Every role black, the ground white.</summary>
+    public static Palette BlackOnWhite { get; } = new(Paper: new(255, 255, 255), Ink: Black, Quiet: Black, Rule: Black, Water: Black, Clay: Black);
+
+    private static Color Black => new(0, 0, 0);
+
     /// <summary>The color of a role.</summary>
     public Color this[ColorRole role] => role switch
     {

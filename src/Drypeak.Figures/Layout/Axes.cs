@@ -3,7 +3,7 @@ using Drypeak.Figures.Drawing;
 namespace Drypeak.Figures.Layout;
 
 /// <summary>The two axes: their lines, ticks, labels and titles, and the hairlines that lead from the ticks through the plot.</summary>
-internal sealed class Axes(Plot plot, Wording wording, FigureSize size, TypeScale type)
+internal sealed class Axes(Plot plot, Wording wording, FigureSize size, TypeScale type, Theme theme)
 {
     /// <summary>From the baseline of the density axis's title to the plot, in sizes of its text.</summary>
     private const double TitleAboveAxis = 1.2;
@@ -28,7 +28,7 @@ internal sealed class Axes(Plot plot, Wording wording, FigureSize size, TypeScal
                 .. plot.WaterTicks.Values.Select(plot.Water.At).Select(Crisp).Where(x => x > plot.Area.Left).Select(x => Segment(x, plot.Area.Top, x, plot.Area.Bottom)),
                 .. plot.DensityTicks.Values.Select(plot.Density.At).Select(Crisp).Where(y => y < plot.Area.Bottom).Select(y => Segment(plot.Area.Left, y, plot.Area.Right, y)),
             ],
-            new Stroke(ColorRole.Rule, 0.6)),
+            new Stroke(ColorRole.Rule, theme.GridWidth)),
     ]);
 
     public FigurePart Frame()

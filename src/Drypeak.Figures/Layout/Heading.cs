@@ -68,8 +68,8 @@ internal sealed record Heading(IReadOnlyList<TextRun> Runs, double Bottom)
 
     private static IEnumerable<string> Subtitles(Wording wording, double width, FigureSize size, TypeScale type)
     {
-        var lines = new[] { wording.Reference, wording.Intervals }.Where(line => line.Length > 0).ToList();
-        var joined = string.Join("  ·  ", lines);
+        var lines = new[] { wording.Reference, Joined([wording.Intervals, wording.Bars]) }.Where(line => line.Length > 0).ToList();
+        var joined = Joined(lines);
         if (lines.Count == 2 && Fits(joined))
         {
             return [joined];
@@ -80,5 +80,7 @@ internal sealed record Heading(IReadOnlyList<TextRun> Runs, double Bottom)
             .Where(line => line.Length > 0);
 
         bool Fits(string text) => EmbeddedFont.Regular.Measure(text, type.Subtitle) <= width;
+
+        static string Joined(IEnumerable<string> texts) => string.Join("  ·  ", texts.Where(text => text.Length > 0));
     }
 }

@@ -6,7 +6,7 @@ namespace Drypeak.Figures.Layout;
 /// The optima: the fitted one a cross, an adopted one a diamond, the one corrected for oversize a triangle. Lines lead from the result to
 /// its values at the axes; the others are labeled beside their marks.
 /// </summary>
-internal sealed class OptimumMarks(CompactionChart chart, Wording wording, Plot plot, TypeScale type)
+internal sealed class OptimumMarks(CompactionChart chart, Wording wording, Plot plot, TypeScale type, Theme theme)
 {
     private const double Arm = 5.5;
 
@@ -37,7 +37,7 @@ internal sealed class OptimumMarks(CompactionChart chart, Wording wording, Plot 
             return new FigurePart("leaders", []);
         }
 
-        var shapes = new List<Shape> { new Lines(LeaderRuns(result), new Stroke(ColorRole.Clay, 0.9 * type.Unit)) };
+        var shapes = new List<Shape> { new Lines(LeaderRuns(result), new Stroke(ColorRole.Clay, 0.9 * type.Unit, type.Dash(theme.LeaderDash))) };
         var bars = IntervalBars(result).ToList();
         if (bars.Count > 0)
         {

@@ -3,7 +3,7 @@ using Drypeak.Figures.Drawing;
 namespace Drypeak.Figures.Layout;
 
 /// <summary>The lines of saturation and air voids as they run through the plot, each with its label in it where there is room.</summary>
-internal sealed class PhaseLineMarks(PhaseLines lines, Plot plot, TypeScale type)
+internal sealed class PhaseLineMarks(PhaseLines lines, Plot plot, TypeScale type, Theme theme)
 {
     private const int Samples = 96;
 
@@ -16,7 +16,7 @@ internal sealed class PhaseLineMarks(PhaseLines lines, Plot plot, TypeScale type
 
     private Lines DrawLabeled(PhaseLine line, Course course, LabelSpace space)
     {
-        var stroke = line.Stroke(type);
+        var stroke = line.Stroke(type, theme);
         return new Lines(LineLabels.Place(line, course, type.Label, stroke.Color, space), stroke) { Name = line.Name };
     }
 

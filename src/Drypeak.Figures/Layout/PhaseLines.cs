@@ -38,11 +38,11 @@ internal sealed record PhaseLine(PhaseLineKind Kind, double Percent, Func<double
         _ => throw new InvalidOperationException(),
     };
 
-    public Stroke Stroke(TypeScale type) => Kind switch
+    public Stroke Stroke(TypeScale type, Theme theme) => Kind switch
     {
-        PhaseLineKind.ZeroAirVoids => new(ColorRole.Ink, 1.25 * type.Unit),
-        PhaseLineKind.Saturation => new(ColorRole.Quiet, type.Unit, [7 * type.Unit, 4 * type.Unit]),
-        PhaseLineKind.AirVoids => new(ColorRole.Quiet, type.Unit, [1.5 * type.Unit, 3.5 * type.Unit]),
+        PhaseLineKind.ZeroAirVoids => new(ColorRole.Ink, 1.25 * type.Unit, type.Dash(theme.ZeroAirVoidsDash)),
+        PhaseLineKind.Saturation => new(ColorRole.Quiet, type.Unit, type.Dash([7, 4])),
+        PhaseLineKind.AirVoids => new(ColorRole.Quiet, type.Unit, type.Dash([1.5, 3.5])),
         _ => throw new InvalidOperationException(),
     };
 }

@@ -2,7 +2,10 @@ using Drypeak.Figures.Drawing;
 
 namespace Drypeak.Figures.Layout;
 
-/// <summary>The measured points: discs, rings where set aside. Those set aside lie beneath, so that no fitted point is hidden.</summary>
+/// <summary>
+/// The measured points: discs, rings where set aside, with error bars where they are uncertain. Those set aside lie beneath, so that no
+/// fitted point is hidden, and the bars beneath all.
+/// </summary>
 internal sealed class SpecimenMarks(CompactionChart chart, Plot plot, TypeScale type)
 {
     /// <summary>Above this many their labels would say nothing.</summary>
@@ -15,13 +18,18 @@ internal sealed class SpecimenMarks(CompactionChart chart, Plot plot, TypeScale 
 
     private double WidestLabel => Math.Min(140 * type.Unit, plot.Area.Width / 3);
 
-    public FigurePart Draw() => new("specimens", [.. chart.Specimens.OrderBy(specimen => !specimen.SetAside).Select(Mark)]);
+    public FigurePart Draw() => new("specimens", [.. ErrorBars(), .. chart.Specimens.OrderBy(specimen => !specimen.SetAside).Select(Mark)]);
 
     public void Block(LabelSpace space)
     {
         foreach (var specimen in chart.Specimens)
         {
             space.BlockMark(plot.At(specimen.Point), type.MarkRadius);
+        }
+
+        foreach (var bar in Bars())
+        {
+            space.Block(Barriers.Marks, bar);
         }
     }
 
@@ -34,6 +42,24 @@ internal sealed class SpecimenMarks(CompactionChart chart, Plot plot, TypeScale 
             space.Place(candidates.Select(candidate => candidate with { Name = "specimen-label" }), Barriers.All);
         }
     }
+
+    private IEnumerable<Shape> ErrorBars()
+    {
+        var bars = Bars().ToList();
+        return bars.Count > 0 ? [new Lines(bars, new Stroke(ColorRole.Ink, 0.9 * type.Unit)) { Name = "error-bars" }] : [];
+    }
+
+    /// <summary>As far as they lie within the plot; those that a mark hides are left out.</summary>
+    private IEnumerable<IReadOnlyList<Place>> Bars() =>
+        from specimen in chart.Specimens
+        let water = specimen.WaterContentPlusMinus ?? 0
+        let density = specimen.DryDensityPlusMinus ?? 0
+        from reach in (ChartPoint[])[new(water, 0), new(0, density)]
+        let ends = plot.Area.Clip(
+            plot.At(new ChartPoint(specimen.WaterContent - reach.WaterContent, specimen.DryDensity - reach.DryDensity)),
+            plot.At(new ChartPoint(specimen.WaterContent + reach.WaterContent, specimen.DryDensity + reach.DryDensity)))
+        where ends is { } bar && bar.From.To(bar.To) > 2 * type.MarkRadius
+        select (Place[])[ends.Value.From, ends.Value.To];
 
     private Disc Mark(ChartSpecimen specimen) => specimen.SetAside
         ? new Disc(plot.At(specimen.Point), RingRadius, null, new Stroke(ColorRole.Ink, EdgeWidth * type.Unit), specimen.Point) { Name = "specimen set-aside" }

@@ -35,5 +35,8 @@ internal sealed class TypeScale
 
     public static double LeastText => SmallestText;
 
+    /// <summary>Lengths of dash and gap that are meant at the default size.</summary>
+    public double[] Dash(IReadOnlyList<double> atDefaultSize) => [.. atDefaultSize.Select(length => length * Unit)];
+
     private double Text(double size) => Math.Max(SmallestText, Math.Round(size * Unit * 2) / 2);
 }

@@ -37,6 +37,9 @@ internal sealed class Wording
     /// <summary>The result in one line.</summary>
     public string Title => $"{Headline.First} {Headline.Second}";
 
+    /// <summary>What the bars on the marks are, or empty where there is none.</summary>
+    public string Bars => _chart.Specimens.Any(specimen => specimen.IsUncertain) ? "bars: 95 % of each measurement" : "";
+
     /// <summary>The 95 % intervals of the result, or empty.</summary>
     public string Intervals
     {
@@ -62,6 +65,11 @@ internal sealed class Wording
             if (Intervals.Length > 0)
             {
                 sentences.Add($"{Intervals}.");
+            }
+
+            if (Bars.Length > 0)
+            {
+                sentences.Add("Bars on the marks are the 95 % intervals of the measurements.");
             }
 
             if (_chart is { Adopted: not null, Optimum: { } fitted })

@@ -1,4 +1,3 @@
-using Drypeak.Figures;
 using Drypeak.Service.Hosting;
 
 namespace Drypeak.Service.Charts;
@@ -18,14 +17,9 @@ internal static class ChartEndpoints
                 .WithSummary($"The chart of a laboratory test as {format.Suffix.ToUpperInvariant()}")
                 .WithDescription("The address comes from an answer's links and holds all that the picture shows. The same address gives the same bytes, with a strong ETag.")
                 .TakesQuery<string>(Data, "The chart, as an answer's links give it.", ExampleChart.Address, required: true)
-                .TakesQuery<int>("width", $"Width, px: {FigureSize.Smallest} to {FigureSize.Largest}.", "960")
-                .TakesQuery<int>("height", $"Height, px: {FigureSize.Smallest} to {FigureSize.Largest}.", "640")
                 .Gives<byte[]>(format.MediaType)
                 .Refuses(400);
-            if (format == ChartFormat.Png)
-            {
-                chart.TakesQuery<double>("scale", $"Pixels for each px: {PngWriter.SmallestScale} to {PngWriter.LargestScale}.", "1");
-            }
+            ChartOptions.Describe(chart, format);
         }
     }
 

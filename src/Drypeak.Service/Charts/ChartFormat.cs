@@ -15,5 +15,5 @@ internal sealed record ChartFormat(string Suffix, string MediaType, Func<Figure,
     public static IReadOnlyList<ChartFormat> All { get; } = [Svg, Png, Pdf];
 
     /// <summary>The picture in this format.</summary>
-    public byte[] Draw(CompactionChart chart, ChartOptions options) => Write(CompactionFigure.Draw(chart, options.Size), options.Scale);
+    public byte[] Draw(CompactionChart chart, ChartOptions options) => Write(CompactionFigure.Draw(chart, options.Figure), options.Scale);
 }

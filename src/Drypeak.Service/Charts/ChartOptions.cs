@@ -1,14 +1,32 @@
 using System.Globalization;
 using Drypeak.Figures;
+using Drypeak.Service.Hosting;
 
 namespace Drypeak.Service.Charts;
 
-/// <summary>The size of a picture, from an address's query: <c>width</c> and <c>height</c> in px, and <c>scale</c> for PNG.</summary>
-/// <param name="Size">Width and height, px.</param>
-/// <param name="Scale">Pixels of the PNG for each px.</param>
-internal sealed record ChartOptions(FigureSize Size, double Scale)
+/// <summary>How a picture is asked for in an address's query: each name is optional, and none other is taken.</summary>
+/// <param name="Figure">How the figure is drawn.</param>
+/// <param name="Scale">Pixels of the PNG for each px; 1 in other formats.</param>
+internal sealed record ChartOptions(FigureOptions Figure, double Scale)
 {
-    private const string Width = "width", Height = "height", ScaleName = "scale";
+    private const string Width = "width", Height = "height", ScaleName = "scale", ThemeName = "theme";
+
+    private static readonly string[] Themes = [.. Theme.All.Select(theme => theme.Name)];
+
+    /// <summary>Width and height, px.</summary>
+    public FigureSize Size => Figure.Size;
+
+    /// <summary>Says in the API description what <see cref="Read"/> takes.</summary>
+    public static RouteHandlerBuilder Describe(RouteHandlerBuilder endpoint, ChartFormat format)
+    {
+        endpoint
+            .TakesQuery<int>(Width, $"Width, px: {FigureSize.Smallest} to {FigureSize.Largest}.", "960")
+            .TakesQuery<int>(Height, $"Height, px: {FigureSize.Smallest} to {FigureSize.Largest}.", "640")
+            .TakesQuery<string>(ThemeName, $"One of {string.Join(", ", Themes)}: ink on paper, the same on a dark ground, or black on white for printers.", Theme.Light.Name);
+        return format == ChartFormat.Png
+            ? endpoint.TakesQuery<double>(ScaleName, $"Pixels for each px: {PngWriter.SmallestScale} to {PngWriter.LargestScale}.", "1")
+            : endpoint;
+    }
 
     /// <summary>Reads a query.</summary>
     /// <param name="query">The query.</param>
@@ -17,7 +35,7 @@ internal sealed record ChartOptions(FigureSize Size, double Scale)
     /// <param name="faults">Receives each unknown, repeated or impossible parameter.</param>
     public static ChartOptions Read(IQueryCollection query, ChartFormat format, ReadOnlySpan<string> further, ICollection<Fault> faults)
     {
-        var known = new List<string> { Width, Height };
+        var known = new List<string> { Width, Height, ThemeName };
         if (format == ChartFormat.Png)
         {
             known.Add(ScaleName);
@@ -38,9 +56,10 @@ internal sealed record ChartOptions(FigureSize Size, double Scale)
         var size = new FigureSize(
             (int)Number(query, Width, FigureSize.Smallest, FigureSize.Largest, FigureSize.Default.Width, NumberStyles.None, faults),
             (int)Number(query, Height, FigureSize.Smallest, FigureSize.Largest, FigureSize.Default.Height, NumberStyles.None, faults));
+        var figure = new FigureOptions { Size = size, Theme = Theme.All[Choice(query, ThemeName, Themes, faults)] };
         if (format != ChartFormat.Png)
         {
-            return new ChartOptions(size, 1);
+            return new ChartOptions(figure, 1);
         }
 
         var scale = Number(query, ScaleName, PngWriter.SmallestScale, PngWriter.LargestScale, 1, NumberStyles.AllowDecimalPoint, faults);
@@ -49,7 +68,7 @@ internal sealed record ChartOptions(FigureSize Size, double Scale)
             faults.Add(new Fault("/" + ScaleName, "out-of-range", tooLarge));
         }
 
-        return new ChartOptions(size, scale);
+        return new ChartOptions(figure, scale);
     }
 
     private static double Number(
@@ -68,6 +87,23 @@ internal sealed record ChartOptions(FigureSize Size, double Scale)
         var kind = style == NumberStyles.None ? "a whole number" : "a number";
         faults.Add(new Fault("/" + name, "out-of-range", string.Create(CultureInfo.InvariantCulture, $"It must be {kind} from {least} to {greatest}; \"{Shortened(text)}\" was received.")));
         return otherwise;
+    }
+
+    /// <summary>Which of the choices is asked for; the first where none is.</summary>
+    private static int Choice(IQueryCollection query, string name, string[] choices, ICollection<Fault> faults)
+    {
+        if (query[name] is not [{ } text])
+        {
+            return 0;
+        }
+
+        var chosen = Array.IndexOf(choices, text);
+        if (chosen < 0)
+        {
+            faults.Add(new Fault("/" + name, "unknown-choice", $"It must be one of {string.Join(", ", choices)}; \"{Shortened(text)}\" was received."));
+        }
+
+        return Math.Max(0, chosen);
     }
 
     private static string Shortened(string text) => text.Length > 40 ? text[..40] + "…" : text;

@@ -116,7 +116,7 @@ public sealed record MoldContract
 }
 
 /// <summary>Oversize particles removed before the test.</summary>
-public sealed record OversizeContract
+public record OversizeContract
 {
     /// <summary>Their share of the total dry mass, %, 0 to below 100.</summary>
     /// <example>9.4</example>

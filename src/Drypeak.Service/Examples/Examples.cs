@@ -23,6 +23,18 @@ internal static class Examples
     /// <summary>One soil at standard and modified effort, as JSON.</summary>
     public static string EffortSeriesRequest { get; } = Text("effort-series.json");
 
+    /// <summary>A sand cone test of a lift, as JSON.</summary>
+    public static string FieldDensityRequest { get; } = Text("field-density.json");
+
+    /// <summary>A sand between its limits, as JSON.</summary>
+    public static string RelativeDensityRequest { get; } = Text("relative-density.json");
+
+    /// <summary>A point on the family of the borrow areas, as JSON.</summary>
+    public static string OnePointRequest { get; } = Text("one-point.json");
+
+    /// <summary>The rapid method on a lift, as JSON.</summary>
+    public static string RapidMethodRequest { get; } = Text("rapid-method.json");
+
     private static string Text(string name)
     {
         using var stream = typeof(Examples).Assembly.GetManifestResourceStream($"Drypeak.Service.Examples.{name}")

@@ -12,15 +12,26 @@ internal static class MoistureDensityChart
     /// <summary>Digits of the drawn curve and of intervals: finer than any picture, and short in an address.</summary>
     private const int DrawnDigits = 6;
 
+    /// <summary>Above this many specimens bars hide one another.</summary>
+    private const int MostWithErrorBars = 40;
+
+    /// <summary>Half of a normal quantity's 95 % interval, in standard uncertainties.</summary>
+    private const double HalfOf95Percent = 1.959963984540054;
+
     public static CompactionChart Of(MoistureDensityRequest request, MoistureDensityTest test, MoistureDensityResult result)
     {
         var unit = test.Units.Density;
+        var uncertain = result.Specimens.Count <= MostWithErrorBars ? SpecimenUncertainty.Of(test, result.Specimens) : new Dictionary<string, SpecimenUncertainty>();
         return new CompactionChart
         {
             Reference = request.Reference,
             DensityUnit = unit,
             Specimens = [.. result.Specimens.Select(specimen => new ChartSpecimen(
-                specimen.WaterContent.Percent, specimen.DryDensity.In(unit), specimen.Label, specimen.SetAside is { }))],
+                specimen.WaterContent.Percent, specimen.DryDensity.In(unit), specimen.Label, specimen.SetAside is { })
+            {
+                WaterContentPlusMinus = uncertain.TryGetValue(specimen.Label, out var its) ? Drawn(HalfOf95Percent * its.WaterContent * 100) : null,
+                DryDensityPlusMinus = uncertain.TryGetValue(specimen.Label, out its) ? Drawn(HalfOf95Percent * new Density(its.DryDensity).In(unit)) : null,
+            })],
             Curve = [.. (result.Curve?.Chosen.Curve ?? []).Select(point => new ChartPoint(
                 Drawn(point.WaterContent * 100), Drawn(new Density(point.DryDensity).In(unit))))],
             Optimum = result.Optimum is { } optimum ? Peak(test, optimum) : null,

@@ -53,23 +53,25 @@ internal static class MoistureDensityMapping
         };
     }
 
-    public static SpecimenMeasurement ToMeasurement(this SpecimenContract specimen, int index, UnitSet units) => new()
+    public static SpecimenMeasurement ToMeasurement(this SpecimenContract specimen, int index, UnitSet units)
     {
-        Label = specimen.LabelOr(index),
-        MoldAndWetSoil = specimen.MoldAndWetSoil is { } full ? Mass.From(full, units.Mass) : null,
-        WetMass = specimen.WetMass is { } wet ? Mass.From(wet, units.Mass) : null,
-        WetDensity = specimen.WetDensity is { } wetDensity ? Density.From(wetDensity, units.Density) : null,
-        DryDensity = specimen.DryDensity is { } dryDensity ? Density.From(dryDensity, units.Density) : null,
-        Mold = specimen.Mold.ToMold(units),
-        DepthBelowRim = ToLength(specimen.DepthBelowRim, specimen.DepthsBelowRim, units),
-        Tins = [.. (specimen.Tins ?? []).Select(tin => tin.ToTin(units))],
-        WaterContent = specimen.WaterContent is { } w ? WaterContent.FromPercent(w) : null,
-        WaterContentFromWetBasis = specimen.WetBasis is { } wetBasis ? WaterContent.FromPercentOfWetMass(wetBasis) : null,
-        WaterContentFromCarbide = specimen.Carbide is { Reading: { } reading } carbide
-            ? CarbideTester.WaterContent(reading, carbide.HalfSample is true)
-            : null,
-        SetAside = specimen.SetAside,
-    };
+        var water = specimen.ToMeasuredWater(units);
+        return new SpecimenMeasurement
+        {
+            Label = specimen.LabelOr(index),
+            MoldAndWetSoil = specimen.MoldAndWetSoil is { } full ? Mass.From(full, units.Mass) : null,
+            WetMass = specimen.WetMass is { } wet ? Mass.From(wet, units.Mass) : null,
+            WetDensity = specimen.WetDensity is { } wetDensity ? Density.From(wetDensity, units.Density) : null,
+            DryDensity = specimen.DryDensity is { } dryDensity ? Density.From(dryDensity, units.Density) : null,
+            Mold = specimen.Mold.ToMold(units),
+            DepthBelowRim = ToLength(specimen.DepthBelowRim, specimen.DepthsBelowRim, units),
+            Tins = water.Tins,
+            WaterContent = water.Given,
+            WaterContentFromWetBasis = water.FromWetBasis,
+            WaterContentFromCarbide = water.FromCarbide,
+            SetAside = specimen.SetAside,
+        };
+    }
 
     public static Mold? ToMold(this MoldContract? mold, UnitSet units) => mold is null ? null : new Mold
     {
@@ -95,9 +97,6 @@ internal static class MoistureDensityMapping
         Given = given is { } value ? Length.From(value, units.Length) : null,
         Readings = [.. (readings ?? []).Select(reading => Length.From(reading, units.Length))],
     };
-
-    private static MoistureTin ToTin(this TinContract tin, UnitSet units) => new(
-        Mass.From(tin.Tin!.Value, units.TinMass), Mass.From(tin.Wet!.Value, units.TinMass), Mass.From(tin.Dry!.Value, units.TinMass));
 
     private static MeasurementUncertainty ToUncertainty(this UncertaintyRequest uncertainty, UnitSet units) => new()
     {

@@ -62,7 +62,7 @@ public sealed record MoistureDensityRequest : IWaterGiven
 }
 
 /// <summary>One specimen. Its data may begin at any stage; whatever is given twice must agree.</summary>
-public sealed record SpecimenContract
+public sealed record SpecimenContract : IWaterContentGiven
 {
     /// <summary>Name, unique in the test, up to 200 characters. Default: its position, from 1.</summary>
     /// <example>1</example>

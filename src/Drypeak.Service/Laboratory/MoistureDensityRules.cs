@@ -15,28 +15,9 @@ internal sealed class MoistureDensityRules(Limits limits)
     public IReadOnlyList<Fault> Check(MoistureDensityRequest request)
     {
         var faults = _values.Validate(request).ToFaults().ToList();
-        faults.AddRange(IdentificationFaults(request.Identification ?? new Dictionary<string, string>()));
+        faults.AddRange(Identification.Check(request.Identification, limits));
         faults.AddRange(Contradictions(request, faults));
         return faults;
-    }
-
-    /// <summary>The labels are the caller's: no path of property names could hold them, so their places are built here.</summary>
-    private IEnumerable<Fault> IdentificationFaults(IReadOnlyDictionary<string, string> labels)
-    {
-        const string place = "/identification";
-        if (labels.Count > limits.IdentificationLabels)
-        {
-            yield return new Fault(place, "too-many", $"There may be up to {limits.IdentificationLabels} labels; there are {labels.Count}.");
-        }
-
-        foreach (var (label, text) in labels)
-        {
-            if (label.Length > limits.NameCharacters || text?.Length > limits.TextCharacters)
-            {
-                yield return new Fault(Places.Member(place, label), "too-long",
-                    $"A label may have up to {limits.NameCharacters} characters and its text up to {limits.TextCharacters}. Shorten it.");
-            }
-        }
     }
 
     /// <summary>What is given twice and does not agree, and what is missing: only where the single values are sound.</summary>
@@ -165,11 +146,7 @@ internal sealed class MoistureDensityRules(Limits limits)
             RuleFor(specimen => specimen.WetMass).Positive();
             RuleFor(specimen => specimen.WetDensity).Positive();
             RuleFor(specimen => specimen.DryDensity).Positive();
-            RuleFor(specimen => specimen.WaterContent).Within(0, 1000, " %");
-            RuleFor(specimen => specimen.Tins).Counted(limits.TinsPerSpecimen);
-            RuleForEach(specimen => specimen.Tins).Needed().SetValidator(new TinRules());
-            RuleFor(specimen => specimen.WetBasis).PercentBelow100();
-            RuleFor(specimen => specimen.Carbide!).SetValidator(new CarbideRules()).When(specimen => specimen.Carbide is { });
+            Include(new WaterContentRules(limits));
             RuleFor(specimen => specimen.SetAside).NotBlank("The reason for setting a specimen aside").AtMost(limits.TextCharacters);
         }
     }

@@ -105,6 +105,9 @@ public sealed record SpecimenMeasurement
 
     /// <summary>Why the point is not fitted, or null where it is.</summary>
     public string? SetAside { get; init; }
+
+    /// <summary>The water content in every way that it was found.</summary>
+    internal MeasuredWater Water => new(Tins, WaterContent, WaterContentFromWetBasis, WaterContentFromCarbide);
 }
 
 /// <summary>The calcium-carbide tester.</summary>

@@ -56,6 +56,9 @@ internal sealed class PerturbedChain
 
     public int SpecimenCount => _specimens.Count;
 
+    /// <summary>The specimens' labels, in the order of the points.</summary>
+    public IEnumerable<string> Labels => _specimens.Select(item => item.Specimen.Label);
+
     /// <summary>The points with these errors, each in standard uncertainties.</summary>
     public CompactionData Points(double[] draws)
     {
@@ -77,7 +80,7 @@ internal sealed class PerturbedChain
                 w += (perturbed.WaterContent.Fraction - item.Tins[t].WaterContent.Fraction) / item.Tins.Count;
             }
 
-            w = Math.Clamp(w + Error(item.WaterError, u.WaterContent?.Fraction), 0, SpecimenReduction.GreatestWaterContent);
+            w = Math.Clamp(w + Error(item.WaterError, u.WaterContent?.Fraction), 0, MeasuredWater.Greatest);
             var dryDensity = item.Specimen.DryDensity.KilogramsPerCubicMeter;
             if (!item.DryDensityGiven)
             {

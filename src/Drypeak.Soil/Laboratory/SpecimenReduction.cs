@@ -12,12 +12,6 @@ public static class SpecimenReduction
     /// <summary>Densities and volumes given twice may differ by this fraction.</summary>
     public const double DensityTolerance = 0.002;
 
-    /// <summary>Water contents given twice may differ by this, as a fraction (0.1 percentage points).</summary>
-    public const double WaterContentTolerance = 0.001;
-
-    /// <summary>The greatest water content that is taken, as a fraction (1000 %), however it was found.</summary>
-    public const double GreatestWaterContent = 10;
-
     /// <summary>The least dry density that is taken, kg/m³: below a soil's by a factor of a million (m³ for cm³), which a finding can still explain.</summary>
     public const double LeastDryDensity = 1e-3;
 
@@ -40,7 +34,7 @@ public static class SpecimenReduction
         var mold = measured.Mold?.Over(testMold) ?? testMold;
         var moldPlace = measured.Mold is null ? "/mold" : place + "/mold";
 
-        var givenWater = WaterContentOf(measured, place, faults);
+        var givenWater = measured.Water.Reduce(place, faults);
         var moldVolume = MoldVolumes.Of(mold, moldPlace, units, faults);
         var volume = MoldVolumes.OfSoil(measured, mold, moldVolume, place, units, faults);
         var wetMass = WetMassOf(measured, mold, place, units, faults);
@@ -58,7 +52,7 @@ public static class SpecimenReduction
                     $"The dry density, {ReaderText.Of(dryGiven, units.Density)}, is greater than the wet density, {ReaderText.Of(wet.Value, units.Density)}. Correct one of them."));
             }
 
-            RefuseBeyondRange(givenWater.Value, place + "/dryDensity", faults);
+            MeasuredWater.RefuseBeyondRange(givenWater.Value, place + "/dryDensity", faults);
         }
 
         if (faults.Count > before)
@@ -97,48 +91,6 @@ public static class SpecimenReduction
 
         return new Specimen(measured.Label, w, wet ?? PhaseRelations.WetDensity(dryDensity, w), dryDensity,
             massDensity is null ? null : moldVolume, massDensity is null ? null : volume, measured.SetAside);
-    }
-
-    private static WaterContent? WaterContentOf(SpecimenMeasurement measured, string place, ICollection<Fault> faults)
-    {
-        ReadOnlySpan<(WaterContent? Water, string Name, string Member)> ways =
-        [
-            (measured.Tins.Count > 0 ? new WaterContent(measured.Tins.Average(tin => tin.WaterContent.Fraction)) : null, "the tins", "/tins"),
-            (measured.WaterContent, "the water content given", "/waterContent"),
-            (measured.WaterContentFromWetBasis, "the number on wet mass", "/wetBasis"),
-            (measured.WaterContentFromCarbide, "the carbide tester", "/carbide"),
-        ];
-
-        (WaterContent Water, string Name)? first = null;
-        foreach (var (water, name, member) in ways)
-        {
-            if (water is not { } other)
-            {
-                continue;
-            }
-
-            RefuseBeyondRange(other, place + member, faults);
-            if (first is not { } taken)
-            {
-                first = (other, name);
-            }
-            else if (Math.Abs(other.Fraction - taken.Water.Fraction) is var apart && apart > WaterContentTolerance * (1 + Arithmetic))
-            {
-                faults.Add(new Fault(place + member, "contradiction",
-                    $"The water content is {ReaderText.Of(taken.Water)} by {taken.Name}, but {ReaderText.Of(other)} by {name}: {ReaderText.Fixed(apart * 100, 2)} percentage points apart, where {ReaderText.Fixed(WaterContentTolerance * 100, 1)} is allowed. Correct one, or leave one out."));
-            }
-        }
-
-        return first?.Water;
-    }
-
-    private static void RefuseBeyondRange(WaterContent w, string place, ICollection<Fault> faults)
-    {
-        if (w.Fraction > GreatestWaterContent * (1 + Arithmetic))
-        {
-            faults.Add(new Fault(place, "out-of-range",
-                $"The water content comes to {ReaderText.Significant(w.Percent)} %, where {ReaderText.Significant(GreatestWaterContent * 100)} % is the most. Check the values and their units."));
-        }
     }
 
     private static Mass? WetMassOf(SpecimenMeasurement measured, Mold? mold, string place, UnitSet units, ICollection<Fault> faults)

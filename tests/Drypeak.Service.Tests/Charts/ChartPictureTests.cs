@@ -110,6 +110,10 @@ public sealed class ChartPictureTests(RunningService service)
     [InlineData("svg", "width=500&width=500", "/width repeated-parameter")]
     [InlineData("svg", "scale=2", "/scale unknown-parameter")]
     [InlineData("pdf", "scale=2", "/scale unknown-parameter")]
+    [InlineData("svg", "theme=sepia", "/theme unknown-choice")]
+    [InlineData("pdf", "theme=Dark", "/theme unknown-choice")]
+    [InlineData("png", "theme=", "/theme unknown-choice")]
+    [InlineData("svg", "theme=dark&theme=dark", "/theme repeated-parameter")]
     [InlineData("svg", "colour=red", "/colour unknown-parameter")]
     [InlineData("svg", "Width=500", "/Width unknown-parameter")]
     [InlineData("png", "width=1&height=1&scale=9&zoom=2", "/width out-of-range,/height out-of-range,/scale out-of-range,/zoom unknown-parameter")]
@@ -123,6 +127,35 @@ public sealed class ChartPictureTests(RunningService service)
             Assert.Equal(400, refusal.Status);
             Assert.Equal(expected.Split(',').Order(), refusal.Faults.Order());
         }
+    }
+
+    /// <summary>By hand: 1.96 · 0.3 % and, of 1 % of the mold's volume, 1.96 · 1 % of each dry density.</summary>
+    [Fact]
+    public async Task Specimens_have_error_bars_where_the_request_gives_uncertainties_and_none_elsewhere()
+    {
+        Assert.DoesNotContain((await Draw(Body.Sound)).Descendants(), element => (string?)element.Attribute("class") == "error-bars");
+        var answer = await service.AnswerAsync(Body.With("/uncertainty", """{"waterContent":0.3,"volume":9.44}"""));
+        Assert.Single((await Draw(Body.With("/uncertainty", """{"waterContent":0.3,"volume":9.44}"""))).Descendants(), element => (string?)element.Attribute("class") == "error-bars");
+        var chart = ChartLink.Unpack(ChartLink.Data(answer.Text("/links/svg")!));
+        foreach (var specimen in chart["specimens"]!.AsArray())
+        {
+            var (w, density) = ((double)specimen!["waterContent"]! / 100, (double)specimen["dryDensity"]!);
+            Assert.Equal(1.96 * 0.3, (double)specimen["waterContentPlusMinus"]!, 0.001);
+            Assert.Equal(1.96 * density * Math.Sqrt(Math.Pow(0.01, 2) + Math.Pow(0.003 / (1 + w), 2)), (double)specimen["dryDensityPlusMinus"]!, 0.0005);
+        }
+    }
+
+    [Theory]
+    [InlineData("light", "#FCFBF8")]
+    [InlineData("dark", "#161513")]
+    [InlineData("print", "#FFFFFF")]
+    public async Task A_theme_is_drawn_in_its_colors_by_link_and_by_post_in_the_same_bytes(string theme, string ground)
+    {
+        var linked = await service.BytesAsync($"{await ChartLink.OfSoundTest(service)}&theme={theme}");
+        using var posted = await service.PostAsync(Body.Sound, "image/svg+xml", $"{RunningService.MoistureDensity}?theme={theme}");
+        Assert.Equal(linked, await posted.Content.ReadAsByteArrayAsync(TestContext.Current.CancellationToken));
+        var paper = XDocument.Parse(System.Text.Encoding.UTF8.GetString(linked)).Root!.Element(Namespace + "rect")!;
+        Assert.Equal(ground, (string?)paper.Attribute("fill"));
     }
 
     [Fact]
