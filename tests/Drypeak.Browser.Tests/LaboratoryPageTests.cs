@@ -1,7 +1,7 @@
 using System.Text.RegularExpressions;
-using Deque.AxeCore.Playwright;
 using Microsoft.Playwright;
 using Xunit;
+using static Drypeak.Browser.Tests.PageChecks;
 
 namespace Drypeak.Browser.Tests;
 
@@ -188,7 +188,7 @@ public sealed partial class LaboratoryPageTests(Browser browser)
         await using var visit = await browser.OpenAsync(1280);
         await visit.Page.GotoAsync(address);
         var pdf = await visit.Page.PdfAsync(new PagePdfOptions { Format = "A4", PreferCSSPageSize = true });
-        Assert.Equal(1, PageObject().Count(System.Text.Encoding.Latin1.GetString(pdf)));
+        Assert.Equal(1, SheetsOf(pdf));
     }
 
     [Fact]
@@ -272,18 +272,6 @@ public sealed partial class LaboratoryPageTests(Browser browser)
         Assert.True((await chart.BoundingBoxAsync())!.Width > 250);
     }
 
-    /// <summary>The page itself never scrolls sideways; wide tables do in their own frame.</summary>
-    private static async Task AssertFitsAsync(IPage page) =>
-        Assert.Equal(0, await page.EvaluateAsync<int>("Math.max(0, document.documentElement.scrollWidth - document.documentElement.clientWidth)"));
-
-    private static async Task AssertAccessibleAsync(IPage page, string state)
-    {
-        var result = await page.RunAxe().WaitAsync(Browser.Patience);
-        Assert.Contains(result.Passes, rule => rule.Id == "color-contrast");
-        Assert.True(result.Violations.Length == 0, $"{state}: " + string.Join("; ", result.Violations.Select(
-            violation => $"{violation.Id} ({violation.Help}): {string.Join(", ", violation.Nodes.Select(node => node.Html))}")));
-    }
-
     private static async Task TypeIntoAsync(IPage page, string id, string text)
     {
         await TabToAsync(page, "#" + id);
@@ -316,7 +304,4 @@ public sealed partial class LaboratoryPageTests(Browser browser)
 
     [GeneratedRegex("^Error:")]
     private static partial Regex ErrorFirst();
-
-    [GeneratedRegex(@"/Type\s*/Page\b")]
-    private static partial Regex PageObject();
 }

@@ -31,7 +31,7 @@ internal static class FieldJobs
         }
         """;
 
-    public static async Task<JsonElement> AnswerAsync(this RunningService service, string address, string body)
+    public static async Task<JsonElement> AnswerOfAsync(this RunningService service, string address, string body)
     {
         using var response = await service.PostAsync(body, address: address);
         var text = await RunningService.TextOf(response);
@@ -39,7 +39,7 @@ internal static class FieldJobs
         return JsonElement.Parse(text);
     }
 
-    public static async Task<Refusal> RefusalAsync(this RunningService service, string address, string body)
+    public static async Task<Refusal> RefusalOfAsync(this RunningService service, string address, string body)
     {
         using var response = await service.PostAsync(body, address: address);
         return await Refusal.Of(response);

@@ -193,6 +193,16 @@ public class TableReaderTests
             """[{"label":"A","moldAndWetSoil":6027,"mold":{"mass":4250,"volume":943.3},"waterContent":10.4}]"""
         },
         {
+            "a depth below the rim in mm, after a comma as on the sheet with blanks",
+            "Specimen\tMold + wet soil\tDepth below the rim, mm\tWater content\nA\t6027\t3.2\t10.4",
+            """[{"label":"A","moldAndWetSoil":6027,"depthBelowRim":3.2,"waterContent":10.4}]"""
+        },
+        {
+            "a depth below the rim in inches for a form in mm",
+            "Mold + wet soil\tBelow rim [in]\tWater content\n6027\t0.125\t10.4",
+            """[{"moldAndWetSoil":6027,"depthBelowRim":3.175,"waterContent":10.4}]"""
+        },
+        {
             "water content on wet mass",
             "Wet density\tWet basis\n1.88\t9.4",
             """[{"wetDensity":1.88,"wetBasis":9.4}]"""

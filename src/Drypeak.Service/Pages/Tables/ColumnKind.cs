@@ -7,6 +7,7 @@ public enum Measure
     Mass,
     TinMass,
     Volume,
+    Length,
     Density,
     Percent,
 }
@@ -21,6 +22,7 @@ public sealed record ColumnKind(string Heading, Measure Measure, string Member)
     public static readonly ColumnKind MoldAndWetSoil = new("Mold + wet soil", Measure.Mass, "moldAndWetSoil");
     public static readonly ColumnKind MoldMass = new("Mold", Measure.Mass, "mold/mass");
     public static readonly ColumnKind MoldVolume = new("Mold volume", Measure.Volume, "mold/volume");
+    public static readonly ColumnKind DepthBelowRim = new("Depth below the rim", Measure.Length, "depthBelowRim");
     public static readonly ColumnKind WetMass = new("Wet mass", Measure.Mass, "wetMass");
     public static readonly ColumnKind WetDensity = new("Wet density", Measure.Density, "wetDensity");
     public static readonly ColumnKind DryDensity = new("Dry density", Measure.Density, "dryDensity");
@@ -33,7 +35,7 @@ public sealed record ColumnKind(string Heading, Measure Measure, string Member)
 
     public static IReadOnlyList<ColumnKind> All { get; } =
     [
-        Specimen, MoldAndWetSoil, MoldMass, MoldVolume, WetMass, WetDensity, DryDensity, WaterContent, WetBasis, Tin, TinAndWet, TinAndDry, SetAside,
+        Specimen, MoldAndWetSoil, MoldMass, MoldVolume, DepthBelowRim, WetMass, WetDensity, DryDensity, WaterContent, WetBasis, Tin, TinAndWet, TinAndDry, SetAside,
     ];
 
     /// <summary>Whether a specimen may have several of it.</summary>

@@ -45,6 +45,8 @@ internal static partial class ColumnNames
         ["mold empty"] = ColumnKind.MoldMass,
         ["mold volume"] = ColumnKind.MoldVolume,
         ["volume mold"] = ColumnKind.MoldVolume,
+        ["depth below rim"] = ColumnKind.DepthBelowRim,
+        ["below rim"] = ColumnKind.DepthBelowRim,
         ["wet"] = ColumnKind.WetMass,
         ["wet density"] = ColumnKind.WetDensity,
         ["wet unit"] = ColumnKind.WetDensity,
@@ -126,7 +128,7 @@ internal static partial class ColumnNames
     ];
 
     /// <summary>A unit in brackets, or a known one after a comma or a slash at the end.</summary>
-    [GeneratedRegex(@"[\[(](?<unit>[^\])]*)[\])]|[,/]\s*(?<unit>%|k?g|lbs?|cm[3³]|(?:k?g|Mg|t|lb|kN)/(?:c?m|ft)[3³])\s*$")]
+    [GeneratedRegex(@"[\[(](?<unit>[^\])]*)[\])]|[,/]\s*(?<unit>%|k?g|lbs?|mm|cm|cm[3³]|(?:k?g|Mg|t|lb|kN)/(?:c?m|ft)[3³])\s*$")]
     private static partial Regex UnitPart();
 
     [GeneratedRegex("([a-z])([A-Z])")]

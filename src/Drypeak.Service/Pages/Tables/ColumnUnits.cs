@@ -38,6 +38,7 @@ internal static class ColumnUnits
     {
         Measure.Mass or Measure.TinMass => UnitNames.Mass.Keys,
         Measure.Volume => UnitNames.Volume.Keys,
+        Measure.Length => UnitNames.Length.Keys,
         Measure.Density => UnitNames.Density.Keys,
         Measure.Percent => ["%"],
         _ => [],
@@ -49,6 +50,7 @@ internal static class ColumnUnits
         Measure.Mass => units.Mass.Code(),
         Measure.TinMass => units.TinMass.Code(),
         Measure.Volume => units.Volume.Code(),
+        Measure.Length => units.Length.Code(),
         Measure.Density => units.Density.Code(),
         Measure.Percent => "%",
         _ => "",
@@ -70,6 +72,7 @@ internal static class ColumnUnits
             Measure.Mass => Mass.From(number, UnitNames.Mass[unit]).In(units.Mass),
             Measure.TinMass => Mass.From(number, UnitNames.Mass[unit]).In(units.TinMass),
             Measure.Volume => Volume.From(number, UnitNames.Volume[unit]).In(units.Volume),
+            Measure.Length => Length.From(number, UnitNames.Length[unit]).In(units.Length),
             Measure.Density => Density.From(number, UnitNames.Density[unit]).In(units.Density),
             _ => number,
         };

@@ -60,6 +60,7 @@ public sealed class SpecimenSheet
             Label = Text(row, ColumnKind.Specimen),
             MoldAndWetSoil = Number(row, ColumnKind.MoldAndWetSoil),
             Mold = mold is (null, null) ? null : new MoldContract { Mass = mold.Mass, Volume = mold.Volume },
+            DepthBelowRim = Number(row, ColumnKind.DepthBelowRim),
             WetMass = Number(row, ColumnKind.WetMass),
             WetDensity = Number(row, ColumnKind.WetDensity),
             DryDensity = Number(row, ColumnKind.DryDensity),
