@@ -44,8 +44,11 @@ public class RunningService : IDisposable
         return await Client.SendAsync(request, TestContext.Current.CancellationToken);
     }
 
-    /// <summary>Posts a laboratory test, or another job, that has to be computed.</summary>
-    public async Task<JsonElement> AnswerAsync(string body, string address = MoistureDensity)
+    /// <summary>Posts a laboratory test that has to be computed.</summary>
+    public Task<JsonElement> AnswerAsync(string body) => AnswerAsync(MoistureDensity, body);
+
+    /// <summary>Posts a job that has to be computed.</summary>
+    public async Task<JsonElement> AnswerAsync(string address, string body)
     {
         using var response = await PostAsync(body, address: address);
         var text = await TextOf(response);
@@ -54,8 +57,11 @@ public class RunningService : IDisposable
         return JsonElement.Parse(text);
     }
 
-    /// <summary>Posts a laboratory test, or another job, that has to be refused.</summary>
-    public async Task<Refusal> RefusalAsync(string body, string address = MoistureDensity)
+    /// <summary>Posts a laboratory test that has to be refused.</summary>
+    public Task<Refusal> RefusalAsync(string body) => RefusalAsync(MoistureDensity, body);
+
+    /// <summary>Posts a job that has to be refused.</summary>
+    public async Task<Refusal> RefusalAsync(string address, string body)
     {
         using var response = await PostAsync(body, address: address);
         return await Refusal.Of(response);
