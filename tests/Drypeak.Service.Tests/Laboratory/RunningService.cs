@@ -18,12 +18,19 @@ public class RunningService : IDisposable
 {
     public const string MoistureDensity = "/v1/moisture-density";
 
+    /// <summary>Held while a service starts: two that start at once in one process take each other's settings.</summary>
+    internal static readonly Lock Starting = new();
+
     private readonly QuietService _service = new();
 
     public RunningService()
     {
-        _service.UseKestrel(0);
-        _service.StartServer();
+        lock (Starting)
+        {
+            _service.UseKestrel(0);
+            _service.StartServer();
+        }
+
         Client = new HttpClient(new SocketsHttpHandler { AllowAutoRedirect = false, UseCookies = false })
         {
             BaseAddress = _service.ClientOptions.BaseAddress,
