@@ -1,4 +1,5 @@
 using Drypeak.Service.Pages.Catalogues;
+using Drypeak.Service.Pages.FieldDensity;
 using Drypeak.Service.Pages.Laboratory;
 using Drypeak.Service.Pages.Preparation;
 using Microsoft.AspNetCore.Components;
@@ -13,6 +14,7 @@ internal static class PageEndpoints
     {
         PageFiles.Map(app);
         LaboratoryPageEndpoints.Map(app);
+        FieldPageEndpoints.Map(app);
         SpecimenSheetPageEndpoint.Map(app);
         MapStill<TestMethodsPage>(app, "/test-methods");
         MapStill<FindingsPage>(app, "/findings");

@@ -1,6 +1,5 @@
 using Drypeak.Service.Hosting;
 using Drypeak.Service.Laboratory;
-using Microsoft.AspNetCore.Http.Features;
 
 namespace Drypeak.Service.Pages.Laboratory;
 
@@ -10,11 +9,6 @@ namespace Drypeak.Service.Pages.Laboratory;
 /// </summary>
 internal static class LaboratoryPageEndpoints
 {
-    /// <summary>Fields of the largest grid and some more.</summary>
-    private const int MostFields = 2000;
-
-    private const string FormType = "application/x-www-form-urlencoded";
-
     private static readonly string[] Reading = [HttpMethods.Get, HttpMethods.Head];
 
     public static void Map(IEndpointRouteBuilder app)
@@ -45,26 +39,10 @@ internal static class LaboratoryPageEndpoints
 
     private static async Task<IResult> PostAsync(HttpContext context, MoistureDensityJob job, Limits limits, Func<Submission, Limits, IResult> answer)
     {
-        if (!(context.Request.ContentType ?? "").StartsWith(FormType, StringComparison.OrdinalIgnoreCase))
+        var (posted, refusal) = await PostedForm.ReadAsync(context, limits);
+        if (posted is null)
         {
-            return Problems.UnsupportedMediaType(FormType);
-        }
-
-        if (await RequestReader.ReadBytesAsync(context, limits.BodyBytes) is not { } body)
-        {
-            return Problems.TooLarge(limits.BodyBytes);
-        }
-
-        // Read to its bound first, so that who sends too much hears it and is not cut off; the form is read from what came.
-        context.Request.Body = new MemoryStream(body.ToArray(), writable: false);
-        IFormCollection posted;
-        try
-        {
-            posted = await context.Request.ReadFormAsync(new FormOptions { ValueCountLimit = MostFields, ValueLengthLimit = limits.BodyBytes }, context.RequestAborted);
-        }
-        catch (InvalidDataException)
-        {
-            return Problems.TooLarge(limits.BodyBytes);
+            return refusal!;
         }
 
         var form = TestForm.From(posted);

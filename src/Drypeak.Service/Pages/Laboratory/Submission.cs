@@ -3,6 +3,16 @@ using Drypeak.Service.Laboratory;
 
 namespace Drypeak.Service.Pages.Laboratory;
 
+/// <summary>A form as it was typed, with what is wrong with each of its fields: what the controls of every page show.</summary>
+public interface IFilledForm
+{
+    /// <summary>What a field holds.</summary>
+    string TextOf(Field field);
+
+    /// <summary>What is wrong with a field, or null.</summary>
+    string? FaultOf(Field field);
+}
+
 /// <summary>A form with what came of it: an answer, or all that is wrong.</summary>
 /// <param name="Form">As it was typed.</param>
 /// <param name="Reading">What was understood; null for a form that was only opened.</param>
@@ -10,7 +20,7 @@ namespace Drypeak.Service.Pages.Laboratory;
 /// <param name="Answer">The answer, or null.</param>
 /// <param name="Chart">Its chart, or null.</param>
 /// <param name="Status">HTTP status: 200, 400 where a text could not be read, 422 where values cannot be computed.</param>
-public sealed record Submission(TestForm Form, FormReading? Reading, IReadOnlyList<FormFault> Faults, MoistureDensityAnswer? Answer, CompactionChart? Chart, int Status)
+public sealed record Submission(TestForm Form, FormReading? Reading, IReadOnlyList<FormFault> Faults, MoistureDensityAnswer? Answer, CompactionChart? Chart, int Status) : IFilledForm
 {
     private static readonly Field[] FieldsUnderMore =
     [
@@ -25,7 +35,10 @@ public sealed record Submission(TestForm Form, FormReading? Reading, IReadOnlyLi
     /// <summary>Whether a field under "More" is wrong: it must then be in view.</summary>
     public bool MoreAsked => Faults.Any(fault => FieldsUnderMore.Contains(fault.Field));
 
-    /// <summary>What is wrong with a field, or null.</summary>
+    /// <inheritdoc/>
+    public string TextOf(Field field) => Form[field];
+
+    /// <inheritdoc/>
     public string? FaultOf(Field field) =>
         Faults.Where(fault => fault.Field == field).Select(fault => fault.Advice).ToList() is { Count: > 0 } advice ? string.Join(" ", advice) : null;
 
