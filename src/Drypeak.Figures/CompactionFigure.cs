@@ -32,15 +32,15 @@ public static class CompactionFigure
         }
 
         var type = new TypeScale(size);
-        var wording = new Wording(chart);
-        var lines = PhaseLines.Of(chart);
+        var wording = new Wording(chart, options);
+        var lines = PhaseLines.Of(chart, options);
         var heading = Heading.Lay(wording, size, type);
         var plot = Plot.Lay(View.Of(chart, lines), heading.Bottom, wording, size, type);
 
         var axes = new Axes(plot, wording, size, type, theme);
         var phaseLines = new PhaseLineMarks(lines, plot, type, theme);
         var curve = new CurveLine(chart, plot, type);
-        var specimens = new SpecimenMarks(chart, plot, type);
+        var specimens = new SpecimenMarks(chart, wording, plot, type);
         var optima = new OptimumMarks(chart, wording, plot, type, theme);
 
         var space = new LabelSpace(new Area(0, 0, size.Width, size.Height).Grown(-1));
@@ -54,7 +54,7 @@ public static class CompactionFigure
         space.PlaceEach(heading.Runs);
         axes.Label(space);
         optima.Label(space);
-        var next = NextSpecimenMark.Draw(chart.NextSpecimen, plot, type, space);
+        var next = NextSpecimenMark.Draw(chart.NextSpecimen, wording, plot, type, space);
         var labeledLines = phaseLines.DrawLabeled(space);
         specimens.Label(space);
 

@@ -51,9 +51,19 @@ public sealed class LabelTests
         Assert.InRange(reference.Length, 40, 100);
     }
 
-    private static void AssertReadable(CompactionChart chart, FigureSize size)
+    [Fact]
+    public void Texts_keep_apart_in_every_language_and_under_any_title()
     {
-        var boxes = SvgPicture.Of(chart, size).TextBoxes.ToList();
+        Gen.Select(Charts.Any, Charts.Size, Gen.Int[0, Language.All.Count - 1], Gen.OneOf("", "Ternmarsh", new string('M', 200), "\u202E<&\">\n中")).Sample(
+            (chart, size, language, title) => AssertReadable(chart, new FigureOptions { Size = size, Language = Language.All[language], Title = title }), iter: 200);
+    }
+
+    private static void AssertReadable(CompactionChart chart, FigureSize size) => AssertReadable(chart, new FigureOptions { Size = size });
+
+    private static void AssertReadable(CompactionChart chart, FigureOptions options)
+    {
+        var size = options.Size;
+        var boxes = SvgPicture.Read(SvgWriter.Write(CompactionFigure.Draw(chart, options))).TextBoxes.ToList();
         for (var i = 0; i < boxes.Count; i++)
         {
             var box = boxes[i];

@@ -67,13 +67,13 @@ internal sealed class Axes(Plot plot, Wording wording, FigureSize size, TypeScal
     private IEnumerable<TextRun> Titles()
     {
         yield return Title(wording.DensityAxis, new Place(type.Margin, plot.Area.Top - (TitleAboveAxis * type.AxisTitle)), TextAnchor.Start);
-        yield return Title(Wording.WaterAxis, new Place(plot.Area.Right, size.Height - WaterTitleDepth(type)), TextAnchor.End);
+        yield return Title(wording.WaterAxis, new Place(plot.Area.Right, size.Height - WaterTitleDepth(type)), TextAnchor.End);
     }
 
     /// <summary>A value of the result under the axis of water content.</summary>
     private TextRun WaterValue(ChartOptimum optimum)
     {
-        var text = Wording.BareWater(optimum);
+        var text = wording.BareWater(optimum);
         var half = EmbeddedFont.SemiBold.Measure(text, type.Value) / 2;
         var x = Math.Min(plot.Water.At(optimum.WaterContent), size.Width - half - 1);
         return new TextRun(text, new Place(x, plot.Area.Bottom + LabelBaseline(type)), type.Value, EmbeddedFont.SemiBold, ColorRole.Clay, TextAnchor.Middle);
@@ -92,13 +92,13 @@ internal sealed class Axes(Plot plot, Wording wording, FigureSize size, TypeScal
         foreach (var value in plot.WaterTicks.Values)
         {
             var place = new Place(plot.Water.At(value), plot.Area.Bottom + LabelBaseline(type));
-            yield return TickLabel(plot.WaterTicks.Label(value), place, TextAnchor.Middle);
+            yield return TickLabel(wording.Number(plot.WaterTicks.Label(value)), place, TextAnchor.Middle);
         }
 
         foreach (var value in plot.DensityTicks.Values)
         {
             var place = new Place(plot.Area.Left - LabelGap(type), plot.Density.At(value) + (0.33 * type.Label));
-            yield return TickLabel(plot.DensityTicks.Label(value), place, TextAnchor.End);
+            yield return TickLabel(wording.Number(plot.DensityTicks.Label(value)), place, TextAnchor.End);
         }
     }
 

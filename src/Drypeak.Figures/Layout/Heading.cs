@@ -43,6 +43,17 @@ internal sealed record Heading(IReadOnlyList<TextRun> Runs, double Bottom)
     private static (IReadOnlyList<string> Lines, double Size) Title(Wording wording, double width, TypeScale type)
     {
         const double step = 0.5;
+        if (wording.OwnTitle is { } own)
+        {
+            var largest = type.Title;
+            while (largest > type.Title * 0.8 && largest > TypeScale.LeastText && !Fits(own, largest))
+            {
+                largest -= step;
+            }
+
+            return ([PlainText.Elide(own, EmbeddedFont.SemiBold, largest, width)], largest);
+        }
+
         var headline = wording.Headline;
         for (var size = type.Title; size >= Math.Max(type.Title * 0.8, TypeScale.LeastText); size -= step)
         {
@@ -68,7 +79,7 @@ internal sealed record Heading(IReadOnlyList<TextRun> Runs, double Bottom)
 
     private static IEnumerable<string> Subtitles(Wording wording, double width, FigureSize size, TypeScale type)
     {
-        var lines = new[] { wording.Reference, Joined([wording.Intervals, wording.Bars]) }.Where(line => line.Length > 0).ToList();
+        var lines = new[] { Joined([wording.OwnTitle is null ? "" : wording.ResultLine, wording.Reference]), Joined([wording.Intervals, wording.Bars]) }.Where(line => line.Length > 0).ToList();
         var joined = Joined(lines);
         if (lines.Count == 2 && Fits(joined))
         {

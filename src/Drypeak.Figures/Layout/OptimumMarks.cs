@@ -65,9 +65,9 @@ internal sealed class OptimumMarks(CompactionChart chart, Wording wording, Plot 
 
     public void Label(LabelSpace space)
     {
-        Beside(chart.Corrected, Wording.Corrected);
-        Beside(chart.Adopted, _ => ["adopted"]);
-        Beside(chart.Adopted is null ? null : chart.Optimum, Wording.Fitted);
+        Beside(chart.Corrected, wording.Corrected);
+        Beside(chart.Adopted, _ => [wording.Adopted]);
+        Beside(chart.Adopted is null ? null : chart.Optimum, wording.Fitted);
 
         void Beside(ChartOptimum? optimum, Func<ChartOptimum, IReadOnlyList<string>> words)
         {

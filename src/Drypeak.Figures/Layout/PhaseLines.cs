@@ -4,39 +4,27 @@ using Drypeak.Soil.Quantities;
 
 namespace Drypeak.Figures.Layout;
 
-/// <summary>Kinds of lines through states of equal air.</summary>
-internal enum PhaseLineKind
-{
-    ZeroAirVoids,
-    Saturation,
-    AirVoids,
-}
-
 /// <summary>A line of equal saturation or equal air voids.</summary>
 /// <param name="Kind">Its kind.</param>
 /// <param name="Percent">Its saturation or air voids, %.</param>
+/// <param name="Phrases">The language that its label is in.</param>
 /// <param name="DryDensityAt">Dry density in the chart's unit at a water content in %, 0 or more.</param>
-internal sealed record PhaseLine(PhaseLineKind Kind, double Percent, Func<double, double> DryDensityAt)
+internal sealed record PhaseLine(PhaseLineKind Kind, double Percent, Phrases Phrases, Func<double, double> DryDensityAt)
 {
-    private string PercentText => FormattableString.Invariant($"{Percent:0.###} %");
 
     /// <summary>Its label, the fullest first.</summary>
     public IReadOnlyList<string> Labels => Kind switch
     {
-        PhaseLineKind.ZeroAirVoids => ["zero air voids", "S 100 %"],
-        PhaseLineKind.Saturation => [$"saturation {PercentText}", $"S {PercentText}"],
-        PhaseLineKind.AirVoids => [$"air voids {PercentText}", $"A {PercentText}"],
+        PhaseLineKind.ZeroAirVoids => [Phrases.ZeroAirVoids, Filled(Phrases.Saturation.Brief)],
+        PhaseLineKind.Saturation => [Filled(Phrases.Saturation.Full), Filled(Phrases.Saturation.Brief)],
+        PhaseLineKind.AirVoids => [Filled(Phrases.AirVoids.Full), Filled(Phrases.AirVoids.Brief)],
         _ => throw new InvalidOperationException(),
     };
 
+    private string Filled(string template) => Phrases.Fill(template, Phrases.Number(FormattableString.Invariant($"{Percent:0.###} %")));
+
     /// <summary>Its class in SVG.</summary>
-    public string Name => Kind switch
-    {
-        PhaseLineKind.ZeroAirVoids => "zero-air-voids",
-        PhaseLineKind.Saturation => "saturation",
-        PhaseLineKind.AirVoids => "air-voids",
-        _ => throw new InvalidOperationException(),
-    };
+    public string Name => Kind.Name();
 
     public Stroke Stroke(TypeScale type, Theme theme) => Kind switch
     {
@@ -47,14 +35,14 @@ internal sealed record PhaseLine(PhaseLineKind Kind, double Percent, Func<double
     };
 }
 
-/// <summary>The lines that a chart asks for, the zero-air-voids line first; none where the solids are not known.</summary>
+/// <summary>The lines that a chart asks for, the zero-air-voids line first, of the kinds to be drawn; none where the solids are not known.</summary>
 internal sealed class PhaseLines
 {
     private PhaseLines(IReadOnlyList<PhaseLine> all) => All = all;
 
     public IReadOnlyList<PhaseLine> All { get; }
 
-    public static PhaseLines Of(CompactionChart chart)
+    public static PhaseLines Of(CompactionChart chart, FigureOptions options)
     {
         if (chart is not { SpecificGravity: { } gravity, WaterDensity: { } kilogramsPerCubicMeter })
         {
@@ -62,18 +50,19 @@ internal sealed class PhaseLines
         }
 
         var water = new Density(kilogramsPerCubicMeter);
-        PhaseLine Saturation(double percent, PhaseLineKind kind) => new(kind, percent, w =>
+        PhaseLine Saturation(double percent, PhaseLineKind kind) => new(kind, percent, options.Language.Phrases, w =>
             PhaseRelations.OnSaturationLine(WaterContent.FromPercent(w), percent / 100, gravity, water).In(chart.DensityUnit));
-        PhaseLine AirVoids(double percent) => new(PhaseLineKind.AirVoids, percent, w =>
+        PhaseLine AirVoids(double percent) => new(PhaseLineKind.AirVoids, percent, options.Language.Phrases, w =>
             PhaseRelations.OnAirVoidsLine(WaterContent.FromPercent(w), percent / 100, gravity, water).In(chart.DensityUnit));
 
-        return new PhaseLines(
+        PhaseLine[] all =
         [
             Saturation(100, PhaseLineKind.ZeroAirVoids),
             .. chart.Saturation.Where(percent => percent != 100).Distinct().Select(percent => Saturation(percent, PhaseLineKind.Saturation)),
             .. chart.AirVoids.Where(percent => percent != 0).Distinct().Select(AirVoids),
-        ]);
+        ];
+        return new PhaseLines([.. all.Where(line => options.Lines.Contains(line.Kind))]);
     }
 
-    public double? ZeroAirVoidsAt(double waterContent) => All.Count > 0 && waterContent >= 0 ? All[0].DryDensityAt(waterContent) : null;
+    public double? ZeroAirVoidsAt(double waterContent) => All is [{ Kind: PhaseLineKind.ZeroAirVoids } line, ..] && waterContent >= 0 ? line.DryDensityAt(waterContent) : null;
 }

@@ -45,7 +45,7 @@ internal sealed class Plot
         var densityTicks = Ticks.Within(view.DryDensity, Math.Clamp((bottom - top) / (LeastDensityTickDistance * type.Unit), 1, MostTicks));
 
         var labelWidth = densityTicks.Values
-            .Select(value => EmbeddedFont.Regular.Measure(densityTicks.Label(value), type.Label))
+            .Select(value => EmbeddedFont.Regular.Measure(wording.Number(densityTicks.Label(value)), type.Label))
             .Append(wording.Result is { } result ? EmbeddedFont.SemiBold.Measure(wording.BareDensity(result), type.Value) : 0)
             .Max();
         var left = Math.Round(Math.Min(type.Margin + labelWidth + Axes.LabelGap(type), size.Width * 0.45)) + 0.5;

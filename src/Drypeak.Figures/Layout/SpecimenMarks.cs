@@ -6,7 +6,7 @@ namespace Drypeak.Figures.Layout;
 /// The measured points: discs, rings where set aside, with error bars where they are uncertain. Those set aside lie beneath, so that no
 /// fitted point is hidden, and the bars beneath all.
 /// </summary>
-internal sealed class SpecimenMarks(CompactionChart chart, Plot plot, TypeScale type)
+internal sealed class SpecimenMarks(CompactionChart chart, Wording wording, Plot plot, TypeScale type)
 {
     /// <summary>Above this many their labels would say nothing.</summary>
     private const int MostLabeled = 40;
@@ -37,7 +37,7 @@ internal sealed class SpecimenMarks(CompactionChart chart, Plot plot, TypeScale 
     {
         foreach (var specimen in chart.Specimens.Count <= MostLabeled ? chart.Specimens : [])
         {
-            var candidates = Wording.Specimen(specimen)
+            var candidates = wording.Specimen(specimen)
                 .SelectMany(text => MarkLabels.Around(plot.At(specimen.Point), type.MarkRadius, text, type.Label, ColorRole.Quiet, WidestLabel));
             space.Place(candidates.Select(candidate => candidate with { Name = "specimen-label" }), Barriers.All);
         }

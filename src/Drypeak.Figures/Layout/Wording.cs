@@ -3,18 +3,21 @@ using Drypeak.Soil.Quantities;
 
 namespace Drypeak.Figures.Layout;
 
-/// <summary>Every sentence and label of a compaction figure that is made from its numbers.</summary>
+/// <summary>Every sentence and label of a compaction figure that is made from its numbers, in the reader's language.</summary>
 internal sealed class Wording
 {
     private const string Percent = " %";
 
     private readonly CompactionChart _chart;
+    private readonly FigureOptions _options;
+    private readonly Phrases _phrases;
 
-    public Wording(CompactionChart chart)
+    public Wording(CompactionChart chart, FigureOptions options)
     {
-        _chart = chart;
+        (_chart, _options, _phrases) = (chart, options, options.Language.Phrases);
         Result = chart.Adopted ?? chart.Optimum;
         Reference = PlainText.Clean(chart.Reference ?? "");
+        OwnTitle = PlainText.Clean(options.Title ?? "") is { Length: > 0 } own ? own : null;
     }
 
     /// <summary>The optimum that stands for the result, or null.</summary>
@@ -23,22 +26,28 @@ internal sealed class Wording
     /// <summary>The test's name, empty where there is none.</summary>
     public string Reference { get; }
 
+    /// <summary>The title that was asked for, or null where the result is the title.</summary>
+    public string? OwnTitle { get; }
+
     private string Unit => _chart.DensityUnit.Symbol();
 
-    private string DensityName => _chart.DensityUnit.DryDensityName();
+    private string DensityName => Term(_phrases.DryDensity);
 
-    private bool IsAdopted => _chart.Adopted is not null;
+    private string MaximumName => Term(_chart.Adopted is null ? _phrases.Maximum : _phrases.AdoptedMaximum);
 
     /// <summary>The result, in two halves between which a line may break.</summary>
     public (string First, string Second) Headline => Result is null
-        ? ("No optimum", "within the tested range")
-        : ($"{(IsAdopted ? "Adopted maximum" : "Maximum")} {DensityName} {Density(Result)}", $"at {Water(Result)} water");
+        ? _phrases.NoOptimum
+        : ($"{Capitalized(MaximumName)} {Density(Result)}", Fill(_phrases.AtWater, Water(Result)));
 
     /// <summary>The result in one line.</summary>
-    public string Title => $"{Headline.First} {Headline.Second}";
+    public string ResultLine => $"{Headline.First} {Headline.Second}";
+
+    /// <summary>The title in one line.</summary>
+    public string Title => OwnTitle ?? ResultLine;
 
     /// <summary>What the bars on the marks are, or empty where there is none.</summary>
-    public string Bars => _chart.Specimens.Any(specimen => specimen.IsUncertain) ? "bars: 95 % of each measurement" : "";
+    public string Bars => HasBars ? _phrases.Bars : "";
 
     /// <summary>The 95 % intervals of the result, or empty.</summary>
     public string Intervals
@@ -47,12 +56,17 @@ internal sealed class Wording
         {
             var water = IntervalText(Result?.WaterContentInterval, 1, "%");
             var density = IntervalText(Result?.MaximumDryDensityInterval, DensityDecimals, Unit);
-            var both = string.Join(" and ", new[] { density, water }.OfType<string>());
-            return both.Length == 0 ? "" : $"95 % interval {both}";
+            return (density, water) switch
+            {
+                (null, null) => "",
+                ({ } only, null) => Fill(_phrases.Interval, only),
+                (null, { } only) => Fill(_phrases.Interval, only),
+                _ => Fill(_phrases.Interval, Fill(_phrases.And, density, water)),
+            };
         }
     }
 
-    public static string WaterAxis => "Water content (%)";
+    public string WaterAxis => $"{Capitalized(_phrases.WaterContent)} (%)";
 
     public string DensityAxis => $"{Capitalized(DensityName)} ({Unit})";
 
@@ -61,68 +75,82 @@ internal sealed class Wording
     {
         get
         {
-            var sentences = new List<string> { Specimens, ResultSentence };
+            var describe = _phrases.Describe;
+            var sentences = new List<string>
+            {
+                Specimens,
+                Result is null ? describe.NoResult : Capitalized(Fill(describe.Result, MaximumName, Density(Result), Water(Result))),
+            };
             if (Intervals.Length > 0)
             {
-                sentences.Add($"{Intervals}.");
+                sentences.Add($"{Capitalized(Intervals)}.");
             }
 
-            if (Bars.Length > 0)
+            if (HasBars)
             {
-                sentences.Add("Bars on the marks are the 95 % intervals of the measurements.");
+                sentences.Add(describe.Bars);
             }
 
             if (_chart is { Adopted: not null, Optimum: { } fitted })
             {
-                sentences.Add($"The fitted curve has its maximum of {Density(fitted)} at {Water(fitted)}.");
+                sentences.Add(Fill(describe.Fitted, Density(fitted), Water(fitted)));
             }
 
             if (_chart.Corrected is { } corrected)
             {
-                sentences.Add($"Corrected for oversize: {Density(corrected)} at {Water(corrected)}.");
+                sentences.Add(Fill(describe.Corrected, Density(corrected), Water(corrected)));
             }
 
-            var lines = PhaseLines.Of(_chart).All;
+            var lines = PhaseLines.Of(_chart, _options).All;
             if (lines.Count > 0)
             {
-                sentences.Add($"Lines: {string.Join(", ", lines.Select(line => line.Labels[0]))}.");
+                sentences.Add(Fill(describe.Lines, string.Join(", ", lines.Select(line => line.Labels[0]))));
             }
 
             if (_chart.NextSpecimen is { } next)
             {
-                sentences.Add($"Suggested next specimen: {WaterText(next)} water.");
+                sentences.Add(Fill(describe.Next, WaterText(next)));
             }
 
             return string.Join(" ", sentences);
         }
     }
 
+    /// <summary>What stands beside the mark of the adopted optimum.</summary>
+    public string Adopted => _phrases.Adopted;
+
     /// <summary>What stands beside the mark of the fitted optimum where it is not the result, the fullest first.</summary>
-    public static IReadOnlyList<string> Fitted(ChartOptimum optimum) => Beside("fitted", "fitted", optimum);
+    public IReadOnlyList<string> Fitted(ChartOptimum optimum) => Beside(_phrases.Fitted, _phrases.Fitted, optimum);
 
     /// <summary>What stands beside the mark of the corrected optimum, the fullest first.</summary>
-    public static IReadOnlyList<string> Corrected(ChartOptimum optimum) => Beside("corrected for oversize", "corrected", optimum);
+    public IReadOnlyList<string> Corrected(ChartOptimum optimum) => Beside(_phrases.Corrected.Full, _phrases.Corrected.Brief, optimum);
 
     /// <summary>What stands beside a specimen's mark, the fullest first.</summary>
-    public static IReadOnlyList<string> Specimen(ChartSpecimen specimen)
+    public IReadOnlyList<string> Specimen(ChartSpecimen specimen)
     {
         var label = PlainText.Clean(specimen.Label ?? "");
         return (label, specimen.SetAside) switch
         {
-            ("", true) => ["set aside"],
-            (_, true) => [$"{label}, set aside", label],
+            ("", true) => [_phrases.SetAside],
+            (_, true) => [$"{label}, {_phrases.SetAside}", label],
             _ => [label],
         };
     }
 
     /// <summary>What stands at the next specimen's place, the fullest first.</summary>
-    public static IReadOnlyList<string> Next(double waterContent) => [$"next specimen {WaterText(waterContent)}", $"next {WaterText(waterContent)}", "next"];
+    public IReadOnlyList<string> Next(double waterContent) =>
+        [$"{_phrases.Next.Full} {WaterText(waterContent)}", $"{_phrases.Next.Brief} {WaterText(waterContent)}", _phrases.Next.Brief];
 
     /// <summary>A reported water content without its unit, which the axis names.</summary>
-    public static string BareWater(ChartOptimum optimum) => Bare(Water(optimum), "%");
+    public string BareWater(ChartOptimum optimum) => Bare(Water(optimum), "%");
 
     /// <summary>A reported density without its unit, which the axis names.</summary>
     public string BareDensity(ChartOptimum optimum) => Bare(Density(optimum), Unit);
+
+    /// <summary>A number with a decimal point as the language writes it.</summary>
+    public string Number(string text) => _phrases.Number(text);
+
+    private bool HasBars => _chart.Specimens.Any(specimen => specimen.IsUncertain);
 
     private int DensityDecimals => _chart.DensityUnit switch
     {
@@ -135,41 +163,39 @@ internal sealed class Wording
     {
         get
         {
-            var specimens = _chart.Specimens;
+            var (describe, quantity, specimens) = (_phrases.Describe, Capitalized(DensityName), _chart.Specimens);
             if (specimens.Count == 0)
             {
-                return $"{Capitalized(DensityName)} against water content, without specimens.";
+                return Fill(describe.NoSpecimens, quantity);
             }
 
             var setAside = specimens.Count(specimen => specimen.SetAside);
+            var count = setAside > 0 ? Fill(describe.ManySetAside, specimens.Count, setAside)
+                : specimens.Count == 1 ? describe.One
+                : Fill(describe.Many, specimens.Count);
             var water = Between(specimens.Min(s => s.WaterContent), specimens.Max(s => s.WaterContent), 1, "%");
             var density = Between(specimens.Min(s => s.DryDensity), specimens.Max(s => s.DryDensity), DensityDecimals, Unit);
-            return $"{Capitalized(DensityName)} against water content of {specimens.Count} {(specimens.Count == 1 ? "specimen" : "specimens")}"
-                + $"{(setAside > 0 ? $", {setAside} of them set aside" : "")}: {water} water, {density}.";
+            return Fill(describe.Specimens, quantity, count, water, density);
         }
     }
 
-    private string ResultSentence => Result is null
-        ? "There is no optimum within the tested range."
-        : $"The {(IsAdopted ? "adopted" : "fitted")} maximum {DensityName} is {Density(Result)} at an optimum water content of {Water(Result)}.";
+    private string Water(ChartOptimum optimum) => Number(PlainText.Clean(optimum.ReportedWaterContent));
 
-    private static string Water(ChartOptimum optimum) => PlainText.Clean(optimum.ReportedWaterContent);
+    private string Density(ChartOptimum optimum) => Number(PlainText.Clean(optimum.ReportedMaximumDryDensity));
 
-    private static string Density(ChartOptimum optimum) => PlainText.Clean(optimum.ReportedMaximumDryDensity);
+    private string WaterText(double percent) => Number(Ticks.Format(percent, 1)) + Percent;
 
-    private static string WaterText(double percent) => Ticks.Format(percent, 1) + Percent;
+    private string[] Beside(string full, string brief, ChartOptimum optimum) =>
+        [$"{full}: {Fill(_phrases.DensityAtWater, Density(optimum), Water(optimum))}", $"{brief}: {Density(optimum)}, {Water(optimum)}", brief];
 
-    private static string[] Beside(string full, string brief, ChartOptimum optimum) =>
-        [$"{full}: {Density(optimum)} at {Water(optimum)}", $"{brief}: {Density(optimum)}, {Water(optimum)}", brief];
-
-    private static string Between(double lower, double upper, int decimals, string unit)
+    private string Between(double lower, double upper, int decimals, string unit)
     {
-        var (from, to) = (Ticks.Format(lower, decimals), Ticks.Format(upper, decimals));
-        return from == to ? $"{from} {unit}" : $"{from} to {to} {unit}";
+        var (from, to) = (Number(Ticks.Format(lower, decimals)), Number(Ticks.Format(upper, decimals)));
+        return from == to ? $"{from} {unit}" : $"{Fill(_phrases.Range, from, to)} {unit}";
     }
 
     /// <summary>With at least one digit of the interval's width, and no fewer decimals than readers expect.</summary>
-    private static string? IntervalText(double[]? interval, int decimals, string unit)
+    private string? IntervalText(double[]? interval, int decimals, string unit)
     {
         if (interval is not [var lower, var upper])
         {
@@ -182,6 +208,10 @@ internal sealed class Wording
 
     private static string Bare(string reported, string unit) =>
         reported.EndsWith(unit, StringComparison.Ordinal) ? reported[..^unit.Length].TrimEnd() : reported;
+
+    private string Term(Phrases.TermPair term) => _chart.DensityUnit == DensityUnit.KilonewtonPerCubicMeter ? term.UnitWeight : term.Density;
+
+    private static string Fill(string template, params object[] values) => Phrases.Fill(template, values);
 
     private static string Capitalized(string words) => char.ToUpperInvariant(words[0]) + words[1..];
 }

@@ -114,6 +114,11 @@ public sealed class ChartPictureTests(RunningService service)
     [InlineData("pdf", "theme=Dark", "/theme unknown-choice")]
     [InlineData("png", "theme=", "/theme unknown-choice")]
     [InlineData("svg", "theme=dark&theme=dark", "/theme repeated-parameter")]
+    [InlineData("png", "locale=de-DE", "/locale unknown-choice")]
+    [InlineData("svg", "locale=it&lines=saturation,airVoids", "/locale unknown-choice,/lines unknown-choice")]
+    [InlineData("svg", "lines=saturation,saturation", "/lines unknown-choice")]
+    [InlineData("svg", "lines=", "/lines unknown-choice")]
+    [InlineData("pdf", "title=%20", "/title out-of-range")]
     [InlineData("svg", "colour=red", "/colour unknown-parameter")]
     [InlineData("svg", "Width=500", "/Width unknown-parameter")]
     [InlineData("png", "width=1&height=1&scale=9&zoom=2", "/width out-of-range,/height out-of-range,/scale out-of-range,/zoom unknown-parameter")]
@@ -143,6 +148,29 @@ public sealed class ChartPictureTests(RunningService service)
             Assert.Equal(1.96 * 0.3, (double)specimen["waterContentPlusMinus"]!, 0.001);
             Assert.Equal(1.96 * density * Math.Sqrt(Math.Pow(0.01, 2) + Math.Pow(0.003 / (1 + w), 2)), (double)specimen["dryDensityPlusMinus"]!, 0.0005);
         }
+    }
+
+    [Fact]
+    public async Task A_title_a_locale_and_kinds_of_lines_are_drawn_as_the_address_asks()
+    {
+        var link = (await service.AnswerAsync(Body.With("/lines", """{"saturation":[90],"airVoids":[5]}"""))).Text("/links/svg")!;
+        var svg = XDocument.Parse(System.Text.Encoding.UTF8.GetString(await service.BytesAsync(link + "&locale=de&lines=saturation&title=Entnahme%207%20%26%20%3C8%3E")));
+        var texts = svg.Descendants(Namespace + "text").Select(text => text.Value).ToList();
+        Assert.Contains("Entnahme 7 & <8>", texts);
+        Assert.Contains("Wassergehalt (%)", texts);
+        Assert.Contains("1,86", texts);
+        Assert.Contains("Sättigungsgrad 90 %", texts);
+        Assert.DoesNotContain(svg.Descendants(), element => (string?)element.Attribute("class") is "zero-air-voids" or "air-voids");
+    }
+
+    [Fact]
+    public async Task A_title_has_up_to_200_characters()
+    {
+        var link = await ChartLink.OfSoundTest(service);
+        using var longest = await service.GetAsync($"{link}&title={new string('m', 200)}");
+        Assert.Equal(200, (int)longest.StatusCode);
+        using var longer = await service.GetAsync($"{link}&title={new string('m', 201)}");
+        Assert.Equal(["/title out-of-range"], (await Refusal.Of(longer)).Faults);
     }
 
     [Theory]
