@@ -13,6 +13,7 @@ public sealed class CataloguePagesTests(PageService service) : IClassFixture<Pag
     [InlineData("/test-methods")]
     [InlineData("/findings")]
     [InlineData("/specimen-sheet")]
+    [InlineData("/field")]
     public async Task Every_page_leads_to_the_others_and_has_one_heading_and_the_link_past_the_head(string address)
     {
         var (response, page) = await service.GetAsync(address);
@@ -20,7 +21,7 @@ public sealed class CataloguePagesTests(PageService service) : IClassFixture<Pag
         Assert.Single(page.QuerySelectorAll("h1"));
         Assert.Equal("#main", page.QuerySelector("body > :first-child")?.GetAttribute("href"));
         var links = page.QuerySelectorAll(".mast nav a").Select(link => link.GetAttribute("href")).ToList();
-        Assert.Equal(["/test-methods", "/findings", "/specimen-sheet", "/reference"], links);
+        Assert.Equal(["/field", "/test-methods", "/findings", "/specimen-sheet", "/reference"], links);
         Assert.Empty(page.QuerySelectorAll("[style], style, [onclick]"));
         Assert.Distinct(page.QuerySelectorAll("[id]").Select(element => element.Id));
     }
