@@ -1,3 +1,5 @@
+using Drypeak.Soil.Quantities;
+
 namespace Drypeak.Figures;
 
 /// <summary>How a chart is to be drawn, apart from what it shows. Immutable, safe on any thread.</summary>
@@ -17,6 +19,9 @@ public sealed record FigureOptions
 
     /// <summary>A title in place of the result, which then stands under it; null or blank: the result is the title.</summary>
     public string? Title { get; init; }
+
+    /// <summary>A unit for a second axis of density at the right, or null.</summary>
+    public DensityUnit? SecondUnit { get; init; }
 
     /// <summary>Which kinds of the chart's lines are drawn.</summary>
     public IReadOnlyList<PhaseLineKind> Lines { get; init; } = PhaseLineKindNames.All;

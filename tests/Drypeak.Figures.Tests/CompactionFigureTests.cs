@@ -144,6 +144,27 @@ public sealed class CompactionFigureTests
         Assert.All(bars, place => Assert.InRange(place[0], 0, 960));
     }
 
+    /// <summary>1 Mg/m³ is 62.42796 lb/ft³ (0.45359237 kg to the pound, 0.3048 m to the foot).</summary>
+    [Theory]
+    [InlineData(960, 640)]
+    [InlineData(400, 320)]
+    public void A_second_axis_marks_round_values_of_its_unit_where_the_first_has_the_same_density(int width, int height)
+    {
+        var figure = CompactionFigure.Draw(Charts.Ternmarsh, new FigureOptions { Size = new(width, height), SecondUnit = DensityUnit.PoundPerCubicFoot });
+        var picture = SvgPicture.Read(SvgWriter.Write(figure));
+        var marks = picture.OfClass("specimen").ToList();
+        var second = picture.TextBoxes.Where(box => box.Left > marks.Max(mark => SvgPicture.Number(mark, "cx"))
+            && double.TryParse(box.Text, System.Globalization.CultureInfo.InvariantCulture, out var value) && value > 100).ToList();
+        Assert.Contains("lb/ft³", picture.Texts);
+        Assert.True(second.Count >= 3);
+        foreach (var box in second)
+        {
+            var pounds = double.Parse(box.Text, System.Globalization.CultureInfo.InvariantCulture);
+            var tick = Unscaled(marks, "cy", "data-y", (box.Top + box.Bottom) / 2);
+            Assert.Equal(pounds / 62.42796, tick, 0.004);
+        }
+    }
+
     [Theory]
     [InlineData(239, 640)]
     [InlineData(960, 2401)]

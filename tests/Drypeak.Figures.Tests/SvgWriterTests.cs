@@ -1,6 +1,7 @@
 using System.Text;
 using System.Text.RegularExpressions;
 using CsCheck;
+using Drypeak.Soil.Quantities;
 using Xunit;
 
 namespace Drypeak.Figures.Tests;
@@ -74,18 +75,33 @@ public sealed partial class SvgWriterTests
         Assert.InRange(SvgWriter.Write(CompactionFigure.Draw(chart, FigureSize.Default)).Length, 1, 20_000);
     }
 
+    private static readonly Dictionary<string, (CompactionChart Chart, FigureOptions Options)> Reviewed = new()
+    {
+        ["full"] = (Charts.Full, new FigureOptions()),
+        ["small"] = (Charts.Full, new FigureOptions { Size = new(320, 280) }),
+        ["dark-second-unit"] = (Charts.Ternmarsh, new FigureOptions { Theme = Theme.Dark, SecondUnit = DensityUnit.PoundPerCubicFoot }),
+        ["print-french-error-bars"] = (
+            Charts.Ternmarsh with { Specimens = [.. Charts.Ternmarsh.Specimens.Select(specimen => specimen with { WaterContentPlusMinus = 0.2, DryDensityPlusMinus = 0.012 })] },
+            new FigureOptions { Theme = Theme.Print, Language = Language.All.Single(language => language.Code == "fr") }),
+        ["without-optimum-own-title-no-lines"] = (Charts.WithoutOptimum, new FigureOptions { Title = "Ternmarsh, borrow area 7", Lines = [] }),
+    };
+
+    public static TheoryData<string> ReviewedNames => [.. Reviewed.Keys];
+
     /// <summary>
-    /// The picture as reviewed. A change of drawing is seen here first: look at the new picture, which stands beside the tests' program, and
+    /// The pictures as reviewed. A change of drawing is seen here first: look at the new picture, which stands beside the tests' program, and
     /// put it in the old one's place if it is better.
     /// </summary>
-    [Fact]
-    public void The_same_chart_is_the_same_bytes_in_every_process_as_reviewed()
+    [Theory]
+    [MemberData(nameof(ReviewedNames))]
+    public void The_same_chart_is_the_same_bytes_in_every_process_as_reviewed(string name)
     {
-        var written = SvgWriter.Write(CompactionFigure.Draw(Charts.Full, FigureSize.Default));
-        var reviewed = Path.Combine(AppContext.BaseDirectory, "Golden", "full.svg");
+        var (chart, options) = Reviewed[name];
+        var written = SvgWriter.Write(CompactionFigure.Draw(chart, options));
+        var reviewed = Path.Combine(AppContext.BaseDirectory, "Golden", $"{name}.svg");
         File.WriteAllBytes(Path.ChangeExtension(reviewed, ".actual.svg"), written);
         Assert.Equal(File.ReadAllText(reviewed), Encoding.UTF8.GetString(written));
-        Assert.Equal(written, SvgWriter.Write(CompactionFigure.Draw(Charts.Full with { Specimens = [.. Charts.Full.Specimens] }, FigureSize.Default)));
+        Assert.Equal(written, SvgWriter.Write(CompactionFigure.Draw(chart with { Specimens = [.. chart.Specimens] }, options with { })));
     }
 
     [GeneratedRegex(@"\b(NaN|Infinity|∞)\b|∞")]

@@ -43,9 +43,23 @@ internal sealed class Axes(Plot plot, Wording wording, FigureSize size, TypeScal
                     .. plot.WaterTicks.Halves.Select(plot.Water.At).Select(Crisp).Select(x => Segment(x, bottom, x, bottom + (length / 2))),
                     .. plot.DensityTicks.Values.Select(plot.Density.At).Select(Crisp).Select(y => Segment(left - length, y, left, y)),
                     .. plot.DensityTicks.Halves.Select(plot.Density.At).Select(Crisp).Select(y => Segment(left - (length / 2), y, left, y)),
+                    .. SecondAxis(),
                 ],
                 new Stroke(ColorRole.Ink, 1)),
         ]);
+    }
+
+    private IEnumerable<Place[]> SecondAxis()
+    {
+        if (plot.Second is not { } second)
+        {
+            return [];
+        }
+
+        var right = plot.Area.Right;
+        IEnumerable<Place[]> Marks(IEnumerable<double> values, double length) =>
+            values.Select(second.InFirst).Select(plot.Density.At).Select(Crisp).Select(y => Segment(right, y, right + length, y));
+        return [Segment(right, plot.Area.Bottom, right, plot.Area.Top), .. Marks(second.Ticks.Values, type.TickLength), .. Marks(second.Ticks.Halves, type.TickLength / 2)];
     }
 
     public void Block(LabelSpace space) =>
@@ -61,12 +75,18 @@ internal sealed class Axes(Plot plot, Wording wording, FigureSize size, TypeScal
         }
 
         space.PlaceEach(TickLabels());
+        space.PlaceEach(SecondTickLabels());
     }
 
     /// <summary>The titles: over the density axis, where it is read without turning one's head, and under the axis of water content.</summary>
     private IEnumerable<TextRun> Titles()
     {
         yield return Title(wording.DensityAxis, new Place(type.Margin, plot.Area.Top - (TitleAboveAxis * type.AxisTitle)), TextAnchor.Start);
+        if (wording.SecondAxis is { } second)
+        {
+            yield return Title(second, new Place(size.Width - type.Margin, plot.Area.Top - (TitleAboveAxis * type.AxisTitle)), TextAnchor.End);
+        }
+
         yield return Title(wording.WaterAxis, new Place(plot.Area.Right, size.Height - WaterTitleDepth(type)), TextAnchor.End);
     }
 
@@ -99,6 +119,15 @@ internal sealed class Axes(Plot plot, Wording wording, FigureSize size, TypeScal
         {
             var place = new Place(plot.Area.Left - LabelGap(type), plot.Density.At(value) + (0.33 * type.Label));
             yield return TickLabel(wording.Number(plot.DensityTicks.Label(value)), place, TextAnchor.End);
+        }
+    }
+
+    private IEnumerable<TextRun> SecondTickLabels()
+    {
+        foreach (var value in plot.Second?.Ticks.Values ?? [])
+        {
+            var place = new Place(plot.Area.Right + LabelGap(type), plot.Density.At(plot.Second!.InFirst(value)) + (0.33 * type.Label));
+            yield return TickLabel(wording.Number(plot.Second.Ticks.Label(value)), place, TextAnchor.Start);
         }
     }
 

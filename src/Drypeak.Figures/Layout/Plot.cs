@@ -11,13 +11,14 @@ internal sealed class Plot
     /// <summary>More ticks than this do not make a value easier to read.</summary>
     private const double MostTicks = 12;
 
-    private Plot(Area area, View view, Ticks waterTicks, Ticks densityTicks)
+    private Plot(Area area, View view, Ticks waterTicks, Ticks densityTicks, SecondScale? second)
     {
         Area = area;
         Water = new LinearScale(view.WaterContent, area.Left, area.Right);
         Density = new LinearScale(view.DryDensity, area.Bottom, area.Top);
         WaterTicks = waterTicks;
         DensityTicks = densityTicks;
+        Second = second;
     }
 
     public Area Area { get; }
@@ -29,6 +30,9 @@ internal sealed class Plot
     public Ticks WaterTicks { get; }
 
     public Ticks DensityTicks { get; }
+
+    /// <summary>The density once more in another unit, or null.</summary>
+    public SecondScale? Second { get; }
 
     public Place At(ChartPoint point) => new(Water.At(point.WaterContent), Density.At(point.DryDensity));
 
@@ -42,17 +46,22 @@ internal sealed class Plot
     {
         var top = headingBottom + Axes.HeightAbove(type);
         var bottom = size.Height - Axes.HeightBelow(type);
-        var densityTicks = Ticks.Within(view.DryDensity, Math.Clamp((bottom - top) / (LeastDensityTickDistance * type.Unit), 1, MostTicks));
+        var mostTicks = Math.Clamp((bottom - top) / (LeastDensityTickDistance * type.Unit), 1, MostTicks);
+        var densityTicks = Ticks.Within(view.DryDensity, mostTicks);
+        var second = wording.SecondUnitRatio is { } ratio ? SecondScale.Of(view.DryDensity, ratio, mostTicks) : null;
 
-        var labelWidth = densityTicks.Values
-            .Select(value => EmbeddedFont.Regular.Measure(wording.Number(densityTicks.Label(value)), type.Label))
+        var labelWidth = LabelWidths(densityTicks, wording, type)
             .Append(wording.Result is { } result ? EmbeddedFont.SemiBold.Measure(wording.BareDensity(result), type.Value) : 0)
             .Max();
         var left = Math.Round(Math.Min(type.Margin + labelWidth + Axes.LabelGap(type), size.Width * 0.45)) + 0.5;
-        var right = size.Width - type.Margin;
+        var rightLabels = second is null ? 0 : Math.Min(LabelWidths(second.Ticks, wording, type).DefaultIfEmpty(0).Max() + Axes.LabelGap(type), size.Width * 0.25);
+        var right = Math.Floor(size.Width - type.Margin - rightLabels);
         var waterTicks = WaterTicksWithin(view.WaterContent, right - left, type);
-        return new Plot(new Area(left, Math.Ceiling(top) + 0.5, right, Math.Floor(bottom) - 0.5), view, waterTicks, densityTicks);
+        return new Plot(new Area(left, Math.Ceiling(top) + 0.5, right, Math.Floor(bottom) - 0.5), view, waterTicks, densityTicks, second);
     }
+
+    private static IEnumerable<double> LabelWidths(Ticks ticks, Wording wording, TypeScale type) =>
+        ticks.Values.Select(value => EmbeddedFont.Regular.Measure(wording.Number(ticks.Label(value)), type.Label));
 
     /// <summary>As fine as the labels leave room between them.</summary>
     private static Ticks WaterTicksWithin(Interval range, double width, TypeScale type)

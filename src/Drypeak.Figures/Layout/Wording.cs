@@ -70,6 +70,12 @@ internal sealed class Wording
 
     public string DensityAxis => $"{Capitalized(DensityName)} ({Unit})";
 
+    /// <summary>The title of the second axis of density, or null.</summary>
+    public string? SecondAxis => _options.SecondUnit?.Symbol();
+
+    /// <summary>What 1 of the chart's unit is in the second unit, or null where none is asked for.</summary>
+    public double? SecondUnitRatio => _options.SecondUnit is { } second ? Soil.Quantities.Density.From(1, _chart.DensityUnit).In(second) : null;
+
     /// <summary>What the picture says, for who cannot see it.</summary>
     public string Description
     {

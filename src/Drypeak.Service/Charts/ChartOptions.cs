@@ -1,6 +1,7 @@
 using System.Globalization;
 using Drypeak.Figures;
 using Drypeak.Service.Hosting;
+using Drypeak.Soil.Quantities;
 
 namespace Drypeak.Service.Charts;
 
@@ -9,11 +10,13 @@ namespace Drypeak.Service.Charts;
 /// <param name="Scale">Pixels of the PNG for each px; 1 in other formats.</param>
 internal sealed record ChartOptions(FigureOptions Figure, double Scale)
 {
-    private const string Width = "width", Height = "height", ScaleName = "scale", ThemeName = "theme", LocaleName = "locale", TitleName = "title", LinesName = "lines";
+    private const string Width = "width", Height = "height", ScaleName = "scale", ThemeName = "theme", LocaleName = "locale", TitleName = "title", LinesName = "lines", SecondUnitName = "secondUnit";
     private const string NoLines = "none";
 
     private static readonly string[] Themes = [.. Theme.All.Select(theme => theme.Name)];
     private static readonly string[] Locales = [.. Language.All.Select(language => language.Code)];
+    private static readonly DensityUnit[] DensityUnits = Enum.GetValues<DensityUnit>();
+    private static readonly string[] DensityCodes = [.. DensityUnits.Select(unit => unit.Code())];
     private static readonly string[] LineKinds = [.. PhaseLineKindNames.All.Select(kind => kind.Name())];
 
     /// <summary>Width and height, px.</summary>
@@ -28,6 +31,7 @@ internal sealed record ChartOptions(FigureOptions Figure, double Scale)
             .TakesQuery<string>(ThemeName, $"One of {string.Join(", ", Themes)}: ink on paper, the same on a dark ground, or black on white for printers.", Theme.Light.Name)
             .TakesQuery<string>(LocaleName, $"Language and decimal mark: one of {string.Join(", ", Locales)}.", Language.English.Code)
             .TakesQuery<string>(TitleName, $"A title in place of the result, which then stands under it: up to {FigureOptions.LongestTitle} characters.", "Borrow area 7")
+            .TakesQuery<string>(SecondUnitName, $"A unit for a second axis of density at the right: one of {string.Join(", ", DensityCodes)}.", DensityUnit.PoundPerCubicFoot.Code())
             .TakesQuery<string>(LinesName, $"The kinds of lines that are drawn, of those that the chart has, parted by commas: {string.Join(", ", LineKinds)}; or {NoLines}.", string.Join(',', LineKinds));
         return format == ChartFormat.Png
             ? endpoint.TakesQuery<double>(ScaleName, $"Pixels for each px: {PngWriter.SmallestScale} to {PngWriter.LargestScale}.", "1")
@@ -41,7 +45,7 @@ internal sealed record ChartOptions(FigureOptions Figure, double Scale)
     /// <param name="faults">Receives each unknown, repeated or impossible parameter.</param>
     public static ChartOptions Read(IQueryCollection query, ChartFormat format, ReadOnlySpan<string> further, ICollection<Fault> faults)
     {
-        var known = new List<string> { Width, Height, ThemeName, LocaleName, TitleName, LinesName };
+        var known = new List<string> { Width, Height, ThemeName, LocaleName, TitleName, LinesName, SecondUnitName };
         if (format == ChartFormat.Png)
         {
             known.Add(ScaleName);
@@ -68,6 +72,7 @@ internal sealed record ChartOptions(FigureOptions Figure, double Scale)
             Theme = Theme.All[Choice(query, ThemeName, Themes, faults)],
             Language = Language.All[Choice(query, LocaleName, Locales, faults)],
             Title = TitleOf(query, faults),
+            SecondUnit = query[SecondUnitName].Count == 0 ? null : DensityUnits[Choice(query, SecondUnitName, DensityCodes, faults)],
             Lines = LinesOf(query, faults),
         };
         if (format != ChartFormat.Png)

@@ -119,6 +119,7 @@ public sealed class ChartPictureTests(RunningService service)
     [InlineData("svg", "lines=saturation,saturation", "/lines unknown-choice")]
     [InlineData("svg", "lines=", "/lines unknown-choice")]
     [InlineData("pdf", "title=%20", "/title out-of-range")]
+    [InlineData("svg", "secondUnit=t/m3", "/secondUnit unknown-choice")]
     [InlineData("svg", "colour=red", "/colour unknown-parameter")]
     [InlineData("svg", "Width=500", "/Width unknown-parameter")]
     [InlineData("png", "width=1&height=1&scale=9&zoom=2", "/width out-of-range,/height out-of-range,/scale out-of-range,/zoom unknown-parameter")]
@@ -161,6 +162,13 @@ public sealed class ChartPictureTests(RunningService service)
         Assert.Contains("1,86", texts);
         Assert.Contains("Sättigungsgrad 90 %", texts);
         Assert.DoesNotContain(svg.Descendants(), element => (string?)element.Attribute("class") is "zero-air-voids" or "air-voids");
+    }
+
+    [Fact]
+    public async Task A_second_unit_has_an_axis_of_its_own()
+    {
+        var svg = XDocument.Parse(System.Text.Encoding.UTF8.GetString(await service.BytesAsync(await ChartLink.OfSoundTest(service) + "&secondUnit=lb%2Fft3")));
+        Assert.Contains("lb/ft³", svg.Descendants(Namespace + "text").Select(text => text.Value));
     }
 
     [Fact]

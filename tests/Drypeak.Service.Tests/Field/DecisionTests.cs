@@ -85,7 +85,7 @@ public sealed class DecisionTests(RunningService service)
     [Fact]
     public async Task Uncertainties_of_field_and_laboratory_are_carried_to_first_order()
     {
-        var answer = await service.AnswerOfAsync(FieldJobs.FieldDensity, """
+        var answer = await service.AnswerAsync(FieldJobs.FieldDensity, """
             { "method": "direct", "direct": { "dryDensity": 1.9 }, "waterContent": 10, "waterDensity": 1, "specificGravity": { "value": 2.7 },
               "laboratory": { "maximumDryDensity": 2.0, "optimumWaterContent": 11, "minimumDryDensity": 1.5, "uncertainty": { "maximumDryDensity": 0.01, "optimumWaterContent": 0.4 } },
               "uncertainty": { "dryDensity": 0.02, "waterContent": 0.3 },
@@ -131,7 +131,7 @@ public sealed class DecisionTests(RunningService service)
     }
 
     private Task<JsonElement> JudgedAsync(string dry, string requirements, string? decision, string? uncertainty = null) =>
-        service.AnswerOfAsync(FieldJobs.FieldDensity, string.Create(CultureInfo.InvariantCulture, $$"""
+        service.AnswerAsync(FieldJobs.FieldDensity, string.Create(CultureInfo.InvariantCulture, $$"""
             { "method": "direct", "direct": { "dryDensity": {{dry}} }, "waterContent": 10, "laboratory": { "maximumDryDensity": 2.0, "optimumWaterContent": 11 },
               "specification": { "requirements": [{{requirements}}]{{(decision is null ? "" : ",\"decision\":" + decision)}} }{{(uncertainty is null ? "" : ",\"uncertainty\":" + uncertainty)}} }
             """));

@@ -296,7 +296,7 @@ public sealed class FieldDensityTests(RunningService service)
         Assert.Equal(await RunningService.TextOf(first), await RunningService.TextOf(second));
     }
 
-    private Task<JsonElement> AnswerAsync(string body) => service.AnswerOfAsync(FieldJobs.FieldDensity, body);
+    private Task<JsonElement> AnswerAsync(string body) => service.AnswerAsync(FieldJobs.FieldDensity, body);
 
     private static IEnumerable<string?> Outcomes(JsonElement answer) => answer.GetProperty("requirements").EnumerateArray().Select(requirement => requirement.Text("/outcome"));
 }

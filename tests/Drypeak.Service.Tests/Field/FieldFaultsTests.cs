@@ -129,13 +129,13 @@ public sealed class FieldFaultsTests(RunningService service)
     [Fact]
     public async Task Every_fault_is_told_at_once()
     {
-        var refusal = await service.RefusalOfAsync(FieldJobs.FieldDensity, FieldJobs.With(("/soil/wet", "-1"), ("/sandCone/sandDensity", "0"), ("/waterContent", "2000"), ("/units/mass", "\"stone\"")));
+        var refusal = await service.RefusalAsync(FieldJobs.FieldDensity, FieldJobs.With(("/soil/wet", "-1"), ("/sandCone/sandDensity", "0"), ("/waterContent", "2000"), ("/units/mass", "\"stone\"")));
         Assert.Equal(["/units/mass unknown-unit", "/sandCone/sandDensity not-positive", "/soil/wet not-positive", "/waterContent out-of-range"], refusal.Faults);
     }
 
     private async Task AssertRefusedAsync(string address, string body, int status, string fault)
     {
-        var refusal = await service.RefusalOfAsync(address, body);
+        var refusal = await service.RefusalAsync(address, body);
         Assert.Equal((status, fault), (refusal.Status, string.Join("; ", refusal.Faults)));
     }
 }

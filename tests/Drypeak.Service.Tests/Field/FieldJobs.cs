@@ -1,9 +1,6 @@
 using System.Globalization;
-using System.Net;
-using System.Text.Json;
 using System.Text.Json.Nodes;
 using Drypeak.Service.Tests.Laboratory;
-using Xunit;
 
 namespace Drypeak.Service.Tests.Field;
 
@@ -30,20 +27,6 @@ internal static class FieldJobs
           "specification": { "requirements": [ { "quantity": "relativeCompaction", "minimum": 95 }, { "quantity": "waterContentFromOptimum", "minimum": -2, "maximum": 2 } ] }
         }
         """;
-
-    public static async Task<JsonElement> AnswerOfAsync(this RunningService service, string address, string body)
-    {
-        using var response = await service.PostAsync(body, address: address);
-        var text = await RunningService.TextOf(response);
-        Assert.True(response.StatusCode == HttpStatusCode.OK, text);
-        return JsonElement.Parse(text);
-    }
-
-    public static async Task<Refusal> RefusalOfAsync(this RunningService service, string address, string body)
-    {
-        using var response = await service.PostAsync(body, address: address);
-        return await Refusal.Of(response);
-    }
 
     /// <summary>The sound test with members set, or taken out where the text is <see cref="Body.Absent"/>.</summary>
     public static string With(params ReadOnlySpan<(string Place, string Json)> edits)

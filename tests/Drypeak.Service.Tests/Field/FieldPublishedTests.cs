@@ -28,7 +28,7 @@ public sealed class FieldPublishedTests(RunningService service)
     public async Task SC1_a_sand_cone_with_its_calibration_gives_the_exact_density_and_not_that_of_a_rounded_volume()
     {
         var (inputs, exact) = (Case("SC1", "inputs"), Case("SC1", "exact"));
-        var answer = await service.AnswerOfAsync(FieldJobs.FieldDensity, $$"""
+        var answer = await service.AnswerAsync(FieldJobs.FieldDensity, $$"""
             {
               "units": { "mass": "lb", "volume": "ft3", "density": "lb/ft3" }, "method": "sand-cone",
               "sandCone": {
@@ -50,7 +50,7 @@ public sealed class FieldPublishedTests(RunningService service)
     public async Task SC3_volumes_of_sand_give_the_hole_and_its_wet_density()
     {
         var (inputs, published) = (Case("SC3", "inputs"), Case("SC3", "published"));
-        var answer = await service.AnswerOfAsync(FieldJobs.FieldDensity, $$"""
+        var answer = await service.AnswerAsync(FieldJobs.FieldDensity, $$"""
             { "units": { "mass": "lb", "volume": "ft3", "density": "lb/ft3" }, "method": "sand-cone",
               "sandCone": { "releasedVolume": {{Of(inputs, "sand_released_ft3")}}, "coneVolume": {{Of(inputs, "cone_ft3")}} }, "soil": { "wet": {{Of(inputs, "soil_wet_lb")}} } }
             """);
@@ -65,7 +65,7 @@ public sealed class FieldPublishedTests(RunningService service)
     public async Task SC5_dry_density_is_wet_over_one_plus_w_and_not_wet_times_one_minus_w()
     {
         var (inputs, exact) = (Case("SC5", "inputs"), Case("SC5", "exact"));
-        var answer = await service.AnswerOfAsync(FieldJobs.FieldDensity, $$"""
+        var answer = await service.AnswerAsync(FieldJobs.FieldDensity, $$"""
             { "units": { "mass": "kg", "volume": "m3", "density": "g/cm3" }, "method": "sand-cone",
               "sandCone": { "sandInHole": {{Of(inputs, "sand_in_pit_kg")}}, "sandDensity": {{Of(inputs, "sand_density_g_cm3")}} },
               "soil": { "wet": {{Of(inputs, "soil_wet_kg")}} }, "waterContent": {{Of(inputs, "w_percent")}} }
@@ -81,7 +81,7 @@ public sealed class FieldPublishedTests(RunningService service)
     public async Task CC1_a_core_cutter_gives_dry_density_void_ratio_and_saturation()
     {
         var (inputs, exact) = (Case("CC1", "inputs"), Case("CC1", "exact"));
-        var answer = await service.AnswerOfAsync(FieldJobs.FieldDensity, $$"""
+        var answer = await service.AnswerAsync(FieldJobs.FieldDensity, $$"""
             { "units": { "density": "g/cm3" }, "method": "drive-cylinder", "driveCylinder": { "volume": {{Of(inputs, "volume_cm3")}} },
               "soil": { "containerAndWet": {{Of(inputs, "cutter_plus_soil_g")}}, "container": {{Of(inputs, "cutter_g")}} },
               "waterContent": {{Of(inputs, "w_percent")}}, "waterDensity": 1, "specificGravity": { "value": {{Of(inputs, "Gs")}} } }
@@ -97,7 +97,7 @@ public sealed class FieldPublishedTests(RunningService service)
     public async Task CC2_a_water_content_is_on_dry_mass_and_not_on_wet_mass()
     {
         var (inputs, exact) = (Case("CC2", "inputs"), Case("CC2", "exact"));
-        var answer = await service.AnswerOfAsync(FieldJobs.FieldDensity, $$"""
+        var answer = await service.AnswerAsync(FieldJobs.FieldDensity, $$"""
             { "units": { "density": "g/cm3" }, "method": "drive-cylinder", "driveCylinder": { "volume": {{Of(inputs, "volume_cm3")}} },
               "soil": { "containerAndWet": {{Of(inputs, "cutter_plus_soil_g")}}, "container": {{Of(inputs, "cutter_g")}} }, "waterContent": {{Of(inputs, "w_percent")}} }
             """);
@@ -110,7 +110,7 @@ public sealed class FieldPublishedTests(RunningService service)
     public async Task NU1_a_gauge_gives_the_dry_unit_weight()
     {
         var inputs = Case("NU1", "inputs");
-        var answer = await service.AnswerOfAsync(FieldJobs.FieldDensity, $$"""
+        var answer = await service.AnswerAsync(FieldJobs.FieldDensity, $$"""
             { "units": { "density": "kN/m3" }, "method": "nuclear-gauge", "nuclearGauge": { "wetDensity": [{{Of(inputs, "wet_kN_m3")}}], "waterContent": [{{Of(inputs, "w_percent")}}] } }
             """);
         Assert.Equal(Case("NU1", "exact").Number("/dry_kN_m3"), answer.Number("/test/dryDensity"), 1e-4);
@@ -121,7 +121,7 @@ public sealed class FieldPublishedTests(RunningService service)
     public async Task NU2_readings_are_averaged_and_held_against_the_maximum()
     {
         var (inputs, exact) = (Case("NU2", "inputs"), Case("NU2", "exact"));
-        var answer = await service.AnswerOfAsync(FieldJobs.FieldDensity, $$"""
+        var answer = await service.AnswerAsync(FieldJobs.FieldDensity, $$"""
             { "units": { "density": "lb/ft3" }, "method": "nuclear-gauge", "nuclearGauge": { "wetDensity": {{Of(inputs, "wet_readings_pcf")}} },
               "waterContent": {{Of(inputs, "w_percent")}}, "laboratory": { "maximumDryDensity": {{Of(inputs, "mdd_pcf")}} } }
             """);
@@ -134,7 +134,7 @@ public sealed class FieldPublishedTests(RunningService service)
     [Fact]
     public async Task MC1_a_number_on_wet_mass_is_converted()
     {
-        var answer = await service.AnswerOfAsync(FieldJobs.FieldDensity, $$"""
+        var answer = await service.AnswerAsync(FieldJobs.FieldDensity, $$"""
             { "method": "direct", "direct": { "wetDensity": 2 }, "wetBasis": {{Of(Case("MC1", "inputs"), "wet_basis_percent")}} }
             """);
         Assert.Equal(Case("MC1", "exact").Number("/dry_basis_decimal") * 100, answer.Number("/test/waterContent"), 1e-3);
@@ -147,7 +147,7 @@ public sealed class FieldPublishedTests(RunningService service)
         var inputs = Case("HI1", "inputs");
         var peak = inputs.Number("/peak_t_m3");
         string Specimen(double z, double converted) => string.Create(CultureInfo.InvariantCulture, $$"""{"waterAdded":{{z}},"wetDensity":{{converted * (1 + (z / 100)):R}}}""");
-        var answer = await service.AnswerOfAsync(FieldJobs.RapidMethod, $$"""
+        var answer = await service.AnswerAsync(FieldJobs.RapidMethod, $$"""
             { "field": { "wetDensity": {{Of(inputs, "field_wet_t_m3")}} }, "specimens": [{{Specimen(0, peak - 0.03)}}, {{Specimen(2, peak)}}, {{Specimen(4, peak - 0.03)}}] }
             """);
         Assert.Equal(peak, answer.Number("/peak/convertedWetDensity"), 1e-9);
@@ -161,7 +161,7 @@ public sealed class FieldPublishedTests(RunningService service)
     public async Task RD1_and_RD2_relative_density_is_never_linear_in_density(string id)
     {
         var inputs = Case(id, "inputs");
-        var answer = await service.AnswerOfAsync(FieldJobs.RelativeDensity, $$"""
+        var answer = await service.AnswerAsync(FieldJobs.RelativeDensity, $$"""
             { "dryDensity": {{Of(inputs, "d")}}, "minimumDryDensity": {{Of(inputs, "dmin")}}, "maximumDryDensity": {{Of(inputs, "dmax")}} }
             """);
         Assert.Equal(100 * Case("RD1", "exact").Number("/Dr"), answer.Number("/relativeDensity"), 1e-3);
@@ -173,7 +173,7 @@ public sealed class FieldPublishedTests(RunningService service)
     public async Task RD4_relative_compaction_gives_density_and_relative_density()
     {
         var (inputs, exact) = (Case("RD4", "inputs"), Case("RD4", "exact"));
-        var answer = await service.AnswerOfAsync(FieldJobs.RelativeDensity, $$"""
+        var answer = await service.AnswerAsync(FieldJobs.RelativeDensity, $$"""
             { "units": { "density": "kN/m3" }, "relativeCompaction": {{Of(inputs, "RC")}}, "minimumDryDensity": {{Of(inputs, "dmin")}}, "maximumDryDensity": {{Of(inputs, "dmax")}} }
             """);
         Assert.Equal(exact.Number("/dry"), answer.Number("/dryDensity"), 1e-3);
@@ -185,7 +185,7 @@ public sealed class FieldPublishedTests(RunningService service)
     public async Task RD6_relative_density_gives_density_and_relative_compaction()
     {
         var (inputs, exact) = (Case("RD6", "inputs"), Case("RD6", "exact"));
-        var answer = await service.AnswerOfAsync(FieldJobs.RelativeDensity, $$"""
+        var answer = await service.AnswerAsync(FieldJobs.RelativeDensity, $$"""
             { "units": { "density": "kN/m3" }, "relativeDensity": {{Of(inputs, "Dr")}}, "minimumDryDensity": {{Of(inputs, "dmin")}}, "maximumDryDensity": {{Of(inputs, "dmax")}} }
             """);
         Assert.Equal(exact.Number("/dry"), answer.Number("/dryDensity"), 1e-4);

@@ -22,7 +22,7 @@ public sealed class ReferenceTests(RunningService service)
     [InlineData("""{"relativeDensity":37.5""")]
     public async Task Any_one_measure_gives_the_others(string measure)
     {
-        var answer = await service.AnswerOfAsync(FieldJobs.RelativeDensity, measure + ""","minimumDryDensity":1.5,"maximumDryDensity":1.8,"waterDensity":1,"specificGravity":{"value":2.65,"determined":"measured"}}""");
+        var answer = await service.AnswerAsync(FieldJobs.RelativeDensity, measure + ""","minimumDryDensity":1.5,"maximumDryDensity":1.8,"waterDensity":1,"specificGravity":{"value":2.65,"determined":"measured"}}""");
         Assert.Equal(1.6, answer.Number("/dryDensity"), 1e-12);
         Assert.Equal(0.65625, answer.Number("/voidRatio"), 1e-12);
         Assert.Equal(100 * 1.8 / 1.6 * 0.1 / 0.3, answer.Number("/relativeDensity"), 1e-9);
@@ -33,7 +33,7 @@ public sealed class ReferenceTests(RunningService service)
     [Fact]
     public async Task Limits_as_void_ratios_need_no_specific_gravity()
     {
-        var answer = await service.AnswerOfAsync(FieldJobs.RelativeDensity, """{"voidRatio":0.6,"minimumVoidRatio":0.4,"maximumVoidRatio":0.8,"trace":true}""");
+        var answer = await service.AnswerAsync(FieldJobs.RelativeDensity, """{"voidRatio":0.6,"minimumVoidRatio":0.4,"maximumVoidRatio":0.8,"trace":true}""");
         Assert.Equal(50, answer.Number("/relativeDensity"), 1e-9);
         Assert.Equal(100 * 1.4 / 1.6, answer.Number("/relativeCompaction"), 1e-9);
         Assert.True(answer.IsNull("/dryDensity"));
@@ -47,7 +47,7 @@ public sealed class ReferenceTests(RunningService service)
     [InlineData("1.81", true)]
     public async Task Beyond_the_limits_it_is_computed_with_a_finding(string dry, bool found)
     {
-        var answer = await service.AnswerOfAsync(FieldJobs.RelativeDensity, $$"""{"dryDensity":{{dry}},"minimumDryDensity":1.5,"maximumDryDensity":1.8}""");
+        var answer = await service.AnswerAsync(FieldJobs.RelativeDensity, $$"""{"dryDensity":{{dry}},"minimumDryDensity":1.5,"maximumDryDensity":1.8}""");
         var d = double.Parse(dry, CultureInfo.InvariantCulture);
         Assert.Equal(100 * 1.8 / d * (d - 1.5) / 0.3, answer.Number("/relativeDensity"), 1e-9);
         Assert.Equal(found, answer.Findings().Contains("beyond-density-limits"));
@@ -161,7 +161,7 @@ public sealed class ReferenceTests(RunningService service)
     [InlineData(""","waterContent":12""", -2.5 * 1.12, false)]
     public async Task Three_specimens_give_the_vertex_of_their_parabola_and_the_exact_ratio(string water, double fromOptimum, bool estimated)
     {
-        var answer = await service.AnswerOfAsync(FieldJobs.RapidMethod, $$"""{"field":{"wetDensity":2.0{{water}}},"specimens":[{{Rapid(0)}},{{Rapid(4)}},{{Rapid(2)}}]}""");
+        var answer = await service.AnswerAsync(FieldJobs.RapidMethod, $$"""{"field":{"wetDensity":2.0{{water}}},"specimens":[{{Rapid(0)}},{{Rapid(4)}},{{Rapid(2)}}]}""");
         Assert.Equal(2.5, answer.Number("/peak/waterAdded"), 1e-9);
         Assert.Equal(2.1, answer.Number("/peak/convertedWetDensity"), 1e-9);
         Assert.Equal(100 * 2.0 / 2.1, answer.Number("/densityRatio"), 1e-9);
@@ -176,11 +176,11 @@ public sealed class ReferenceTests(RunningService service)
     public async Task The_density_ratio_is_the_relative_compaction_by_the_full_route(double fieldWater)
     {
         double[] added = [-1.5, 1, 3.2];
-        var rapid = await service.AnswerOfAsync(FieldJobs.RapidMethod, string.Create(CultureInfo.InvariantCulture,
+        var rapid = await service.AnswerAsync(FieldJobs.RapidMethod, string.Create(CultureInfo.InvariantCulture,
             $$"""{"field":{"wetDensity":2.03,"waterContent":{{fieldWater}}},"specimens":[{{string.Join(',', added.Select(Rapid))}}]}"""));
         var points = added.Select(z => ((fieldWater / 100) + (z / 100 * (1 + (fieldWater / 100))), Converted(z) / (1 + (fieldWater / 100)))).Select(point => (point.Item1 * 100, point.Item2));
         var laboratory = Body.WithPoints(points)[..^1] + ",\"curve\":{\"model\":\"parabola\"}}";
-        var full = await service.AnswerOfAsync(FieldJobs.FieldDensity, string.Create(CultureInfo.InvariantCulture,
+        var full = await service.AnswerAsync(FieldJobs.FieldDensity, string.Create(CultureInfo.InvariantCulture,
             $$"""{"method":"direct","direct":{"wetDensity":2.03},"waterContent":{{fieldWater}},"laboratory":{"test":{{laboratory}} } }"""));
         Assert.Equal(full.Number("/relativeCompaction"), rapid.Number("/densityRatio"), 1e-7);
         Assert.Equal(full.Number("/waterContentFromOptimum"), rapid.Number("/waterContentFromOptimum"), 1e-7);
@@ -190,7 +190,7 @@ public sealed class ReferenceTests(RunningService service)
     public async Task More_specimens_are_fitted_and_the_field_water_content_does_not_change_the_ratio()
     {
         string Request(string water) => $$"""{"field":{"wetDensity":2.0{{water}}},"specimens":[{{string.Join(',', new[] { -1.0, 0, 2, 4, 6 }.Select(Rapid))}}]}""";
-        var (without, with) = (await service.AnswerOfAsync(FieldJobs.RapidMethod, Request("")), await service.AnswerOfAsync(FieldJobs.RapidMethod, Request(",\"waterContent\":12")));
+        var (without, with) = (await service.AnswerAsync(FieldJobs.RapidMethod, Request("")), await service.AnswerAsync(FieldJobs.RapidMethod, Request(",\"waterContent\":12")));
         Assert.Equal(2.5, without.Number("/peak/waterAdded"), 0.3);
         Assert.Equal(without.Number("/densityRatio"), with.Number("/densityRatio"), 1e-12);
         Assert.Equal(100 * 2.0 / 2.1, without.Number("/densityRatio"), 0.5);
@@ -204,7 +204,7 @@ public sealed class ReferenceTests(RunningService service)
     public async Task Without_a_peak_between_the_specimens_there_is_no_ratio(string added, string code)
     {
         var specimens = added.Split(',').Select(z => Rapid(double.Parse(z, CultureInfo.InvariantCulture)));
-        var answer = await service.AnswerOfAsync(FieldJobs.RapidMethod, $$"""{"field":{"wetDensity":2.0},"specimens":[{{string.Join(',', specimens)}}]}""");
+        var answer = await service.AnswerAsync(FieldJobs.RapidMethod, $$"""{"field":{"wetDensity":2.0},"specimens":[{{string.Join(',', specimens)}}]}""");
         Assert.True(answer.IsNull("/peak"));
         Assert.True(answer.IsNull("/densityRatio"));
         Assert.Contains("Compact another", answer.Finding(code).Text("/message"), StringComparison.Ordinal);
@@ -214,5 +214,5 @@ public sealed class ReferenceTests(RunningService service)
 
     private static string Rapid(double z) => string.Create(CultureInfo.InvariantCulture, $$"""{"waterAdded":{{z:R}},"wetDensity":{{Converted(z) * (1 + (z / 100)):R}}}""");
 
-    private Task<JsonElement> OnPointAsync(string family, string point) => service.AnswerOfAsync(FieldJobs.OnePoint, $$"""{"family":{{family}},"point":{{point}}}""");
+    private Task<JsonElement> OnPointAsync(string family, string point) => service.AnswerAsync(FieldJobs.OnePoint, $$"""{"family":{{family}},"point":{{point}}}""");
 }

@@ -126,13 +126,13 @@ public sealed class ComparisonTests(RunningService service)
     [MemberData(nameof(Faults))]
     public async Task A_fault_is_refused_at_its_place(string body, int status, string[] faults)
     {
-        var refusal = await service.RefusalAsync(body, Address);
+        var refusal = await service.RefusalAsync(Address, body);
         Assert.Equal(status, refusal.Status);
         Assert.Equal(faults, refusal.Faults);
     }
 
     private async Task<(JsonElement First, JsonElement Second, JsonElement Answer)> CompareAsync(string first, string second) =>
-        (await service.AnswerAsync(first), await service.AnswerAsync(second), await service.AnswerAsync($$"""{"tests":[{{first}},{{second}}]}""", Address));
+        (await service.AnswerAsync(first), await service.AnswerAsync(second), await service.AnswerAsync(Address, $$"""{"tests":[{{first}},{{second}}]}"""));
 
     private static string Test(params (double WaterContent, double DryDensity)[] points) =>
         $$"""{"method":"astm-d698-a","specificGravity":{"value":2.7,"determined":"measured"},"specimens":[{{string.Join(',', points.Select(Body.Point))}}]}""";

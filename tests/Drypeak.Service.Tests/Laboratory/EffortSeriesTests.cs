@@ -20,7 +20,7 @@ public sealed class EffortSeriesTests(RunningService service)
     [Fact]
     public async Task The_line_holds_each_tests_own_optimum_in_order_of_effort()
     {
-        var answer = await service.AnswerAsync($$"""{"tests":[{{Heavy}},{{Light}}]}""", Address);
+        var answer = await service.AnswerAsync(Address, $$"""{"tests":[{{Heavy}},{{Light}}]}""");
         var optima = new[] { await service.AnswerAsync(Light), await service.AnswerAsync(Heavy) };
         Assert.Equal([Standard, Modified], answer.Numbers("/line", "effort"), Near(1e-9));
         Assert.Equal(optima.Select(test => test.Number("/optimum/waterContent")), answer.Numbers("/line", "waterContent"), Near(1e-12));
@@ -33,7 +33,7 @@ public sealed class EffortSeriesTests(RunningService service)
     public async Task At_the_ends_it_is_the_tests_themselves_and_halfway_in_the_logarithm_their_mean()
     {
         var at = new[] { Standard, Math.Sqrt(Standard * Modified), Modified };
-        var answer = await service.AnswerAsync(Series([Light, Heavy], at), Address);
+        var answer = await service.AnswerAsync(Address, Series([Light, Heavy], at));
         Assert.DoesNotContain("effort-outside-range", answer.Findings());
         foreach (var member in new[] { "waterContent", "maximumDryDensity" })
         {
@@ -50,7 +50,7 @@ public sealed class EffortSeriesTests(RunningService service)
     [InlineData(4000)]
     public async Task Beyond_the_tests_the_line_goes_on_with_a_finding_at_the_effort(double effort)
     {
-        var answer = await service.AnswerAsync(Series([Light, Heavy], [1000, effort]), Address);
+        var answer = await service.AnswerAsync(Address, Series([Light, Heavy], [1000, effort]));
         var finding = answer.Finding("effort-outside-range");
         Assert.Equal("/at/1", finding.Text("/pointer"));
         Assert.Equal("warning", finding.Text("/severity"));
@@ -65,7 +65,7 @@ public sealed class EffortSeriesTests(RunningService service)
         var pounds = Light.Replace("\"method\"", "\"units\":{\"density\":\"lb/ft3\"},\"curve\":{\"model\":\"parabola\"},\"method\"", StringComparison.Ordinal)
             .Replace("1.749", "109.2", StringComparison.Ordinal).Replace("1.821", "113.7", StringComparison.Ordinal).Replace("1.861", "116.2", StringComparison.Ordinal)
             .Replace("1.83", "114.2", StringComparison.Ordinal).Replace("1.77", "110.5", StringComparison.Ordinal);
-        var answer = await service.AnswerAsync($$"""{"tests":[{{pounds}},{{Heavy}}],"at":[1200]}""", Address);
+        var answer = await service.AnswerAsync(Address, $$"""{"tests":[{{pounds}},{{Heavy}}],"at":[1200]}""");
         Assert.Equal("lb/ft3", answer.Text("/units/density"));
         Assert.All(answer.Numbers("/line", "maximumDryDensity").Concat(answer.Numbers("/at", "maximumDryDensity")), density => Assert.InRange(density, 114, 127));
     }
@@ -76,7 +76,7 @@ public sealed class EffortSeriesTests(RunningService service)
         var own = Test("""
             "custom","effort":{"rammerMass":3500,"drop":400,"layers":4,"blows":25},"mold":{"volume":943}
             """, (9, 1.84), (11, 1.90), (13, 1.925), (15, 1.885), (17, 1.82)).Replace("\"dryDensity\":1.925", "\"wetMass\":2051.3", StringComparison.Ordinal);
-        var answer = await service.AnswerAsync(Series([Light, Heavy, own], [800]), Address);
+        var answer = await service.AnswerAsync(Address, Series([Light, Heavy, own], [800]));
         Assert.Equal(3.5 * 9.80665 * 0.4 * 100 / 943e-6 / 1000, answer.Numbers("/line", "effort")[1], 1e-9);
         Assert.InRange(answer.Number("/at/0/waterContent"), answer.Numbers("/line", "waterContent")[1], answer.Numbers("/line", "waterContent")[0]);
     }
@@ -85,7 +85,7 @@ public sealed class EffortSeriesTests(RunningService service)
     public async Task A_test_without_an_optimum_is_left_out_and_says_why()
     {
         var rising = Test("\"astm-d1557-a\"", (7, 1.80), (9, 1.86), (11, 1.92), (13, 1.98));
-        var answer = await service.AnswerAsync(Series([Light, rising], [1000]), Address);
+        var answer = await service.AnswerAsync(Address, Series([Light, rising], [1000]));
         Assert.Single(answer.At("/line").EnumerateArray());
         Assert.Empty(answer.At("/at").EnumerateArray());
         Assert.Equal("/tests/1/specimens", answer.Finding("no-optimum").Text("/pointer"));
@@ -110,7 +110,7 @@ public sealed class EffortSeriesTests(RunningService service)
     [MemberData(nameof(Faults))]
     public async Task A_fault_is_refused_at_its_place(string body, int status, string[] faults)
     {
-        var refusal = await service.RefusalAsync(body, Address);
+        var refusal = await service.RefusalAsync(Address, body);
         Assert.Equal(status, refusal.Status);
         Assert.Equal(faults, refusal.Faults);
     }

@@ -16,7 +16,7 @@ public sealed class OversizeCorrectionTests(RunningService service)
     public async Task O2_dry_oversize_of_10_percent()
     {
         var published = PublishedCases.Of("oversize", "O2");
-        var answer = await service.AnswerAsync(ToTotal(published, published.Number("/dryF"), published.Number("/Gc"), "Mg/m3", published.Number("/rho_w")), Address);
+        var answer = await service.AnswerAsync(Address, ToTotal(published, published.Number("/dryF"), published.Number("/Gc"), "Mg/m3", published.Number("/rho_w")));
         Assert.True(answer.Number("/total/dryDensity").Prints(published.Number("/published/dryT"), 2));
         Assert.True(answer.Number("/total/waterContent").Prints(published.Number("/published/wT"), 0));
         Assert.True(answer.Number("/total/dryDensity").Prints(published.Number("/exact/dryT"), 4));
@@ -27,7 +27,7 @@ public sealed class OversizeCorrectionTests(RunningService service)
     public async Task O3_water_contents_mix_by_dry_mass()
     {
         var published = PublishedCases.Of("oversize", "O3");
-        var answer = await service.AnswerAsync(ToTotal(published, 1.9, 2.65, "Mg/m3", 1), Address);
+        var answer = await service.AnswerAsync(Address, ToTotal(published, 1.9, 2.65, "Mg/m3", 1));
         Assert.True(answer.Number("/total/waterContent").Prints(published.Number("/published/wT"), 1));
     }
 
@@ -36,7 +36,7 @@ public sealed class OversizeCorrectionTests(RunningService service)
     public async Task O4_from_memory_27_percent_in_pounds_per_cubic_foot()
     {
         var published = PublishedCases.Of("oversize", "O4");
-        var answer = await service.AnswerAsync(ToTotal(published, published.Number("/dryF"), published.Number("/Gc"), "lb/ft3", 62.4), Address);
+        var answer = await service.AnswerAsync(Address, ToTotal(published, published.Number("/dryF"), published.Number("/Gc"), "lb/ft3", 62.4));
         Assert.True(answer.Number("/total/dryDensity").Prints(published.Number("/published/dryT"), 1));
         Assert.True(answer.Number("/total/waterContent").Prints(published.Number("/published/wT"), 1));
         Assert.Equal("lb/ft3", answer.Text("/units/density"));
@@ -49,8 +49,8 @@ public sealed class OversizeCorrectionTests(RunningService service)
             {
                 var oversize = Text($$"""{"percent":{{percent:R}},"specificGravity":{{gravity:R}},"waterContent":{{coarse:R}}}""");
                 var given = dry * unit switch { "kg/m3" => 1000, "lb/ft3" => 62.4, "kN/m3" => 9.8, _ => 1 };
-                var total = await service.AnswerAsync(Text($$"""{"units":{"density":"{{unit}}"},"direction":"to-total","fine":{"dryDensity":{{given:R}},"waterContent":{{w:R}}},"oversize":{{oversize}}}"""), Address);
-                var back = await service.AnswerAsync($$"""{"units":{"density":"{{unit}}"},"direction":"to-fines","total":{{total.At("/total").GetRawText()}},"oversize":{{oversize}}}""", Address);
+                var total = await service.AnswerAsync(Address, Text($$"""{"units":{"density":"{{unit}}"},"direction":"to-total","fine":{"dryDensity":{{given:R}},"waterContent":{{w:R}}},"oversize":{{oversize}}}"""));
+                var back = await service.AnswerAsync(Address, $$"""{"units":{"density":"{{unit}}"},"direction":"to-fines","total":{{total.At("/total").GetRawText()}},"oversize":{{oversize}}}""");
                 Assert.Equal(given, back.Number("/fine/dryDensity"), given * 1e-12);
                 Assert.Equal(w, back.Number("/fine/waterContent"), 1e-12 * (w + (percent * coarse)));
             }, iter: 40, threads: 1);
@@ -58,7 +58,7 @@ public sealed class OversizeCorrectionTests(RunningService service)
     [Fact]
     public async Task What_was_given_is_repeated_as_it_was_given()
     {
-        var answer = await service.AnswerAsync($$"""{"direction":"to-fines","total":{"dryDensity":1.97,"waterContent":12.1},"oversize":{{Stones}}}""", Address);
+        var answer = await service.AnswerAsync(Address, $$"""{"direction":"to-fines","total":{"dryDensity":1.97,"waterContent":12.1},"oversize":{{Stones}}}""");
         Assert.Equal(1.97, answer.Number("/total/dryDensity"));
         Assert.Equal(12.1, answer.Number("/total/waterContent"));
     }
@@ -74,7 +74,7 @@ public sealed class OversizeCorrectionTests(RunningService service)
     [InlineData("30.1", "null", "oversize-above-limit")]
     public async Task Beyond_the_limits_it_is_computed_and_found(string percent, string sieve, string? code)
     {
-        var answer = await service.AnswerAsync($$"""{"direction":"to-total","fine":{"dryDensity":1.86,"waterContent":14},"oversize":{"percent":{{percent}},"specificGravity":2.65,"sieve":{{sieve}} } }""", Address);
+        var answer = await service.AnswerAsync(Address, $$"""{"direction":"to-total","fine":{"dryDensity":1.86,"waterContent":14},"oversize":{"percent":{{percent}},"specificGravity":2.65,"sieve":{{sieve}} } }""");
         Assert.Equal(code is null ? [] : [code], answer.Findings());
         Assert.True(answer.Number("/total/dryDensity") > 1.86);
     }
@@ -84,7 +84,7 @@ public sealed class OversizeCorrectionTests(RunningService service)
     [InlineData("""{"dryDensity":1.9,"waterContent":0.4}""", """{"percent":30,"specificGravity":2.65,"waterContent":2}""")]
     public async Task A_total_that_leaves_nothing_for_the_fines_is_refused(string total, string oversize)
     {
-        var refusal = await service.RefusalAsync($$"""{"direction":"to-fines","total":{{total}},"oversize":{{oversize}}}""", Address);
+        var refusal = await service.RefusalAsync(Address, $$"""{"direction":"to-fines","total":{{total}},"oversize":{{oversize}}}""");
         Assert.Equal(422, refusal.Status);
         Assert.Equal(["/total oversize-fills-all"], refusal.Faults);
     }
@@ -94,7 +94,7 @@ public sealed class OversizeCorrectionTests(RunningService service)
     [InlineData("to-fines", "total")]
     public async Task The_working_of_either_direction_can_be_followed(string direction, string given)
     {
-        var answer = await service.AnswerAsync($$"""{"direction":"{{direction}}","{{given}}":{"dryDensity":1.97,"waterContent":12},"oversize":{{Stones}},"trace":true}""", Address);
+        var answer = await service.AnswerAsync(Address, $$"""{"direction":"{{direction}}","{{given}}":{"dryDensity":1.97,"waterContent":12},"oversize":{{Stones}},"trace":true}""");
         var trace = answer.At("/trace").EnumerateArray().ToList();
         Assert.Equal(2, trace.Count);
         Assert.All(trace, step => Assert.Equal(step.Number("/value"), Arithmetic.Of(step.Text("/substitution")!), 1e-9));
@@ -119,7 +119,7 @@ public sealed class OversizeCorrectionTests(RunningService service)
     [InlineData("""{"direction":"to-total","fine":{"dryDensity":1.9,"waterContent":10},"oversize":{"percent":10,"specificGravity":0}}""", 422, "/oversize/specificGravity out-of-range")]
     public async Task A_fault_is_refused_at_its_place(string body, int status, string fault)
     {
-        var refusal = await service.RefusalAsync(body, Address);
+        var refusal = await service.RefusalAsync(Address, body);
         Assert.Equal(status, refusal.Status);
         Assert.Equal([fault], refusal.Faults);
     }

@@ -18,12 +18,19 @@ public class RunningService : IDisposable
 {
     public const string MoistureDensity = "/v1/moisture-density";
 
+    /// <summary>Held while a service starts: two that start at once in one process take each other's settings.</summary>
+    internal static readonly Lock Starting = new();
+
     private readonly QuietService _service = new();
 
     public RunningService()
     {
-        _service.UseKestrel(0);
-        _service.StartServer();
+        lock (Starting)
+        {
+            _service.UseKestrel(0);
+            _service.StartServer();
+        }
+
         Client = new HttpClient(new SocketsHttpHandler { AllowAutoRedirect = false, UseCookies = false })
         {
             BaseAddress = _service.ClientOptions.BaseAddress,
@@ -44,8 +51,11 @@ public class RunningService : IDisposable
         return await Client.SendAsync(request, TestContext.Current.CancellationToken);
     }
 
-    /// <summary>Posts a laboratory test, or another job, that has to be computed.</summary>
-    public async Task<JsonElement> AnswerAsync(string body, string address = MoistureDensity)
+    /// <summary>Posts a laboratory test that has to be computed.</summary>
+    public Task<JsonElement> AnswerAsync(string body) => AnswerAsync(MoistureDensity, body);
+
+    /// <summary>Posts a job that has to be computed.</summary>
+    public async Task<JsonElement> AnswerAsync(string address, string body)
     {
         using var response = await PostAsync(body, address: address);
         var text = await TextOf(response);
@@ -54,8 +64,11 @@ public class RunningService : IDisposable
         return JsonElement.Parse(text);
     }
 
-    /// <summary>Posts a laboratory test, or another job, that has to be refused.</summary>
-    public async Task<Refusal> RefusalAsync(string body, string address = MoistureDensity)
+    /// <summary>Posts a laboratory test that has to be refused.</summary>
+    public Task<Refusal> RefusalAsync(string body) => RefusalAsync(MoistureDensity, body);
+
+    /// <summary>Posts a job that has to be refused.</summary>
+    public async Task<Refusal> RefusalAsync(string address, string body)
     {
         using var response = await PostAsync(body, address: address);
         return await Refusal.Of(response);

@@ -28,7 +28,7 @@ public sealed class SaturationLinesTests(RunningService service)
     [Fact]
     public async Task Saturation_comes_first_and_each_line_in_the_order_of_the_request()
     {
-        var answer = await service.AnswerAsync("""{"specificGravity":{"value":2.7,"determined":"measured"},"waterDensity":1,"airVoids":[5,0],"saturation":[80,100],"waterContents":[16,8]}""", Address);
+        var answer = await service.AnswerAsync(Address, """{"specificGravity":{"value":2.7,"determined":"measured"},"waterDensity":1,"airVoids":[5,0],"saturation":[80,100],"waterContents":[16,8]}""");
         Assert.Equal(
             [("saturation", 80.0), ("saturation", 100.0), ("airVoids", 5.0), ("airVoids", 0.0)],
             answer.At("/lines").EnumerateArray().Select(line => (line.Text("/kind")!, line.Number("/value"))));
@@ -43,7 +43,7 @@ public sealed class SaturationLinesTests(RunningService service)
     [Fact]
     public async Task From_to_and_count_give_points_at_equal_steps_with_both_ends()
     {
-        var answer = await service.AnswerAsync(Sound(""" "from":8,"to":8.7,"count":8 """), Address);
+        var answer = await service.AnswerAsync(Address, Sound(""" "from":8,"to":8.7,"count":8 """));
         var points = answer.At("/lines/0/points").EnumerateArray().Select(point => point[0].GetDouble()).ToList();
         Assert.Equal(8, points.Count);
         Assert.Equal((8, 8.7), (points[0], points[^1]));
@@ -55,7 +55,7 @@ public sealed class SaturationLinesTests(RunningService service)
     [InlineData(""" "airVoids":[10], """, "airVoids", 10)]
     public async Task Where_no_line_is_named_it_is_the_zero_air_voids_line(string lines, string kind, double value)
     {
-        var answer = await service.AnswerAsync(Sound(lines + """ "waterContents":[10] """), Address);
+        var answer = await service.AnswerAsync(Address, Sound(lines + """ "waterContents":[10] """));
         var line = Assert.Single(answer.At("/lines").EnumerateArray());
         Assert.Equal((kind, value), (line.Text("/kind"), line.Number("/value")));
     }
@@ -63,7 +63,7 @@ public sealed class SaturationLinesTests(RunningService service)
     [Fact]
     public async Task An_assumed_or_unusual_specific_gravity_is_found()
     {
-        var answer = await service.AnswerAsync("""{"specificGravity":{"value":3.3},"waterContents":[10]}""", Address);
+        var answer = await service.AnswerAsync(Address, """{"specificGravity":{"value":3.3},"waterContents":[10]}""");
         Assert.Equal(["specific-gravity-unusual", "specific-gravity-assumed"], answer.Findings());
     }
 
@@ -71,10 +71,10 @@ public sealed class SaturationLinesTests(RunningService service)
     public async Task The_bounds_themselves_are_taken()
     {
         var twenty = List(Enumerable.Range(1, 20).Select(i => i * 5.0));
-        var answer = await service.AnswerAsync(Sound($$""" "saturation":{{twenty}},"airVoids":{{List(Enumerable.Range(0, 20).Select(i => i * 4.9))}},"from":0,"to":1000,"count":1000 """), Address);
+        var answer = await service.AnswerAsync(Address, Sound($$""" "saturation":{{twenty}},"airVoids":{{List(Enumerable.Range(0, 20).Select(i => i * 4.9))}},"from":0,"to":1000,"count":1000 """));
         Assert.Equal(40, answer.At("/lines").GetArrayLength());
         Assert.All(answer.At("/lines").EnumerateArray(), line => Assert.Equal(1000, line.At("/points").GetArrayLength()));
-        Assert.Equal(1000, (await service.AnswerAsync(Sound($$""" "waterContents":{{List(Enumerable.Range(0, 1000).Select(i => i * 0.5))}} """), Address)).At("/lines/0/points").GetArrayLength());
+        Assert.Equal(1000, (await service.AnswerAsync(Address, Sound($$""" "waterContents":{{List(Enumerable.Range(0, 1000).Select(i => i * 0.5))}} """))).At("/lines/0/points").GetArrayLength());
     }
 
     public static TheoryData<string, int, string[]> Faults => new()
@@ -108,7 +108,7 @@ public sealed class SaturationLinesTests(RunningService service)
     [MemberData(nameof(Faults))]
     public async Task A_fault_is_refused_at_its_place(string body, int status, string[] faults)
     {
-        var refusal = await service.RefusalAsync(body, Address);
+        var refusal = await service.RefusalAsync(Address, body);
         Assert.Equal(status, refusal.Status);
         Assert.Equal(faults, refusal.Faults);
     }
@@ -116,8 +116,8 @@ public sealed class SaturationLinesTests(RunningService service)
     private async Task HoldsAsync(JsonElement published, string unit, double water, int decimals)
     {
         var values = published.At("/published").EnumerateObject().Select(item => (W: item.Name, Density: item.Value.GetDouble())).ToList();
-        var answer = await service.AnswerAsync(string.Create(CultureInfo.InvariantCulture,
-            $$"""{"units":{"density":"{{unit}}"},"specificGravity":{"value":{{published.Number("/Gs")}}},"waterDensity":{{water}},"waterContents":[{{string.Join(',', values.Select(item => item.W))}}]}"""), Address);
+        var answer = await service.AnswerAsync(Address, string.Create(CultureInfo.InvariantCulture,
+            $$"""{"units":{"density":"{{unit}}"},"specificGravity":{"value":{{published.Number("/Gs")}}},"waterDensity":{{water}},"waterContents":[{{string.Join(',', values.Select(item => item.W))}}]}"""));
         Assert.All(values.Select((item, i) => (item.Density, Line: answer.Number($"/lines/0/points/{i}/1"))), item =>
             Assert.True(item.Line.Prints(item.Density, decimals), $"{item.Line} where {item.Density} is published."));
     }

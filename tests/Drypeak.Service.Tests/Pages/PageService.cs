@@ -1,5 +1,6 @@
 using AngleSharp.Html.Dom;
 using AngleSharp.Html.Parser;
+using Drypeak.Service.Tests.Laboratory;
 using Microsoft.AspNetCore.Mvc.Testing;
 using Xunit;
 
@@ -12,8 +13,12 @@ public sealed class PageService : IDisposable
 
     public PageService()
     {
-        _service.UseKestrel(0);
-        _service.StartServer();
+        lock (RunningService.Starting)
+        {
+            _service.UseKestrel(0);
+            _service.StartServer();
+        }
+
         Client = _service.CreateClient(new WebApplicationFactoryClientOptions { BaseAddress = _service.ClientOptions.BaseAddress, AllowAutoRedirect = false, HandleCookies = false });
         Client.DefaultRequestHeaders.Accept.ParseAdd("text/html");
     }
