@@ -37,7 +37,7 @@ public sealed class ReferenceTests(RunningService service)
         Assert.Equal(50, answer.Number("/relativeDensity"), 1e-9);
         Assert.Equal(100 * 1.4 / 1.6, answer.Number("/relativeCompaction"), 1e-9);
         Assert.True(answer.IsNull("/dryDensity"));
-        Assert.All(answer.GetProperty("trace").EnumerateArray(), step => Assert.Equal(step.Number("/value"), Arithmetic.Of(step.Text("/substitution")!), 1e-9));
+        Assert.All(answer.GetProperty("trace").EnumerateArray(), step => Assert.Equal(step.Number("/value"), Arithmetic.Value(step.Text("/substitution")!), 1e-9));
     }
 
     [Theory]

@@ -97,7 +97,7 @@ public sealed class OversizeCorrectionTests(RunningService service)
         var answer = await service.AnswerAsync(Address, $$"""{"direction":"{{direction}}","{{given}}":{"dryDensity":1.97,"waterContent":12},"oversize":{{Stones}},"trace":true}""");
         var trace = answer.At("/trace").EnumerateArray().ToList();
         Assert.Equal(2, trace.Count);
-        Assert.All(trace, step => Assert.Equal(step.Number("/value"), Arithmetic.Of(step.Text("/substitution")!), 1e-9));
+        Assert.All(trace, step => Assert.Equal(step.Number("/value"), Arithmetic.Value(step.Text("/substitution")!), 1e-9));
         var result = direction == "to-total" ? "/total" : "/fine";
         Assert.Equal(answer.Number(result + "/dryDensity"), trace[0].Number("/value"));
         Assert.Equal(answer.Number(result + "/waterContent"), trace[1].Number("/value"));

@@ -47,7 +47,7 @@ public sealed class TraceTests(RunningService service)
             if (step.Text("/substitution") is { } substitution)
             {
                 Assert.Matches(@"^[0-9.+\-*/^() ]+$", substitution);
-                Assert.Equal(value, Arithmetic.Of(substitution), Math.Abs(value) * 1e-9);
+                Assert.Equal(value, Arithmetic.Value(substitution), Math.Abs(value) * 1e-9);
             }
             else
             {
