@@ -50,8 +50,8 @@ internal sealed class EffortSeriesJob(MoistureDensityJob laboratory)
         var seen = new Dictionary<double, int>();
         for (var i = 0; i < tests.Count; i++)
         {
-            var (test, result) = MoistureDensityJob.Analyze(tests[i]);
-            if (EffortSeries.EffortOf(test, result.Specimens) is not { } effort)
+            var (test, specimens) = MoistureDensityJob.Reduce(tests[i]);
+            if (EffortSeries.EffortOf(test, specimens) is not { } effort)
             {
                 yield return new Fault($"/tests/{i}/method", "effort-unknown",
                     "The compactive effort is not known: name a method that has one, or \"custom\" with effort and a mold whose volume is known.");

@@ -70,11 +70,18 @@ internal sealed class MoistureDensityJob(Limits limits)
     /// <summary>The domain's result of a request that passed <see cref="Check"/>.</summary>
     public static (MoistureDensityTest Test, MoistureDensityResult Result) Analyze(MoistureDensityRequest request)
     {
+        var (test, specimens) = Reduce(request);
+        return (test, MoistureDensity.Analyze(test, specimens));
+    }
+
+    /// <summary>The reduced specimens of a request that passed <see cref="Check"/>, without a curve.</summary>
+    public static (MoistureDensityTest Test, IReadOnlyList<Specimen> Specimens) Reduce(MoistureDensityRequest request)
+    {
         var test = request.ToTest();
         var faults = new List<Fault>();
         var specimens = MoistureDensity.Reduce(test, faults).OfType<Specimen>().ToList();
         return faults.Count == 0
-            ? (test, MoistureDensity.Analyze(test, specimens))
+            ? (test, specimens)
             : throw new ArgumentException("The request does not keep the rules: " + faults[0].Message, nameof(request));
     }
 
