@@ -60,7 +60,7 @@ internal static class FieldDensityPage
         Demonstrations = Demonstrations,
         View = typeof(FieldAnswerView),
         Check = job.Check,
-        Compute = FieldDensityJob.Compute,
+        Compute = FormAnswer.Of<FieldDensityRequest, FieldDensityAnswer>(FieldDensityJob.Compute),
         Headline = FieldAnswerWords.Headline,
     };
 
