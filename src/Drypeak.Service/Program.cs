@@ -4,7 +4,8 @@ using Drypeak.Service.Laboratory;
 using Drypeak.Service.Pages;
 
 var builder = WebApplication.CreateBuilder(args).AddDrypeakHosting();
-builder.Services.AddSingleton<MoistureDensityJob>().AddSingleton<ComparisonJob>().AddSingleton<FieldDensityJob>();
+builder.Services.AddSingleton<MoistureDensityJob>().AddSingleton<ComparisonJob>().AddSingleton<FieldDensityJob>()
+    .AddSingleton<RelativeDensityJob>().AddSingleton<OnePointJob>().AddSingleton<RapidMethodJob>();
 
 var app = builder.Build();
 app.UseDrypeakHosting(PageEndpoints.NotFound);

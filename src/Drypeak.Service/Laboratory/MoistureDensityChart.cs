@@ -1,4 +1,5 @@
 using Drypeak.Figures;
+using Drypeak.Service.Charts;
 using Drypeak.Soil.Curves;
 using Drypeak.Soil.Laboratory;
 using Drypeak.Soil.Quantities;
@@ -9,9 +10,6 @@ namespace Drypeak.Service.Laboratory;
 /// <summary>What the chart of a laboratory test shows.</summary>
 internal static class MoistureDensityChart
 {
-    /// <summary>Digits of the drawn curve and of intervals: finer than any picture, and short in an address.</summary>
-    private const int DrawnDigits = 6;
-
     /// <summary>Above this many specimens bars hide one another.</summary>
     private const int MostWithErrorBars = 40;
 
@@ -29,11 +27,11 @@ internal static class MoistureDensityChart
             Specimens = [.. result.Specimens.Select(specimen => new ChartSpecimen(
                 specimen.WaterContent.Percent, specimen.DryDensity.In(unit), specimen.Label, specimen.SetAside is { })
             {
-                WaterContentPlusMinus = uncertain.TryGetValue(specimen.Label, out var its) ? Drawn(HalfOf95Percent * its.WaterContent * 100) : null,
-                DryDensityPlusMinus = uncertain.TryGetValue(specimen.Label, out its) ? Drawn(HalfOf95Percent * new Density(its.DryDensity).In(unit)) : null,
+                WaterContentPlusMinus = uncertain.TryGetValue(specimen.Label, out var its) ? DrawnNumber.Of(HalfOf95Percent * its.WaterContent * 100) : null,
+                DryDensityPlusMinus = uncertain.TryGetValue(specimen.Label, out its) ? DrawnNumber.Of(HalfOf95Percent * new Density(its.DryDensity).In(unit)) : null,
             })],
             Curve = [.. (result.Curve?.Chosen.Curve ?? []).Select(point => new ChartPoint(
-                Drawn(point.WaterContent * 100), Drawn(new Density(point.DryDensity).In(unit))))],
+                DrawnNumber.Of(point.WaterContent * 100), DrawnNumber.Of(new Density(point.DryDensity).In(unit))))],
             Optimum = result.Optimum is { } optimum ? Peak(test, optimum) : null,
             Adopted = test.Adopted is { } adopted ? Peak(test, adopted.WaterContent, adopted.MaximumDryDensity) : null,
             Corrected = result.Corrected is { } corrected ? Peak(test, corrected.WaterContent, corrected.DryDensity) : null,
@@ -41,7 +39,7 @@ internal static class MoistureDensityChart
             WaterDensity = test.SpecificGravity is { } ? test.WaterDensity.KilogramsPerCubicMeter : null,
             Saturation = request.Lines?.Saturation ?? [],
             AirVoids = request.Lines?.AirVoids ?? [],
-            NextSpecimen = result.Curve?.Next is { } next ? Drawn(next.WaterContent * 100) : null,
+            NextSpecimen = result.Curve?.Next is { } next ? DrawnNumber.Of(next.WaterContent * 100) : null,
         };
     }
 
@@ -49,10 +47,10 @@ internal static class MoistureDensityChart
         Peak(test, new WaterContent(optimum.WaterContent.Value), new Density(optimum.MaximumDryDensity.Value)) with
         {
             WaterContentInterval = optimum.WaterContent is { Lower: { } driest, Upper: { } wettest }
-                ? [Drawn(driest * 100), Drawn(wettest * 100)]
+                ? [DrawnNumber.Of(driest * 100), DrawnNumber.Of(wettest * 100)]
                 : null,
             MaximumDryDensityInterval = optimum.MaximumDryDensity is { Lower: { } least, Upper: { } greatest }
-                ? [Drawn(new Density(least).In(test.Units.Density)), Drawn(new Density(greatest).In(test.Units.Density))]
+                ? [DrawnNumber.Of(new Density(least).In(test.Units.Density)), DrawnNumber.Of(new Density(greatest).In(test.Units.Density))]
                 : null,
         };
 
@@ -63,7 +61,4 @@ internal static class MoistureDensityChart
         Reporting.DryDensity(test.Method, density, test.Units.Density),
         null,
         null);
-
-    private static double Drawn(double value) =>
-        value == 0 ? 0 : Math.Round(value, Math.Clamp(DrawnDigits - 1 - (int)Math.Floor(Math.Log10(Math.Abs(value))), 0, 15));
 }
