@@ -80,7 +80,7 @@ internal static class FieldDensityWords
         var judged = result.Judged;
         var compaction = judged.ValueOf(Soil.Acceptance.AcceptedQuantity.RelativeCompaction) is { } ratio ? $"relative compaction {ReaderText.Percent(ratio)}" : null;
         var water = judged.ValueOf(Soil.Acceptance.AcceptedQuantity.WaterContentFromOptimum) is { } apart
-            ? $"water {ReaderText.Fixed(Math.Abs(apart) * 100, 1)} % {(apart < 0 ? "dry" : "wet")} of the optimum" : null;
+            ? $"{ReaderText.Fixed(Math.Abs(apart) * 100, 1)} % {(apart < 0 ? "dry" : "wet")} of the optimum" : null;
         var measured = string.Join(", ", new[] { compaction, water }.OfType<string>());
         var text = result.Outcome is { } outcome ? $"{outcome}{(measured.Length > 0 ? ": " + measured : "")}" : measured;
         return text.Length == 0 ? "Field density test" : char.ToUpperInvariant(text[0]) + text[1..];

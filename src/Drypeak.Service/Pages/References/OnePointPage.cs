@@ -66,8 +66,8 @@ internal static class OnePointPage
         View = typeof(OnePointView),
         Check = job.Check,
         Compute = FormAnswer.Of<OnePointRequest, OnePointAnswer, Figures.PlotChart>(job.Compute, job.Chart),
-        Headline = answer => answer.Optimum is { } optimum
-            ? $"{ReferenceWords.Density(optimum.MaximumDryDensity, answer.Units)} at {ReferenceWords.Percent(optimum.WaterContent)}"
+        Headline = answer => answer.Optimum is { } optimum && ReferenceWords.Reported(optimum.MaximumDryDensity, optimum.WaterContent, answer.Units) is var reported
+            ? $"{reported.Density} at {reported.WaterContent}"
             : "No curve chosen",
     };
 

@@ -1,5 +1,6 @@
 using Drypeak.Service.Contracts;
 using Drypeak.Soil.Quantities;
+using Drypeak.Soil.TestMethods;
 
 namespace Drypeak.Service.Pages.References;
 
@@ -12,6 +13,13 @@ internal static class ReferenceWords
     {
         var unit = units.DensityUnit();
         return ReaderText.Of(Soil.Quantities.Density.From(density, unit), unit);
+    }
+
+    /// <summary>An optimum as a laboratory would report it.</summary>
+    public static (string Density, string WaterContent) Reported(double density, double waterContent, UnitsContract units)
+    {
+        var unit = units.DensityUnit();
+        return (Reporting.DryDensity(null, Soil.Quantities.Density.From(density, unit), unit), Reporting.WaterContent(null, WaterContent.FromPercent(waterContent)));
     }
 
     /// <summary>A difference from the optimum: <c>1.2 % dry of the optimum</c>.</summary>
