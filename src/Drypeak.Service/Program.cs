@@ -1,4 +1,5 @@
 using Drypeak.Service.Charts;
+using Drypeak.Service.Earthwork;
 using Drypeak.Service.Field;
 using Drypeak.Service.Hosting;
 using Drypeak.Service.Laboratory;
@@ -6,6 +7,7 @@ using Drypeak.Service.Pages;
 
 var builder = WebApplication.CreateBuilder(args).AddDrypeakHosting();
 builder.Services.AddSingleton<ChartRules>().AddSingleton<MoistureDensityJob>().AddSingleton<ComparisonJob>().AddSingleton<FieldDensityJob>();
+builder.Services.AddSingleton<TestLocationsJob>();
 
 var app = builder.Build();
 app.UseDrypeakHosting(PageEndpoints.NotFound);
@@ -18,6 +20,12 @@ FieldDensityJob.Map(app);
 RelativeDensityJob.Map(app);
 OnePointJob.Map(app);
 RapidMethodJob.Map(app);
+SpecimenWaterJob.Map(app);
+LiftWaterJob.Map(app);
+QuantitiesJob.Map(app);
+TestLocationsJob.Map(app);
+RollerOutputJob.Map(app);
+TestStripJob.Map(app);
 app.MapTestMethods();
 app.MapFindingKinds();
 app.MapSpecimenSheet();

@@ -56,6 +56,9 @@ public sealed record EarthQuantities(Fill Fill, IReadOnlyList<Draw> Draws, Mass 
     /// <summary>Water in the bank.</summary>
     public Mass WaterMass => new(Draws.Sum(draw => draw.WaterMass.Kilograms));
 
+    /// <summary>Soil and water in trucks.</summary>
+    public Mass HauledMass => new(Draws.Sum(draw => draw.HauledMass.Kilograms));
+
     /// <summary>Volume in trucks; null where nothing is known of the loose soil.</summary>
     public Volume? LooseVolume => Draws[0].Loose is null ? null : new Volume(Draws.Sum(draw => draw.LooseVolume!.Value.CubicMeters));
 
@@ -105,6 +108,11 @@ public sealed record EarthQuantities(Fill Fill, IReadOnlyList<Draw> Draws, Mass 
                 $"The borrow areas serve {ReaderText.Of(FillServed, units.BulkVolume)} of the fill; {ReaderText.Of(FillMissing, units.BulkVolume)} are missing. Open another area, or raise a capacity or a share.");
         }
 
+        foreach (var finding in ReviewWater(units))
+        {
+            yield return finding;
+        }
+
         if (ShrinkageOfBorrow < -1e-9)
         {
             yield return EarthworkFindingKinds.FillLooserThanBorrow.At("/fill",
@@ -127,6 +135,27 @@ public sealed record EarthQuantities(Fill Fill, IReadOnlyList<Draw> Draws, Mass 
         {
             yield return EarthworkFindingKinds.LooseDensityMissing.At("/truck/volume",
                 "The truck has a volume, but nothing is known of the loose soil, so that no loads are counted by it. Give loose, by density or by swell.");
+        }
+    }
+
+    private IEnumerable<Finding> ReviewWater(EarthworkUnits units)
+    {
+        if (Fill.WaterContent is not { } ofFill || ToAdd is not { } total)
+        {
+            yield break;
+        }
+
+        var served = new Mass(Fill.DryMass.Kilograms - MissingSolids.Kilograms);
+        var (wetter, drier) = (Draws.Where(draw => draw.Area.WaterContent.Fraction > ofFill.Fraction + 1e-12).ToList(), Draws.Where(draw => draw.Area.WaterContent.Fraction < ofFill.Fraction - 1e-12).ToList());
+        if (wetter.Exists(draw => draw.DryMass.Kilograms > 0) && drier.Exists(draw => draw.DryMass.Kilograms > 0))
+        {
+            yield return EarthworkFindingKinds.WaterBothWays.At("/borrowAreas",
+                $"Soil from {string.Join(", ", wetter.Select(draw => draw.Area.Label))} has to lose water, and soil from {string.Join(", ", drier.Select(draw => draw.Area.Label))} needs some; the sum sets one against the other. Use the numbers of each area, unless both are mixed in one lift.");
+        }
+        else if (total.Mass.Kilograms < 0 && !total.IsNoneIn(served))
+        {
+            yield return EarthworkFindingKinds.WaterToLose.At("/fill/waterContent",
+                $"The borrow is wetter than the {ReaderText.Of(ofFill)} of the fill: {ReaderText.Of(new Mass(-total.Mass.Kilograms), units.Mass)} of water have to be lost. Drain the borrow area, turn and air the soil, or mix in drier soil.");
         }
     }
 }

@@ -21,9 +21,9 @@ public static class EarthworkFindingKinds
         "Make the specimens, look at the curve, and add one where it is not bracketed.",
         "About 2 % apart, two dry and two wet: ASTM D698 (from memory)");
 
-    /// <summary>A lift that is too wet.</summary>
+    /// <summary>Soil that is too wet.</summary>
     public static readonly FindingKind WaterToLose = new("water-to-lose", Severity.Warning,
-        "The lift is wetter than it shall be.",
+        "The soil is wetter than it shall be when it is rolled.",
         "Rolled too wet it heaves, and its density is not reached.",
         "Scarify and turn it in dry weather, mix in drier soil, or stabilize; add no water.",
         "Water content above the target");
@@ -48,6 +48,13 @@ public static class EarthworkFindingKinds
         "Part of the fill has no soil.",
         "Open another area, or raise a capacity.",
         "Solids are neither lost nor gained");
+
+    /// <summary>Borrow areas on both sides of the fill's water content.</summary>
+    public static readonly FindingKind WaterBothWays = new("water-both-ways", Severity.Warning,
+        "Some borrow areas are wetter than the fill shall be, and others drier.",
+        "Their sum sets water to lose against water to add, as if all soil were mixed.",
+        "Plan the water of each area by itself, or mix the soils in one lift.",
+        "Water to add, summed over areas");
 
     /// <summary>A fill that takes more room than its borrow.</summary>
     public static readonly FindingKind FillLooserThanBorrow = new("fill-looser-than-borrow", Severity.Note,
@@ -83,6 +90,13 @@ public static class EarthworkFindingKinds
         "units.volume is the unit of molds and holes; earth is counted in units.bulkVolume, whose default is m3.",
         "Give units.bulkVolume.",
         "The interface's units");
+
+    /// <summary>An area that is hardly a lift.</summary>
+    public static readonly FindingKind AreaSmall = new("area-small", Severity.Warning,
+        "The area is smaller than lifts are.",
+        "Most often the number is in another unit.",
+        "Check the numbers and units.length.",
+        "Below 10 m²: " + CommonPractice);
 
     /// <summary>A roller that drives too fast.</summary>
     public static readonly FindingKind RollerFast = new("roller-fast", Severity.Warning,
@@ -136,7 +150,7 @@ public static class EarthworkFindingKinds
     /// <summary>Every kind, in the order of the jobs.</summary>
     public static IReadOnlyList<FindingKind> All { get; } =
     [
-        DryBack, TargetsProposed, WaterToLose, MuchWater, LiftThicknessUnusual, BorrowShort, FillLooserThanBorrow, LooseDenserThanBank, DriesInHaul,
-        LooseDensityMissing, BulkVolumeUnitNotGiven, RollerFast, EfficiencyNotGiven, TooFewPasses, TooFewReadings, DensityFalls, NoGrowth, StillGaining,
+        DryBack, TargetsProposed, WaterToLose, MuchWater, LiftThicknessUnusual, BorrowShort, WaterBothWays, FillLooserThanBorrow, LooseDenserThanBank, DriesInHaul,
+        LooseDensityMissing, BulkVolumeUnitNotGiven, AreaSmall, RollerFast, EfficiencyNotGiven, TooFewPasses, TooFewReadings, DensityFalls, NoGrowth, StillGaining,
     ];
 }

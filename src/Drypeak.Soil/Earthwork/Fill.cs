@@ -66,6 +66,9 @@ public sealed record Draw(BorrowArea Area, Mass DryMass, LooseSoil? Loose)
     /// <summary>Soil and water in trucks.</summary>
     public Mass HauledMass => new(DryMass.Kilograms * (1 + (Loose?.WaterContentOf(Area) ?? Area.WaterContent).Fraction));
 
+    /// <summary>Bank volume that stays in the area; null without a capacity.</summary>
+    public Volume? CapacityLeft => Area.Capacity is { } capacity ? new Volume(Math.Max(0, capacity.CubicMeters - BankVolume.CubicMeters)) : null;
+
     /// <summary>Water that brings it to the fill's water content.</summary>
     public WaterAmount ToAdd(WaterContent ofFill, Density water) => WaterAmount.Between(DryMass, Area.WaterContent, ofFill, water);
 }

@@ -20,6 +20,8 @@ public sealed record Fleet(double LoadingSeconds, double DumpSeconds, Speed Haul
 /// <param name="Distance">From loader to fill.</param>
 public sealed record FleetCycle(Fleet Fleet, Length Distance)
 {
+    private const double Arithmetic = 1e-9;
+
     /// <summary>Loaded, s.</summary>
     public double HaulSeconds => Distance.Meters / Fleet.HaulSpeed.MetersPerSecond;
 
@@ -38,9 +40,20 @@ public sealed record FleetCycle(Fleet Fleet, Length Distance)
     /// <summary>Trucks that run.</summary>
     public double Trucks => Fleet.Trucks ?? TrucksToBalance;
 
-    /// <summary>Whether the loader waits for trucks, and not trucks for the loader.</summary>
-    public bool LoaderWaits => Trucks < BalancedTrucks * (1 - 1e-9);
+    /// <summary>Who waits for the other.</summary>
+    public FleetWait Waits => Trucks < BalancedTrucks * (1 - Arithmetic) ? FleetWait.Loader : Trucks > BalancedTrucks * (1 + Arithmetic) ? FleetWait.Trucks : FleetWait.None;
 
     /// <summary>Loads in an hour: as many as the trucks bring round, and no more than the loader fills.</summary>
     public double LoadsPerHour => 3600 * Fleet.Efficiency * Math.Min(1 / Fleet.LoadingSeconds, Trucks / Seconds);
+}
+
+/// <summary>Who stands idle in a fleet.</summary>
+public enum FleetWait
+{
+    /// <summary>Nobody: the trucks balance the loader.</summary>
+    None,
+    /// <summary>The loader, for trucks.</summary>
+    Loader,
+    /// <summary>The trucks, for the loader.</summary>
+    Trucks,
 }

@@ -9,8 +9,8 @@ namespace Drypeak.Soil.Earthwork;
 /// <param name="Point">Where.</param>
 public sealed record TestLocation(int Lift, int Stratum, PlanPoint Point)
 {
-    /// <summary>Lift and number within it: <c>3-2</c>.</summary>
-    public string Label => $"{Lift}-{Stratum}";
+    /// <summary>Lift and number within it: <c>L3-2</c>.</summary>
+    public string Label => $"L{Lift}-{Stratum}";
 }
 
 /// <summary>
@@ -24,6 +24,9 @@ public sealed record TestLocation(int Lift, int Stratum, PlanPoint Point)
 /// <param name="Seed">Of the random numbers.</param>
 public sealed record TestProgramme(TestArea Area, int Lifts, int PerLift, int EveryLifts, long Seed)
 {
+    /// <summary>m²; a lift is larger than what one test disturbs around it.</summary>
+    private const double SmallestArea = 10;
+
     /// <summary>Lifts that are tested: one of each group of <see cref="EveryLifts"/>, its last, so that a group that is cut short is tested too.</summary>
     public int LiftsTested => (int)Count.RoundedUp((double)Lifts / EveryLifts);
 
@@ -47,6 +50,21 @@ public sealed record TestProgramme(TestArea Area, int Lifts, int PerLift, int Ev
 
     /// <summary>Stations between the strata of a lift, m.</summary>
     public IEnumerable<double> StratumStations() => Enumerable.Range(1, PerLift - 1).Select(i => Area.StationAt((double)i / PerLift));
+
+    /// <summary>What a careful reviewer says.</summary>
+    /// <param name="liftThickness">Where it was given.</param>
+    /// <param name="units">The units that texts speak.</param>
+    public IEnumerable<Finding> Review(Length? liftThickness, EarthworkUnits units)
+    {
+        var sides = new Length(Math.Sqrt(Area.SquareMeters));
+        return
+        [
+            .. liftThickness is { } thickness ? PlausibilityReview.Thickness(thickness, "/liftThickness", units) : [],
+            .. Area.SquareMeters < SmallestArea * (1 - 1e-9)
+                ? [EarthworkFindingKinds.AreaSmall.At("/area", $"The area of a lift is {ReaderText.Significant(Area.SquareMeters)} m², as a square of {ReaderText.Of(sides, units.Length)}. Check the numbers and units.length.")]
+                : Array.Empty<Finding>(),
+        ];
+    }
 
     /// <summary>The working of the count, and of the first location where its area is a rectangle, in the caller's units.</summary>
     /// <param name="quantity">What the frequency counts by, in SI, and the frequency; null where the tests of a lift are given.</param>

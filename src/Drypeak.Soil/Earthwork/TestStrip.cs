@@ -6,7 +6,8 @@ namespace Drypeak.Soil.Earthwork;
 /// <summary>Readings of a trial strip after so many passes.</summary>
 /// <param name="Passes">Of the roller, over each place.</param>
 /// <param name="DryDensities">One or more.</param>
-public sealed record StripStage(int Passes, IReadOnlyList<Density> DryDensities)
+/// <param name="WaterContent">At which they were taken; null where it was not said.</param>
+public sealed record StripStage(int Passes, IReadOnlyList<Density> DryDensities, WaterContent? WaterContent = null)
 {
     /// <summary>Their mean.</summary>
     public Density Mean => new(DryDensities.Average(density => density.KilogramsPerCubicMeter));
