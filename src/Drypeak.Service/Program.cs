@@ -1,4 +1,3 @@
-using Drypeak.Service.Charts;
 using Drypeak.Service.Earthwork;
 using Drypeak.Service.Field;
 using Drypeak.Service.Hosting;
@@ -6,8 +5,8 @@ using Drypeak.Service.Laboratory;
 using Drypeak.Service.Pages;
 
 var builder = WebApplication.CreateBuilder(args).AddDrypeakHosting();
-builder.Services.AddSingleton<ChartRules>().AddSingleton<MoistureDensityJob>().AddSingleton<ComparisonJob>().AddSingleton<FieldDensityJob>();
-builder.Services.AddSingleton<TestLocationsJob>();
+builder.Services.AddSingleton<MoistureDensityJob>().AddSingleton<ComparisonJob>().AddSingleton<FieldDensityJob>();
+builder.Services.AddSingleton<TestLocationsJob>().AddSingleton<TestStripJob>();
 
 var app = builder.Build();
 app.UseDrypeakHosting(PageEndpoints.NotFound);
@@ -29,7 +28,6 @@ TestStripJob.Map(app);
 app.MapTestMethods();
 app.MapFindingKinds();
 app.MapSpecimenSheet();
-app.MapCharts();
 app.MapPages();
 
 if (args is ["openapi", var path])

@@ -62,4 +62,5 @@ internal static class ServiceJson
 [JsonSerializable(typeof(TestStripRequest))]
 [JsonSerializable(typeof(TestStripAnswer))]
 [JsonSerializable(typeof(CompactionChart))]
+[JsonSerializable(typeof(PlotChart))]
 internal sealed partial class ContractsJson : JsonSerializerContext;

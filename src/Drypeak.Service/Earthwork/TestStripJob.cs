@@ -1,3 +1,5 @@
+using Drypeak.Figures;
+using Drypeak.Service.Charts;
 using Drypeak.Service.Contracts;
 using Drypeak.Service.Hosting;
 using Drypeak.Soil.Earthwork;
@@ -8,22 +10,38 @@ using FluentValidation;
 namespace Drypeak.Service.Earthwork;
 
 /// <summary><c>POST /v1/earthwork/test-strip</c>.</summary>
-internal static class TestStripJob
+internal sealed class TestStripJob(Limits limits)
 {
     private const int CurvePoints = 61;
 
-    public static void Map(IEndpointRouteBuilder app) =>
-        app.MapEarthworkJob("test-strip", new TestStripRules(app.ServiceProvider.GetRequiredService<Limits>()), Compute, Examples.TestStripRequest)
-            .WithSummary("Passes and target density from a trial strip")
-            .WithDescription("Dry density against passes of the roller: the growth curve, the passes after which one more gains less than a stated amount, and the density that they reach with its spread.");
+    private readonly TestStripRules _rules = new(limits);
 
-    /// <summary>Computes a request that passed the rules.</summary>
-    public static TestStripAnswer Compute(TestStripRequest request)
+    /// <summary>The kind of its chart.</summary>
+    public ChartKind<PlotChart> Chart { get; } = ChartKind.Plot("test-strip", "Dry density against passes on a trial strip", limits);
+
+    public static void Map(IEndpointRouteBuilder app)
+    {
+        var job = app.ServiceProvider.GetRequiredService<TestStripJob>();
+        app.MapJob<TestStripRequest, TestStripAnswer, PlotChart>(EarthworkJob.Address + "test-strip", job.Check, job.Compute, Examples.TestStripRequest, job.Chart)
+            .WithTags("Earthwork")
+            .WithName("test-strip")
+            .WithSummary("Passes and target density from a trial strip")
+            .WithDescription("Dry density against passes of the roller: the growth curve, the passes after which one more gains less than a stated amount, and the density that they reach with its spread. With Accept: image/svg+xml, image/png or application/pdf the chart is the answer.");
+    }
+
+    /// <summary>Every broken rule; empty where the request can be computed.</summary>
+    public IReadOnlyList<Fault> Check(TestStripRequest request) => _rules.Check(request);
+
+    /// <summary>Computes a request that passed <see cref="Check"/>.</summary>
+    public Charted<TestStripAnswer, PlotChart> Compute(TestStripRequest request)
     {
         var units = request.Units.ToUnits();
         var strip = StripOf(request, []);
         var places = request.Readings!.Index().ToDictionary(item => item.Item.Passes!.Value, item => $"/readings/{item.Index}");
-        return new TestStripAnswer
+        var chart = TestStripChart.Of(request, strip, units);
+        var links = Chart.LinksOf(chart, limits, out var whyNoLink);
+        var findings = strip.Review(passes => places[passes], units);
+        var answer = new TestStripAnswer
         {
             Reference = request.Reference,
             Identification = request.Identification,
@@ -36,12 +54,13 @@ internal static class TestStripJob
                     target.DryDensity.In(units.Density), target.Readings, target.StandardDeviation?.In(units.Density),
                     100 * target.StandardDeviation?.KilogramsPerCubicMeter / target.DryDensity.KilogramsPerCubicMeter)
                 : null,
-            Links = new LinksContract(),
+            Links = links,
             Trace = EarthworkJob.TraceOf(request, () => strip.Working(units)),
-            Findings = strip.Review(passes => places[passes], units).ToContract(request),
+            Findings = (whyNoLink is null ? findings : findings.Append(whyNoLink)).ToContract(request),
             Cautions = EarthworkCautions.OfRollers.With(request.Readings!),
             Provenance = ProvenanceContract.Of(request),
         };
+        return new Charted<TestStripAnswer, PlotChart>(answer, chart);
     }
 
     /// <summary>The strip; call with a request whose single values are sound.</summary>
