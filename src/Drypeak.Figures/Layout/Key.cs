@@ -26,7 +26,12 @@ internal sealed class Key
     public IEnumerable<TextRun> Texts => _placed.Select(placed => new TextRun(
         placed.Entry.Text,
         placed.At with { X = placed.At.X + (placed.Entry.SampleWidth > 0 ? placed.Entry.SampleWidth + Gap(_type) : 0) },
-        _type.Label, EmbeddedFont.Regular, ColorRole.Ink) { Name = "key-label" });
+        _type.Label,
+        EmbeddedFont.Regular,
+        ColorRole.Ink)
+    {
+        Name = "key-label",
+    });
 
     public static Key Lay(IReadOnlyList<KeyEntry> entries, string axisTitle, FigureSize size, TypeScale type)
     {

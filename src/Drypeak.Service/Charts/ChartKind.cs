@@ -2,7 +2,6 @@ using System.Text.Json.Serialization.Metadata;
 using Drypeak.Figures;
 using Drypeak.Service.Contracts;
 using Drypeak.Service.Hosting;
-using Drypeak.Soil.Laboratory.Review;
 
 namespace Drypeak.Service.Charts;
 

@@ -1,6 +1,5 @@
 using System.Globalization;
 using Drypeak.Figures;
-using Drypeak.Service.Hosting;
 using Drypeak.Soil.Quantities;
 
 namespace Drypeak.Service.Charts;
