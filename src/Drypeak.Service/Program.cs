@@ -5,8 +5,7 @@ using Drypeak.Service.Laboratory;
 using Drypeak.Service.Pages;
 
 var builder = WebApplication.CreateBuilder(args).AddDrypeakHosting();
-builder.Services.AddSingleton<MoistureDensityJob>().AddSingleton<ComparisonJob>().AddSingleton<FieldDensityJob>();
-builder.Services.AddSingleton<TestLocationsJob>().AddSingleton<TestStripJob>();
+builder.Services.AddSingleton<MoistureDensityJob>().AddSingleton<ComparisonJob>().AddSingleton<FieldDensityJob>().AddEarthworkJobs();
 
 var app = builder.Build();
 app.UseDrypeakHosting(PageEndpoints.NotFound);
@@ -19,12 +18,7 @@ FieldDensityJob.Map(app);
 RelativeDensityJob.Map(app);
 OnePointJob.Map(app);
 RapidMethodJob.Map(app);
-SpecimenWaterJob.Map(app);
-LiftWaterJob.Map(app);
-QuantitiesJob.Map(app);
-TestLocationsJob.Map(app);
-RollerOutputJob.Map(app);
-TestStripJob.Map(app);
+app.MapEarthwork();
 app.MapTestMethods();
 app.MapFindingKinds();
 app.MapSpecimenSheet();
