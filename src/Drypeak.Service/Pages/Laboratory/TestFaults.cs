@@ -1,30 +1,23 @@
 using System.Globalization;
 using System.Text.RegularExpressions;
+using Drypeak.Service.Pages.Forms;
 using Drypeak.Service.Pages.Tables;
 
 namespace Drypeak.Service.Pages.Laboratory;
 
-/// <summary>What is wrong with a field of the form.</summary>
-/// <param name="Control">Identifier of the control that it is about: what a link goes to.</param>
-/// <param name="Field">The field that the control belongs to; the grid's cells belong to the table.</param>
-/// <param name="Where">The field's label, or specimen and column.</param>
-/// <param name="Advice">A sentence on what is wrong and what to do.</param>
-/// <param name="Specimen">Position of the specimen that it is about, from 0; −1 where it is about none.</param>
-public sealed partial record FormFault(string Control, Field Field, string Where, string Advice, int Specimen = -1)
+/// <summary>What is wrong with a laboratory form, brought from the request to the field or cell that it came from.</summary>
+internal static partial class TestFaults
 {
-    /// <summary>The whole sentence, for where the field is not in view.</summary>
-    public string Message => $"{Where}: {(Advice.StartsWith("It ", StringComparison.Ordinal) ? "it " + Advice[3..] : Advice)}";
-
     /// <summary>From the top of the form to its end; in the table from specimen to specimen.</summary>
-    public static IComparer<FormFault> AsOnThePage { get; } = Comparer<FormFault>.Create((one, other) => (Position(one), one.Specimen).CompareTo((Position(other), other.Specimen)));
+    public static IComparer<FormFault> AsOnThePage { get; } = Comparer<FormFault>.Create((one, other) => (Position(one), one.Row).CompareTo((Position(other), other.Row)));
 
     /// <summary>The members that a message may name, as the form calls them.</summary>
     private static readonly Dictionary<string, string> FormWords = new(StringComparer.Ordinal)
     {
-        ["mold.mass"] = Field.MoldMass.Label,
-        ["mold.volume"] = Field.MoldVolume.Label,
-        ["mold.diameter"] = Field.MoldDiameter.Label,
-        ["mold.height"] = Field.MoldHeight.Label,
+        ["mold.mass"] = TestFields.MoldMass.Label,
+        ["mold.volume"] = TestFields.MoldVolume.Label,
+        ["mold.diameter"] = TestFields.MoldDiameter.Label,
+        ["mold.height"] = TestFields.MoldHeight.Label,
         ["moldAndWetSoil"] = ColumnKind.MoldAndWetSoil.Heading,
         ["wetMass"] = ColumnKind.WetMass.Heading,
         ["wetDensity"] = ColumnKind.WetDensity.Heading,
@@ -39,11 +32,11 @@ public sealed partial record FormFault(string Control, Field Field, string Where
         member => FormWords.GetValueOrDefault(member.Value, member.Value));
 
     /// <summary>A fault of the request, brought to the field that it came from.</summary>
-    public static FormFault Of(Fault fault, FormReading reading)
+    public static FormFault Of(Fault fault, TestReading reading)
     {
-        var field = Field.Of(fault.Place);
+        var field = TestFields.Of(fault.Place);
         var message = InFormWords(fault.Message);
-        if (field != Field.Table || SpecimenAt().Match(fault.Place) is not { Success: true } at || reading.Sheet is not { } sheet)
+        if (field != TestFields.Table || SpecimenAt().Match(fault.Place) is not { Success: true } at || reading.Sheet is not { } sheet)
         {
             return new FormFault(field.Name, field, field.Label, message);
         }
@@ -55,15 +48,15 @@ public sealed partial record FormFault(string Control, Field Field, string Where
     }
 
     /// <summary>The control that holds a place of the request; for a finding too.</summary>
-    public static string ControlOf(string place, FormReading reading) =>
-        Field.Of(place) is var field && field == Field.Table && SpecimenAt().Match(place) is { Success: true } at && reading.Sheet is { } sheet
+    public static string ControlOf(string place, TestReading reading) =>
+        TestFields.Of(place) is var field && field == TestFields.Table && SpecimenAt().Match(place) is { Success: true } at && reading.Sheet is { } sheet
             ? ControlOf(reading, int.Parse(at.Groups["row"].ValueSpan, CultureInfo.InvariantCulture), sheet.CellOf(place))
             : field.Name;
 
-    private static string ControlOf(FormReading reading, int row, CellAt? cell) =>
-        reading.FromGrid ? TestForm.CellName(new CellAt(reading.GridRowOf(row), cell?.Column ?? 0)) : Field.Table.Name;
+    private static string ControlOf(TestReading reading, int row, CellAt? cell) =>
+        reading.FromGrid ? TestForm.CellName(new CellAt(reading.GridRowOf(row), cell?.Column ?? 0)) : TestFields.Table.Name;
 
-    private static int Position(FormFault fault) => Field.All.TakeWhile(field => field != fault.Field).Count();
+    private static int Position(FormFault fault) => TestFields.All.TakeWhile(field => field != fault.Field).Count();
 
     [GeneratedRegex("^/specimens/(?<row>[0-9]+)")]
     private static partial Regex SpecimenAt();

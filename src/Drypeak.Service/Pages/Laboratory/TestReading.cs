@@ -1,5 +1,6 @@
 using Drypeak.Service.Contracts;
 using Drypeak.Service.Laboratory;
+using Drypeak.Service.Pages.Forms;
 using Drypeak.Service.Pages.Tables;
 using Drypeak.Soil.Quantities;
 
@@ -9,17 +10,17 @@ namespace Drypeak.Service.Pages.Laboratory;
 /// A typed form as a request. A text that is no number is a fault and leaves its member out; the others stand, so that all that is wrong
 /// can be said at once.
 /// </summary>
-public sealed class FormReading
+public sealed class TestReading
 {
     private readonly TestForm _form;
     private readonly DecimalMark? _mark;
     private readonly List<Fault> _unreadable = [];
     private readonly List<Fault> _missing = [];
 
-    private FormReading(TestForm form)
+    private TestReading(TestForm form)
     {
         _form = form;
-        _mark = form[Field.DecimalMark] switch { "point" => DecimalMark.Point, "comma" => DecimalMark.Comma, _ => null };
+        _mark = form[TestFields.DecimalMark] switch { "point" => DecimalMark.Point, "comma" => DecimalMark.Comma, _ => null };
         Request = Read();
     }
 
@@ -44,7 +45,7 @@ public sealed class FormReading
     /// <summary>Whether <see cref="Sheet"/> is the grid.</summary>
     public bool FromGrid => Table is null;
 
-    public static FormReading Of(TestForm form) => new(form);
+    public static TestReading Of(TestForm form) => new(form);
 
     /// <summary>The row of the grid that a specimen stands in: empty rows between are no specimens.</summary>
     public int GridRowOf(int specimen) => _form.FilledRows[specimen];
@@ -53,7 +54,7 @@ public sealed class FormReading
     public string NameOf(string place) =>
         place.StartsWith("/specimens/", StringComparison.Ordinal) && Sheet is { } sheet && int.TryParse(place.Split('/')[2], out var row) && row < sheet.Rows.Count
             ? $"Specimen {sheet.NameOf(row)}"
-            : Field.Of(place).Label;
+            : TestFields.Of(place).Label;
 
     /// <summary>Whether the specimen at a place, such as <c>/specimens/2</c>, brings its water content.</summary>
     public bool HasWaterContent(string place) =>
@@ -64,29 +65,29 @@ public sealed class FormReading
     {
         var units = new UnitsContract
         {
-            Mass = _form[Field.MassUnit],
-            TinMass = _form[Field.TinUnit],
-            Volume = _form[Field.VolumeUnit],
-            Density = _form[Field.DensityUnit],
-            Length = _form[Field.LengthUnit],
+            Mass = _form[TestFields.MassUnit],
+            TinMass = _form[TestFields.TinUnit],
+            Volume = _form[TestFields.VolumeUnit],
+            Density = _form[TestFields.DensityUnit],
+            Length = _form[TestFields.LengthUnit],
         };
         Units = UnitsAreKnown(units) ? units.ToUnitSet() : new();
         ReadSpecimens();
         var request = new MoistureDensityRequest
         {
-            Reference = Text(Field.Reference),
-            Method = Text(Field.Method),
+            Reference = Text(TestFields.Reference),
+            Method = Text(TestFields.Method),
             Units = units,
             Mold = ReadMold(),
-            SpecificGravity = Number(Field.SpecificGravity) is { } gravity
-                ? new SpecificGravityContract { Value = gravity, Determined = _form[Field.Determined] }
+            SpecificGravity = Number(TestFields.SpecificGravity) is { } gravity
+                ? new SpecificGravityContract { Value = gravity, Determined = _form[TestFields.Determined] }
                 : null,
-            WaterTemperature = Number(Field.WaterTemperature),
+            WaterTemperature = Number(TestFields.WaterTemperature),
             Specimens = Sheet?.Specimens ?? [],
             Oversize = ReadOversize(),
-            Curve = new CurveRequest { Model = _form[Field.CurveModel], Adopted = ReadAdopted() },
+            Curve = new CurveRequest { Model = _form[TestFields.CurveModel], Adopted = ReadAdopted() },
             Lines = ReadLines(),
-            Trace = Text(Field.Working) is null ? null : true,
+            Trace = Text(TestFields.Working) is null ? null : true,
         };
         NoteMissingMold(request);
         return request;
@@ -94,17 +95,17 @@ public sealed class FormReading
 
     private void ReadSpecimens()
     {
-        var text = _form[Field.Table];
+        var text = _form[TestFields.Table];
         var rows = _form.FilledRows;
         if (string.IsNullOrWhiteSpace(text) && rows.Count == 0)
         {
-            _missing.Add(new Fault(Field.Table.Place, "no-specimens", "There are no specimens yet. Paste a table, or type into the grid below it."));
+            _missing.Add(new Fault(TestFields.Table.Place, "no-specimens", "There are no specimens yet. Paste a table, or type into the grid below it."));
             return;
         }
 
         if (!string.IsNullOrWhiteSpace(text) && rows.Count > 0)
         {
-            _missing.Add(new Fault(Field.Table.Place, "two-tables", "There are specimens in the pasted table and in the grid. Clear one of the two."));
+            _missing.Add(new Fault(TestFields.Table.Place, "two-tables", "There are specimens in the pasted table and in the grid. Clear one of the two."));
         }
 
         if (!string.IsNullOrWhiteSpace(text))
@@ -127,57 +128,57 @@ public sealed class FormReading
         UnitNames.Mass.ContainsKey(units.Mass!) && UnitNames.Mass.ContainsKey(units.TinMass!) && UnitNames.Volume.ContainsKey(units.Volume!)
         && UnitNames.Density.ContainsKey(units.Density!) && UnitNames.Length.ContainsKey(units.Length!);
 
-    private MoldContract? ReadMold() => IfAnyTyped([Field.MoldMass, Field.MoldVolume, Field.MoldDiameter, Field.MoldHeight], () => new MoldContract
+    private MoldContract? ReadMold() => IfAnyTyped([TestFields.MoldMass, TestFields.MoldVolume, TestFields.MoldDiameter, TestFields.MoldHeight], () => new MoldContract
     {
-        Mass = Number(Field.MoldMass),
-        Volume = Number(Field.MoldVolume),
-        Diameter = Number(Field.MoldDiameter),
-        Height = Number(Field.MoldHeight),
+        Mass = Number(TestFields.MoldMass),
+        Volume = Number(TestFields.MoldVolume),
+        Diameter = Number(TestFields.MoldDiameter),
+        Height = Number(TestFields.MoldHeight),
     });
 
-    private OversizeContract? ReadOversize() => IfAnyTyped([Field.OversizePercent, Field.OversizeGravity, Field.OversizeWater, Field.OversizeSieve], () => new OversizeContract
+    private OversizeContract? ReadOversize() => IfAnyTyped([TestFields.OversizePercent, TestFields.OversizeGravity, TestFields.OversizeWater, TestFields.OversizeSieve], () => new OversizeContract
     {
-        Percent = Number(Field.OversizePercent),
-        SpecificGravity = Number(Field.OversizeGravity),
-        WaterContent = Number(Field.OversizeWater),
-        Sieve = Number(Field.OversizeSieve),
+        Percent = Number(TestFields.OversizePercent),
+        SpecificGravity = Number(TestFields.OversizeGravity),
+        WaterContent = Number(TestFields.OversizeWater),
+        Sieve = Number(TestFields.OversizeSieve),
     });
 
-    private AdoptedRequest? ReadAdopted() => IfAnyTyped([Field.AdoptedWater, Field.AdoptedDensity, Field.AdoptedReason], () => new AdoptedRequest
+    private AdoptedRequest? ReadAdopted() => IfAnyTyped([TestFields.AdoptedWater, TestFields.AdoptedDensity, TestFields.AdoptedReason], () => new AdoptedRequest
     {
-        WaterContent = Number(Field.AdoptedWater),
-        MaximumDryDensity = Number(Field.AdoptedDensity),
-        Reason = Text(Field.AdoptedReason),
+        WaterContent = Number(TestFields.AdoptedWater),
+        MaximumDryDensity = Number(TestFields.AdoptedDensity),
+        Reason = Text(TestFields.AdoptedReason),
     });
 
-    private LinesRequest? ReadLines() => IfAnyTyped([Field.SaturationLines, Field.AirVoidsLines], () => new LinesRequest
+    private LinesRequest? ReadLines() => IfAnyTyped([TestFields.SaturationLines, TestFields.AirVoidsLines], () => new LinesRequest
     {
-        Saturation = Numbers(Field.SaturationLines),
-        AirVoids = Numbers(Field.AirVoidsLines),
+        Saturation = Numbers(TestFields.SaturationLines),
+        AirVoids = Numbers(TestFields.AirVoidsLines),
     });
 
-    private T? IfAnyTyped<T>(Field[] fields, Func<T> read)
+    private T? IfAnyTyped<T>(FormField[] fields, Func<T> read)
         where T : class => fields.Any(field => Text(field) is not null) ? read() : null;
 
     /// <summary>Specimens weighed in a mold need it: said once at the mold's fields, not at every specimen.</summary>
     private void NoteMissingMold(MoistureDensityRequest request)
     {
         var specimens = request.Specimens!.Where(specimen => specimen is { WetDensity: null, DryDensity: null }).ToList();
-        if (Text(Field.MoldMass) is null && specimens.Exists(specimen => specimen is { MoldAndWetSoil: not null, Mold.Mass: null } or { MoldAndWetSoil: not null, Mold: null }))
+        if (Text(TestFields.MoldMass) is null && specimens.Exists(specimen => specimen is { MoldAndWetSoil: not null, Mold.Mass: null } or { MoldAndWetSoil: not null, Mold: null }))
         {
-            _missing.Add(new Fault(Field.MoldMass.Place, "missing-mold", "It is needed: the specimens were weighed in the mold. Give the mass of the empty mold."));
+            _missing.Add(new Fault(TestFields.MoldMass.Place, "missing-mold", "It is needed: the specimens were weighed in the mold. Give the mass of the empty mold."));
         }
 
-        if (Text(Field.MoldVolume) is null && Text(Field.MoldDiameter) is null
+        if (Text(TestFields.MoldVolume) is null && Text(TestFields.MoldDiameter) is null
             && specimens.Exists(specimen => (specimen.MoldAndWetSoil ?? specimen.WetMass) is not null && specimen.Mold?.Volume is null))
         {
-            _missing.Add(new Fault(Field.MoldVolume.Place, "missing-mold", "It is needed to make a density of the masses. Give it, or the diameter and height under “More”."));
+            _missing.Add(new Fault(TestFields.MoldVolume.Place, "missing-mold", "It is needed to make a density of the masses. Give it, or the diameter and height under “More”."));
         }
     }
 
-    private string? Text(Field field) => _form[field].Trim() is { Length: > 0 } text ? text : null;
+    private string? Text(FormField field) => _form[field].Trim() is { Length: > 0 } text ? text : null;
 
-    private double? Number(Field field)
+    private double? Number(FormField field)
     {
         if (Text(field) is not { } text)
         {
@@ -198,7 +199,7 @@ public sealed class FormReading
         NumberText.HasDecimals(text, DecimalMark.Comma) ? DecimalMark.Comma : NumberText.HasDecimals(text, DecimalMark.Point) ? DecimalMark.Point : null;
 
     /// <summary>Several numbers with spaces or semicolons between them; a comma parts them only before a space.</summary>
-    private List<double>? Numbers(Field field)
+    private List<double>? Numbers(FormField field)
     {
         if (Text(field) is not { } text)
         {
