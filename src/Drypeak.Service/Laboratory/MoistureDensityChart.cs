@@ -12,6 +12,15 @@ internal static class MoistureDensityChart
     /// <summary>Digits of the drawn curve and of intervals: finer than any picture, and short in an address.</summary>
     private const int DrawnDigits = 6;
 
+    /// <summary>Digits of a band: its edge is read off less finely than the curve.</summary>
+    private const int BandDigits = 5;
+
+    /// <summary>Every so many points of another model's curve are carried.</summary>
+    private const int ModelStep = 4;
+
+    /// <summary>Above this many specimens other models' curves would make the address too long.</summary>
+    private const int MostWithModels = 20;
+
     /// <summary>Above this many specimens bars hide one another.</summary>
     private const int MostWithErrorBars = 40;
 
@@ -34,6 +43,15 @@ internal static class MoistureDensityChart
             })],
             Curve = [.. (result.Curve?.Chosen.Curve ?? []).Select(point => new ChartPoint(
                 Drawn(point.WaterContent * 100), Drawn(new Density(point.DryDensity).In(unit))))],
+            Band = result.Curve is { Chosen: { Curve.Count: > 0 } chosen }
+                && CompactionCurve.BandOf(MoistureDensity.KeptPoints(result.Specimens, test.SpecificGravity?.Value, test.WaterDensity), chosen.Model) is { } band
+                    ? [.. band.Select(point => new ChartBandPoint(
+                        Drawn(point.WaterContent * 100, BandDigits), Drawn(new Density(point.Lower).In(unit), BandDigits), Drawn(new Density(point.Upper).In(unit), BandDigits)))]
+                    : null,
+            Models = result.Curve is { } curves && result.Specimens.Count <= MostWithModels
+                ? [.. curves.Alternatives.Where(model => model.Curve.Count > 0).Select(model => new ChartModel(model.Model.Name(), [.. Thinned(model.Curve).Select(point => new ChartPoint(
+                    Drawn(point.WaterContent * 100, BandDigits), Drawn(new Density(point.DryDensity).In(unit), BandDigits)))]))]
+                : null,
             Optimum = result.Optimum is { } optimum ? Peak(test, optimum) : null,
             Adopted = test.Adopted is { } adopted ? Peak(test, adopted.WaterContent, adopted.MaximumDryDensity) : null,
             Corrected = result.Corrected is { } corrected ? Peak(test, corrected.WaterContent, corrected.DryDensity) : null,
@@ -64,6 +82,9 @@ internal static class MoistureDensityChart
         null,
         null);
 
-    private static double Drawn(double value) =>
-        value == 0 ? 0 : Math.Round(value, Math.Clamp(DrawnDigits - 1 - (int)Math.Floor(Math.Log10(Math.Abs(value))), 0, 15));
+    /// <summary>Every few points, and the last one.</summary>
+    private static IEnumerable<CompactionPoint> Thinned(IReadOnlyList<CompactionPoint> curve) => curve.Where((_, i) => i % ModelStep == 0 || i == curve.Count - 1);
+
+    private static double Drawn(double value, int digits = DrawnDigits) =>
+        value == 0 ? 0 : Math.Round(value, Math.Clamp(digits - 1 - (int)Math.Floor(Math.Log10(Math.Abs(value))), 0, 15));
 }
