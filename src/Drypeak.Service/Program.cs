@@ -1,3 +1,4 @@
+using Drypeak.Service.Earthwork;
 using Drypeak.Service.Field;
 using Drypeak.Service.Hosting;
 using Drypeak.Service.Laboratory;
@@ -5,7 +6,7 @@ using Drypeak.Service.Pages;
 
 var builder = WebApplication.CreateBuilder(args).AddDrypeakHosting();
 builder.Services.AddSingleton<MoistureDensityJob>().AddSingleton<ComparisonJob>().AddSingleton<FieldDensityJob>()
-    .AddSingleton<RelativeDensityJob>().AddSingleton<OnePointJob>().AddSingleton<RapidMethodJob>();
+    .AddSingleton<RelativeDensityJob>().AddSingleton<OnePointJob>().AddSingleton<RapidMethodJob>().AddEarthworkJobs();
 
 var app = builder.Build();
 app.UseDrypeakHosting(PageEndpoints.NotFound);
@@ -18,6 +19,7 @@ FieldDensityJob.Map(app);
 RelativeDensityJob.Map(app);
 OnePointJob.Map(app);
 RapidMethodJob.Map(app);
+app.MapEarthwork();
 app.MapTestMethods();
 app.MapFindingKinds();
 app.MapSpecimenSheet();

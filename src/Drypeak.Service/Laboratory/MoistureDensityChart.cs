@@ -10,6 +10,15 @@ namespace Drypeak.Service.Laboratory;
 /// <summary>What the chart of a laboratory test shows.</summary>
 internal static class MoistureDensityChart
 {
+    /// <summary>Digits of a band: its edge is read off less finely than the curve.</summary>
+    private const int BandDigits = 5;
+
+    /// <summary>Every so many points of another model's curve are carried.</summary>
+    private const int ModelStep = 4;
+
+    /// <summary>Above this many specimens other models' curves would make the address too long.</summary>
+    private const int MostWithModels = 20;
+
     /// <summary>Above this many specimens bars hide one another.</summary>
     private const int MostWithErrorBars = 40;
 
@@ -32,6 +41,15 @@ internal static class MoistureDensityChart
             })],
             Curve = [.. (result.Curve?.Chosen.Curve ?? []).Select(point => new ChartPoint(
                 DrawnNumber.Of(point.WaterContent * 100), DrawnNumber.Of(new Density(point.DryDensity).In(unit))))],
+            Band = result.Curve is { Chosen: { Curve.Count: > 0 } chosen }
+                && CompactionCurve.BandOf(MoistureDensity.KeptPoints(result.Specimens, test.SpecificGravity?.Value, test.WaterDensity), chosen.Model) is { } band
+                    ? [.. band.Select(point => new ChartBandPoint(
+                        DrawnNumber.Of(point.WaterContent * 100, BandDigits), DrawnNumber.Of(new Density(point.Lower).In(unit), BandDigits), DrawnNumber.Of(new Density(point.Upper).In(unit), BandDigits)))]
+                    : null,
+            Models = result.Curve is { } curves && result.Specimens.Count <= MostWithModels
+                ? [.. curves.Alternatives.Where(model => model.Curve.Count > 0).Select(model => new ChartModel(model.Model.Name(), [.. Thinned(model.Curve).Select(point => new ChartPoint(
+                    DrawnNumber.Of(point.WaterContent * 100, BandDigits), DrawnNumber.Of(new Density(point.DryDensity).In(unit), BandDigits)))]))]
+                : null,
             Optimum = result.Optimum is { } optimum ? Peak(test, optimum) : null,
             Adopted = test.Adopted is { } adopted ? Peak(test, adopted.WaterContent, adopted.MaximumDryDensity) : null,
             Corrected = result.Corrected is { } corrected ? Peak(test, corrected.WaterContent, corrected.DryDensity) : null,
@@ -61,4 +79,7 @@ internal static class MoistureDensityChart
         Reporting.DryDensity(test.Method, density, test.Units.Density),
         null,
         null);
+
+    /// <summary>Every few points, and the last one.</summary>
+    private static IEnumerable<CompactionPoint> Thinned(IReadOnlyList<CompactionPoint> curve) => curve.Where((_, i) => i % ModelStep == 0 || i == curve.Count - 1);
 }
