@@ -107,6 +107,12 @@ internal sealed class SkiaCanvas : ICanvas, IDisposable
             _canvas.DrawPath(outline, _paint);
         }
 
+        if (_holdsFonts && text.Link is { } link)
+        {
+            using var address = SKData.CreateCopy(System.Text.Encoding.ASCII.GetBytes(link + "\0"));
+            _canvas.DrawUrlAnnotation(new SKRect((float)offset, (float)-text.Size, (float)(offset + text.Width), (float)(0.3 * text.Size)), address);
+        }
+
         UseFill(text.Color);
         _canvas.DrawText(text.Text, (float)offset, 0, SKTextAlign.Left, font, _paint);
         _canvas.Restore();

@@ -2,6 +2,7 @@ using Drypeak.Service.Field;
 using Drypeak.Service.Hosting;
 using Drypeak.Service.Laboratory;
 using Drypeak.Service.Pages;
+using Drypeak.Service.Reports;
 
 var builder = WebApplication.CreateBuilder(args).AddDrypeakHosting();
 builder.Services.AddSingleton<MoistureDensityJob>().AddSingleton<ComparisonJob>().AddSingleton<FieldDensityJob>();
@@ -20,6 +21,7 @@ RapidMethodJob.Map(app);
 app.MapTestMethods();
 app.MapFindingKinds();
 app.MapSpecimenSheet();
+MoistureDensityReport.Map(app);
 app.MapPages();
 
 if (args is ["openapi", var path])

@@ -61,5 +61,54 @@ internal static class PlainText
         return "";
     }
 
+    /// <summary>The text in lines no wider than <paramref name="width"/> px: broken at spaces, and within a word only where it is wider than a line. Nothing is left out but the spaces at the breaks.</summary>
+    public static IReadOnlyList<string> Wrap(string text, FontFace face, double size, double width)
+    {
+        var lines = new List<string>();
+        var line = "";
+        foreach (var word in text.Split(' ', StringSplitOptions.RemoveEmptyEntries))
+        {
+            var longer = line.Length == 0 ? word : $"{line} {word}";
+            if (face.Measure(longer, size) <= width)
+            {
+                line = longer;
+                continue;
+            }
+
+            if (line.Length > 0)
+            {
+                lines.Add(line);
+            }
+
+            line = word;
+            while (face.Measure(line, size) > width && Fitting(line, face, size, width) is var fitting && fitting < line.Length)
+            {
+                lines.Add(line[..fitting]);
+                line = line[fitting..];
+            }
+        }
+
+        if (line.Length > 0)
+        {
+            lines.Add(line);
+        }
+
+        return lines;
+    }
+
+    /// <summary>How much of a word fits into a line: at least one letter with its accents.</summary>
+    private static int Fitting(string word, FontFace face, double size, double width)
+    {
+        var starts = StringInfo.ParseCombiningCharacters(word);
+        var (low, high) = (1, starts.Length);
+        while (low < high)
+        {
+            var middle = (low + high + 1) / 2;
+            (low, high) = face.Measure(word[..(middle == starts.Length ? word.Length : starts[middle])], size) <= width ? (middle, high) : (low, middle - 1);
+        }
+
+        return low == starts.Length ? word.Length : starts[low];
+    }
+
     private static bool IsDirection(int value) => value is 0x200E or 0x200F or (>= 0x202A and <= 0x202E) or (>= 0x2066 and <= 0x2069);
 }
