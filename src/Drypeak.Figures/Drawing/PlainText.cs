@@ -49,16 +49,15 @@ internal static class PlainText
         }
 
         var starts = StringInfo.ParseCombiningCharacters(text);
-        for (var kept = starts.Length - 1; kept > 0; kept--)
+        string Shortened(int kept) => string.Concat(text.AsSpan(0, starts[kept]).TrimEnd(), Ellipsis);
+        var (fits, fails) = (0, starts.Length);
+        while (fails - fits > 1)
         {
-            var shortened = string.Concat(text.AsSpan(0, starts[kept]).TrimEnd(), Ellipsis);
-            if (face.Measure(shortened, size) <= width)
-            {
-                return shortened;
-            }
+            var middle = (fits + fails) / 2;
+            (fits, fails) = face.Measure(Shortened(middle), size) <= width ? (middle, fails) : (fits, middle);
         }
 
-        return "";
+        return fits > 0 ? Shortened(fits) : "";
     }
 
     /// <summary>The text in lines no wider than <paramref name="width"/> px: broken at spaces, and within a word only where it is wider than a line. Nothing is left out but the spaces at the breaks.</summary>
