@@ -1,3 +1,4 @@
+using Drypeak.Service.Earthwork;
 using Drypeak.Service.Field;
 using Drypeak.Service.Hosting;
 using Drypeak.Service.Laboratory;
@@ -5,7 +6,8 @@ using Drypeak.Service.Pages;
 using Drypeak.Service.Reports;
 
 var builder = WebApplication.CreateBuilder(args).AddDrypeakHosting();
-builder.Services.AddSingleton<MoistureDensityJob>().AddSingleton<ComparisonJob>().AddSingleton<FieldDensityJob>();
+builder.Services.AddSingleton<MoistureDensityJob>().AddSingleton<ComparisonJob>().AddSingleton<FieldDensityJob>()
+    .AddSingleton<RelativeDensityJob>().AddSingleton<OnePointJob>().AddSingleton<RapidMethodJob>().AddEarthworkJobs();
 
 var app = builder.Build();
 app.UseDrypeakHosting(PageEndpoints.NotFound);
@@ -18,6 +20,7 @@ FieldDensityJob.Map(app);
 RelativeDensityJob.Map(app);
 OnePointJob.Map(app);
 RapidMethodJob.Map(app);
+app.MapEarthwork();
 app.MapTestMethods();
 app.MapFindingKinds();
 app.MapSpecimenSheet();
