@@ -102,7 +102,7 @@ internal static class JsonJob
         }
 
         IResult Picture(TChart? chart, ChartFormat format, ChartOptions options) =>
-            (chart is null ? "The answer leaves nothing to draw." : kind.Refusal(chart, options.Figure.Size)) is { } refusal
+            (chart is null ? "The answer leaves nothing to draw." : kind.Refusal(chart, options.Figure)) is { } refusal
                 ? Problems.InvalidValues([new Fault("", "not-drawable", refusal + " Check the values and their units; with Accept: application/json they are answered.")])
                 : Results.Bytes(kind.Picture(chart!, format, options), format.MediaType);
     }

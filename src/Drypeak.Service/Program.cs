@@ -5,7 +5,8 @@ using Drypeak.Service.Laboratory;
 using Drypeak.Service.Pages;
 
 var builder = WebApplication.CreateBuilder(args).AddDrypeakHosting();
-builder.Services.AddSingleton<MoistureDensityJob>().AddSingleton<ComparisonJob>().AddSingleton<FieldDensityJob>().AddEarthworkJobs();
+builder.Services.AddSingleton<MoistureDensityJob>().AddSingleton<ComparisonJob>().AddSingleton<FieldDensityJob>()
+    .AddSingleton<RelativeDensityJob>().AddSingleton<OnePointJob>().AddSingleton<RapidMethodJob>().AddEarthworkJobs();
 
 var app = builder.Build();
 app.UseDrypeakHosting(PageEndpoints.NotFound);
