@@ -11,7 +11,8 @@ public sealed class FormKitTests(PageService service) : IClassFixture<PageServic
     /// <summary>Every page of the kit.</summary>
     public static TheoryData<string> Addresses =>
     [
-        "/field", "/earthwork/specimen-water", "/earthwork/lift-water", "/earthwork/quantities", "/earthwork/test-locations", "/earthwork/roller-output", "/earthwork/test-strip",
+        "/field", "/relative-density", "/one-point", "/rapid-method",
+        "/earthwork/specimen-water", "/earthwork/lift-water", "/earthwork/quantities", "/earthwork/test-locations", "/earthwork/roller-output", "/earthwork/test-strip",
     ];
 
     [Theory]
