@@ -1,11 +1,13 @@
 using Drypeak.Service.Charts;
+using Drypeak.Service.Exchange;
+using Drypeak.Service.Exchange.Batch;
 using Drypeak.Service.Field;
 using Drypeak.Service.Hosting;
 using Drypeak.Service.Laboratory;
 using Drypeak.Service.Pages;
 
 var builder = WebApplication.CreateBuilder(args).AddDrypeakHosting();
-builder.Services.AddSingleton<ChartRules>().AddSingleton<MoistureDensityJob>().AddSingleton<ComparisonJob>().AddSingleton<FieldDensityJob>();
+builder.Services.AddSingleton<ChartRules>().AddSingleton<MoistureDensityJob>().AddSingleton<ComparisonJob>().AddSingleton<FieldDensityJob>().AddSingleton<ExchangeJobs>();
 
 var app = builder.Build();
 app.UseDrypeakHosting(PageEndpoints.NotFound);
@@ -18,6 +20,7 @@ FieldDensityJob.Map(app);
 RelativeDensityJob.Map(app);
 OnePointJob.Map(app);
 RapidMethodJob.Map(app);
+app.MapBatches();
 app.MapTestMethods();
 app.MapFindingKinds();
 app.MapSpecimenSheet();

@@ -2,6 +2,7 @@ using System.Text.Json;
 using System.Text.Json.Serialization;
 using System.Text.Json.Serialization.Metadata;
 using Drypeak.Figures;
+using Drypeak.Service.Exchange.Batch;
 using Drypeak.Service.Field;
 using Drypeak.Service.Hosting;
 using Drypeak.Service.Laboratory;
@@ -48,5 +49,6 @@ internal static class ServiceJson
 [JsonSerializable(typeof(OnePointAnswer))]
 [JsonSerializable(typeof(RapidMethodRequest))]
 [JsonSerializable(typeof(RapidMethodAnswer))]
+[JsonSerializable(typeof(BatchSummaryLine))]
 [JsonSerializable(typeof(CompactionChart))]
 internal sealed partial class ContractsJson : JsonSerializerContext;
