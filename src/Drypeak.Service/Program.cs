@@ -1,6 +1,7 @@
 using Drypeak.Service.Charts;
 using Drypeak.Service.Exchange;
 using Drypeak.Service.Exchange.Batch;
+using Drypeak.Service.Exchange.Csv;
 using Drypeak.Service.Field;
 using Drypeak.Service.Hosting;
 using Drypeak.Service.Laboratory;
@@ -21,6 +22,7 @@ RelativeDensityJob.Map(app);
 OnePointJob.Map(app);
 RapidMethodJob.Map(app);
 app.MapBatches();
+app.MapCsv();
 app.MapTestMethods();
 app.MapFindingKinds();
 app.MapSpecimenSheet();

@@ -3,6 +3,7 @@ using System.Text.Json.Serialization;
 using System.Text.Json.Serialization.Metadata;
 using Drypeak.Figures;
 using Drypeak.Service.Exchange.Batch;
+using Drypeak.Service.Exchange.Csv;
 using Drypeak.Service.Field;
 using Drypeak.Service.Hosting;
 using Drypeak.Service.Laboratory;
@@ -50,5 +51,7 @@ internal static class ServiceJson
 [JsonSerializable(typeof(RapidMethodRequest))]
 [JsonSerializable(typeof(RapidMethodAnswer))]
 [JsonSerializable(typeof(BatchSummaryLine))]
+[JsonSerializable(typeof(LaboratoryFileAnswer))]
+[JsonSerializable(typeof(FieldFileAnswer))]
 [JsonSerializable(typeof(CompactionChart))]
 internal sealed partial class ContractsJson : JsonSerializerContext;

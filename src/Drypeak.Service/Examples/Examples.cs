@@ -35,6 +35,9 @@ internal static class Examples
     /// <summary>The rapid method on a lift, as JSON.</summary>
     public static string RapidMethodRequest { get; } = Text("rapid-method.json");
 
+    /// <summary>Two laboratory tests, a row a specimen, as CSV.</summary>
+    public static string LaboratoryCsv { get; } = Text("moisture-density.csv");
+
     private static string Text(string name)
     {
         using var stream = typeof(Examples).Assembly.GetManifestResourceStream($"Drypeak.Service.Examples.{name}")

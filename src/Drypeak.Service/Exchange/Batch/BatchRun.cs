@@ -53,7 +53,7 @@ internal sealed class BatchRun(LineJob job, Limits limits, Action<Exception, str
         }
 
         var whyBrokenOff = await read;
-        var summary = new BatchSummary(whyBrokenOff is null, _answered, _refused, _withErrors, _withWarnings);
+        var summary = new BatchSummary(whyBrokenOff is null, lines.Lines, lines.Blank, _answered, _refused, _withErrors, _withWarnings);
         if (whyBrokenOff is not null)
         {
             WriteLine(target, LineAnswer.Refused(whyBrokenOff, lines.Lines + 1).Json);
