@@ -1,5 +1,6 @@
 using Drypeak.Service.Charts;
 using Drypeak.Service.Exchange;
+using Drypeak.Service.Exchange.Ags;
 using Drypeak.Service.Exchange.Batch;
 using Drypeak.Service.Exchange.Csv;
 using Drypeak.Service.Field;
@@ -8,7 +9,7 @@ using Drypeak.Service.Laboratory;
 using Drypeak.Service.Pages;
 
 var builder = WebApplication.CreateBuilder(args).AddDrypeakHosting();
-builder.Services.AddSingleton<ChartRules>().AddSingleton<MoistureDensityJob>().AddSingleton<ComparisonJob>().AddSingleton<FieldDensityJob>().AddSingleton<ExchangeJobs>();
+builder.Services.AddSingleton<ChartRules>().AddSingleton<MoistureDensityJob>().AddSingleton<ComparisonJob>().AddSingleton<FieldDensityJob>().AddSingleton<ExchangeJobs>().AddSingleton<AgsJob>();
 
 var app = builder.Build();
 app.UseDrypeakHosting(PageEndpoints.NotFound);
@@ -23,6 +24,7 @@ OnePointJob.Map(app);
 RapidMethodJob.Map(app);
 app.MapBatches();
 app.MapCsv();
+app.MapAgs();
 app.MapTestMethods();
 app.MapFindingKinds();
 app.MapSpecimenSheet();

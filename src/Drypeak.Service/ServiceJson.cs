@@ -2,6 +2,7 @@ using System.Text.Json;
 using System.Text.Json.Serialization;
 using System.Text.Json.Serialization.Metadata;
 using Drypeak.Figures;
+using Drypeak.Service.Exchange.Ags;
 using Drypeak.Service.Exchange.Batch;
 using Drypeak.Service.Exchange.Csv;
 using Drypeak.Service.Field;
@@ -50,6 +51,7 @@ internal static class ServiceJson
 [JsonSerializable(typeof(OnePointAnswer))]
 [JsonSerializable(typeof(RapidMethodRequest))]
 [JsonSerializable(typeof(RapidMethodAnswer))]
+[JsonSerializable(typeof(AgsAnswer))]
 [JsonSerializable(typeof(BatchSummaryLine))]
 [JsonSerializable(typeof(LaboratoryFileAnswer))]
 [JsonSerializable(typeof(FieldFileAnswer))]

@@ -38,6 +38,9 @@ internal static class Examples
     /// <summary>Two laboratory tests, a row a specimen, as CSV.</summary>
     public static string LaboratoryCsv { get; } = Text("moisture-density.csv");
 
+    /// <summary>A compaction test and two field densities, as AGS4.</summary>
+    public static string Ags4 { get; } = Text("ternmarsh.ags");
+
     private static string Text(string name)
     {
         using var stream = typeof(Examples).Assembly.GetManifestResourceStream($"Drypeak.Service.Examples.{name}")
