@@ -7,7 +7,7 @@ namespace Drypeak.Figures;
 /// Writes a figure as PNG: sRGB, opaque, with its physical resolution, at 8 bits a pixel by a table of colors. Equal figures give equal bytes.
 /// </summary>
 /// <remarks>
-/// A figure has six colors and, at its edges, mixtures of them with paper. By a table it takes a third of the bytes that it takes in true
+/// A figure has seven colors and, at its edges, mixtures of them with paper. By a table it takes a third of the bytes that it takes in true
 /// color, in half the time (960×640: 28 kB in 2 ms against 81 kB in 5 ms), but the drawing library writes true color only: hence
 /// <see cref="IndexedPng"/>.
 /// </remarks>

@@ -1,4 +1,3 @@
-using Drypeak.Service.Charts;
 using Drypeak.Service.Exchange;
 using Drypeak.Service.Exchange.Ags;
 using Drypeak.Service.Exchange.Batch;
@@ -8,8 +7,13 @@ using Drypeak.Service.Hosting;
 using Drypeak.Service.Laboratory;
 using Drypeak.Service.Pages;
 
+if (args is [ComputeCommand.Name, .. var arguments])
+{
+    return await ComputeCommand.RunAsync(arguments);
+}
+
 var builder = WebApplication.CreateBuilder(args).AddDrypeakHosting();
-builder.Services.AddSingleton<ChartRules>().AddSingleton<MoistureDensityJob>().AddSingleton<ComparisonJob>().AddSingleton<FieldDensityJob>().AddSingleton<ExchangeJobs>().AddSingleton<AgsJob>();
+builder.Services.AddSingleton<MoistureDensityJob>().AddSingleton<ComparisonJob>().AddSingleton<FieldDensityJob>().AddSingleton<ExchangeJobs>().AddSingleton<AgsJob>();
 
 var app = builder.Build();
 app.UseDrypeakHosting(PageEndpoints.NotFound);
@@ -28,13 +32,13 @@ app.MapAgs();
 app.MapTestMethods();
 app.MapFindingKinds();
 app.MapSpecimenSheet();
-app.MapCharts();
 app.MapPages();
 
 if (args is ["openapi", var path])
 {
     await app.ExportOpenApiAsync(path);
-    return;
+    return 0;
 }
 
 await app.RunAsync();
+return 0;

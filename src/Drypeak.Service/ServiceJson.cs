@@ -56,4 +56,5 @@ internal static class ServiceJson
 [JsonSerializable(typeof(LaboratoryFileAnswer))]
 [JsonSerializable(typeof(FieldFileAnswer))]
 [JsonSerializable(typeof(CompactionChart))]
+[JsonSerializable(typeof(PlotChart))]
 internal sealed partial class ContractsJson : JsonSerializerContext;
