@@ -1,7 +1,5 @@
+using Drypeak.Service.Earthwork;
 using Drypeak.Service.Exchange;
-using Drypeak.Service.Exchange.Ags;
-using Drypeak.Service.Exchange.Batch;
-using Drypeak.Service.Exchange.Csv;
 using Drypeak.Service.Field;
 using Drypeak.Service.Hosting;
 using Drypeak.Service.Laboratory;
@@ -13,7 +11,8 @@ if (args is [ComputeCommand.Name, .. var arguments])
 }
 
 var builder = WebApplication.CreateBuilder(args).AddDrypeakHosting();
-builder.Services.AddSingleton<MoistureDensityJob>().AddSingleton<ComparisonJob>().AddSingleton<FieldDensityJob>().AddSingleton<ExchangeJobs>().AddSingleton<AgsJob>();
+builder.Services.AddSingleton<MoistureDensityJob>().AddSingleton<ComparisonJob>().AddSingleton<FieldDensityJob>()
+    .AddSingleton<RelativeDensityJob>().AddSingleton<OnePointJob>().AddSingleton<RapidMethodJob>().AddEarthworkJobs().AddExchangeJobs();
 
 var app = builder.Build();
 app.UseDrypeakHosting(PageEndpoints.NotFound);
@@ -26,9 +25,8 @@ FieldDensityJob.Map(app);
 RelativeDensityJob.Map(app);
 OnePointJob.Map(app);
 RapidMethodJob.Map(app);
-app.MapBatches();
-app.MapCsv();
-app.MapAgs();
+app.MapEarthwork();
+app.MapExchange();
 app.MapTestMethods();
 app.MapFindingKinds();
 app.MapSpecimenSheet();

@@ -48,7 +48,7 @@ internal static partial class CsvHeader
             return (exact, null, written);
         }
 
-        if (columns.FirstOrDefault(column => column.Words.Contains(words) || Hump().Replace(column.Name, "$1 $2").ToLowerInvariant() == words) is { } known)
+        if (columns.FirstOrDefault(column => column.Words.Contains(words) || string.Equals(Hump().Replace(column.Name, "$1 $2"), words, StringComparison.OrdinalIgnoreCase)) is { } known)
         {
             return (known, null, written);
         }

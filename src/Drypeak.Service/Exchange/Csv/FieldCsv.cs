@@ -1,4 +1,3 @@
-using Drypeak.Service.Contracts;
 using Drypeak.Service.Exchange.Files;
 using Drypeak.Service.Field;
 using Drypeak.Service.Pages.Tables;
