@@ -4,6 +4,7 @@ using System.Net.Http.Headers;
 using System.Net.Sockets;
 using System.Text;
 using System.Text.Json.Nodes;
+using Drypeak.Service;
 
 namespace Drypeak.Benchmarks;
 

@@ -1,5 +1,6 @@
 using Drypeak.Service.Field;
 using Drypeak.Service.Pages.Catalogues;
+using Drypeak.Service.Pages.Exchange;
 using Drypeak.Service.Pages.FieldDensity;
 using Drypeak.Service.Pages.Forms;
 using Drypeak.Service.Pages.Laboratory;
@@ -17,6 +18,7 @@ internal static class PageEndpoints
         PageFiles.Map(app);
         LaboratoryPageEndpoints.Map(app);
         app.MapForm(FieldDensityPage.Of(app.ServiceProvider.GetRequiredService<FieldDensityJob>()));
+        ExchangePageEndpoints.Map(app);
         SpecimenSheetPageEndpoint.Map(app);
         MapStill<TestMethodsPage>(app, "/test-methods");
         MapStill<FindingsPage>(app, "/findings");

@@ -7,6 +7,7 @@ internal static class SiteMap
     [
         ("Laboratory", [("/", "Compaction test"), ("/specimen-sheet", "Blank sheet")]),
         ("Field", [("/field", "Field density test")]),
+        ("Files", [("/exchange", "CSV and AGS4")]),
         ("Reference", [("/test-methods", "Test methods"), ("/findings", "Findings"), ("/reference", "For programs")]),
     ];
 }
