@@ -90,7 +90,8 @@ internal static class BatchMeasurement
 
     private static async Task SendAsync(NetworkStream stream, byte[][] lines, int count)
     {
-        await using var buffered = new BufferedStream(stream, 64 << 10);
+        // Not disposed: it would close the connection whose answers are still awaited.
+        var buffered = new BufferedStream(stream, 64 << 10);
         for (var i = 0; i < count; i++)
         {
             var line = lines[i % lines.Length];
