@@ -3,6 +3,9 @@ using System.Text.Json.Serialization;
 using System.Text.Json.Serialization.Metadata;
 using Drypeak.Figures;
 using Drypeak.Service.Earthwork;
+using Drypeak.Service.Exchange.Ags;
+using Drypeak.Service.Exchange.Batch;
+using Drypeak.Service.Exchange.Csv;
 using Drypeak.Service.Field;
 using Drypeak.Service.Hosting;
 using Drypeak.Service.Laboratory;
@@ -49,6 +52,10 @@ internal static class ServiceJson
 [JsonSerializable(typeof(OnePointAnswer))]
 [JsonSerializable(typeof(RapidMethodRequest))]
 [JsonSerializable(typeof(RapidMethodAnswer))]
+[JsonSerializable(typeof(AgsAnswer))]
+[JsonSerializable(typeof(BatchSummaryLine))]
+[JsonSerializable(typeof(LaboratoryFileAnswer))]
+[JsonSerializable(typeof(FieldFileAnswer))]
 [JsonSerializable(typeof(SpecimenWaterRequest))]
 [JsonSerializable(typeof(SpecimenWaterAnswer))]
 [JsonSerializable(typeof(LiftWaterRequest))]

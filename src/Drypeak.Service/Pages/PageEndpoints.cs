@@ -2,6 +2,7 @@ using Drypeak.Service.Field;
 using Drypeak.Service.Hosting;
 using Drypeak.Service.Pages.Catalogues;
 using Drypeak.Service.Pages.Earthwork;
+using Drypeak.Service.Pages.Exchange;
 using Drypeak.Service.Pages.FieldDensity;
 using Drypeak.Service.Pages.Forms;
 using Drypeak.Service.Pages.Laboratory;
@@ -25,6 +26,7 @@ internal static class PageEndpoints
         app.MapForm(OnePointPage.Of(app.ServiceProvider.GetRequiredService<OnePointJob>(), limits));
         app.MapForm(RapidMethodPage.Of(app.ServiceProvider.GetRequiredService<RapidMethodJob>()));
         EarthworkPages.Map(app);
+        ExchangePageEndpoints.Map(app);
         SpecimenSheetPageEndpoint.Map(app);
         MapStill<TestMethodsPage>(app, "/test-methods");
         MapStill<FindingsPage>(app, "/findings");

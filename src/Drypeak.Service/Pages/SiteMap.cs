@@ -12,6 +12,7 @@ internal static class SiteMap
             ("/earthwork/specimen-water", "Water for specimens"), ("/earthwork/lift-water", "Water for a lift"), ("/earthwork/quantities", "Quantities and haulage"),
             ("/earthwork/test-locations", "Test locations"), ("/earthwork/roller-output", "Roller output"), ("/earthwork/test-strip", "Trial strip"),
         ]),
+        ("Files", [("/exchange", "CSV and AGS4")]),
         ("Reference", [("/test-methods", "Test methods"), ("/findings", "Findings"), ("/reference", "For programs")]),
     ];
 }
