@@ -50,8 +50,9 @@ internal static class JsonJob
     /// <param name="compute">The answer to a request without broken rules, and its chart.</param>
     /// <param name="example">A whole request that is accepted.</param>
     /// <param name="kind">The kind of its chart.</param>
+    /// <param name="bodyBytes">The largest body, where it is not the usual one.</param>
     public static RouteHandlerBuilder MapJob<TRequest, TAnswer, TChart>(
-        this IEndpointRouteBuilder app, string path, Func<TRequest, IReadOnlyList<Fault>> check, Func<TRequest, Charted<TAnswer, TChart>> compute, string example, ChartKind<TChart> kind)
+        this IEndpointRouteBuilder app, string path, Func<TRequest, IReadOnlyList<Fault>> check, Func<TRequest, Charted<TAnswer, TChart>> compute, string example, ChartKind<TChart> kind, int? bodyBytes = null)
         where TRequest : class
         where TChart : class
     {
@@ -80,7 +81,7 @@ internal static class JsonJob
                 return Problems.InvalidQuery(faults);
             }
 
-            var request = await RequestReader.ReadAsync(context, ServiceJson.Of<TRequest>(), check, limits.BodyBytes);
+            var request = await RequestReader.ReadAsync(context, ServiceJson.Of<TRequest>(), check, bodyBytes ?? limits.BodyBytes);
             if (!request.Succeeded)
             {
                 return request.Problem;

@@ -1,10 +1,12 @@
+using Drypeak.Service.Acceptance;
 using Drypeak.Service.Field;
 using Drypeak.Service.Hosting;
 using Drypeak.Service.Laboratory;
 using Drypeak.Service.Pages;
 
 var builder = WebApplication.CreateBuilder(args).AddDrypeakHosting();
-builder.Services.AddSingleton<MoistureDensityJob>().AddSingleton<ComparisonJob>().AddSingleton<FieldDensityJob>();
+builder.Services.AddSingleton<MoistureDensityJob>().AddSingleton<ComparisonJob>().AddSingleton<FieldDensityJob>()
+    .AddSingleton<LotAcceptanceJob>().AddSingleton<AcceptancePlanJob>();
 
 var app = builder.Build();
 app.UseDrypeakHosting(PageEndpoints.NotFound);
@@ -17,6 +19,8 @@ FieldDensityJob.Map(app);
 RelativeDensityJob.Map(app);
 OnePointJob.Map(app);
 RapidMethodJob.Map(app);
+LotAcceptanceJob.Map(app);
+AcceptancePlanJob.Map(app);
 app.MapTestMethods();
 app.MapFindingKinds();
 app.MapSpecimenSheet();

@@ -2,6 +2,7 @@ using System.Text.Json;
 using System.Text.Json.Serialization;
 using System.Text.Json.Serialization.Metadata;
 using Drypeak.Figures;
+using Drypeak.Service.Acceptance;
 using Drypeak.Service.Field;
 using Drypeak.Service.Hosting;
 using Drypeak.Service.Laboratory;
@@ -48,6 +49,10 @@ internal static class ServiceJson
 [JsonSerializable(typeof(OnePointAnswer))]
 [JsonSerializable(typeof(RapidMethodRequest))]
 [JsonSerializable(typeof(RapidMethodAnswer))]
+[JsonSerializable(typeof(LotAcceptanceRequest))]
+[JsonSerializable(typeof(LotAcceptanceAnswer))]
+[JsonSerializable(typeof(AcceptancePlanRequest))]
+[JsonSerializable(typeof(AcceptancePlanAnswer))]
 [JsonSerializable(typeof(CompactionChart))]
 [JsonSerializable(typeof(PlotChart))]
 internal sealed partial class ContractsJson : JsonSerializerContext;

@@ -28,19 +28,8 @@ internal sealed class FieldDensityJob(MoistureDensityJob laboratory, Limits limi
     /// <summary>Computes a request that passed <see cref="Check"/>.</summary>
     public static FieldDensityAnswer Compute(FieldDensityRequest request)
     {
-        var test = request.ToTest();
         var ofLaboratory = new List<Finding>();
-        if (request.Laboratory?.Test is { } embedded)
-        {
-            var (laboratoryTest, laboratoryResult) = MoistureDensityJob.Analyze(embedded);
-            test = test.Against(laboratoryTest, laboratoryResult);
-            ofLaboratory.AddRange(laboratoryResult.Findings.Select(finding => finding with { Place = "/laboratory/test" + finding.Place }));
-            if (test.Reference.MaximumDryDensity is null)
-            {
-                ofLaboratory.Add(FieldFindingKinds.ReferenceWithoutPeak.At("/laboratory/test", "The laboratory test has no optimum, so that there is nothing to hold the field test against. See its own findings."));
-            }
-        }
-
+        var test = HeldAgainst(request, ofLaboratory);
         var faults = new List<Fault>();
         var result = FieldAnalysis.Analyze(test, faults)
             ?? throw new ArgumentException("The request does not keep the rules: " + faults[0].Message, nameof(request));
@@ -61,7 +50,7 @@ internal sealed class FieldDensityJob(MoistureDensityJob laboratory, Limits limi
             Requirements =
             [
                 .. result.Judgements.Select((judgement, i) => judgement.ToAnswer(
-                    request.Specification!.Requirements![i], JudgementWords.Of(judgement, result, test.Units), test.Units)),
+                    request.Specification!.Requirements![i], JudgementWords.Of(judgement, judged, test.Units), test.Units)),
             ],
             Outcome = result.Outcome?.ToString().ToLowerInvariant(),
             Trace = request.Trace is true ? [.. result.Working.Select(TraceStep.Of)] : null,
@@ -70,6 +59,28 @@ internal sealed class FieldDensityJob(MoistureDensityJob laboratory, Limits limi
             Links = new LinksContract(),
             Provenance = ProvenanceContract.Of(request),
         };
+    }
+
+    /// <summary>The test of a request that passed <see cref="Check"/>, held against its laboratory: values, or a whole test that is computed here.</summary>
+    /// <param name="request">The request.</param>
+    /// <param name="findings">Receives what a reviewer says of the laboratory test.</param>
+    public static FieldTest HeldAgainst(FieldDensityRequest request, List<Finding> findings)
+    {
+        var test = request.ToTest();
+        if (request.Laboratory?.Test is not { } embedded)
+        {
+            return test;
+        }
+
+        var (laboratoryTest, laboratoryResult) = MoistureDensityJob.Analyze(embedded);
+        test = test.Against(laboratoryTest, laboratoryResult);
+        findings.AddRange(laboratoryResult.Findings.Select(finding => finding with { Place = "/laboratory/test" + finding.Place }));
+        if (test.Reference.MaximumDryDensity is null)
+        {
+            findings.Add(FieldFindingKinds.ReferenceWithoutPeak.At("/laboratory/test", "The laboratory test has no optimum, so that there is nothing to hold the field test against. See its own findings."));
+        }
+
+        return test;
     }
 
     private static SoilInPlaceAnswer ToAnswer(FieldResult result, UnitSet units)
