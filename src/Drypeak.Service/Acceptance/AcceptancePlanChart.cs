@@ -9,22 +9,24 @@ namespace Drypeak.Service.Acceptance;
 /// <summary>The operating characteristic as a picture: the curve, the limits, and the two risks where they are asked for.</summary>
 internal static class AcceptancePlanChart
 {
+    private const int Between = 60;
+
     public static PlotChart Of(
         IReadOnlyList<AcceptanceAnswer> points, AcceptancePlan plan, AcceptancePlanRequest request, double? producers, double? consumers, AcceptedQuantity quantity, UnitSet units)
     {
         List<PlotMark> marks = [];
         if (producers is { } p)
         {
-            marks.Add(new PlotMark(request.AcceptableLevel!.Value, 100 * (1 - p), MarkRole.Met, $"rejected {ReaderText.Percent(p)}"));
+            marks.Add(new PlotMark(request.AcceptableLevel!.Value, 100 * (1 - p), MarkRole.Measured, $"rejected {ReaderText.Percent(p)}"));
         }
 
         if (consumers is { } c)
         {
-            marks.Add(new PlotMark(request.RejectableLevel!.Value, 100 * c, MarkRole.NotMet, $"accepted {ReaderText.Percent(c)}"));
+            marks.Add(new PlotMark(request.RejectableLevel!.Value, 100 * c, MarkRole.Measured, $"accepted {ReaderText.Percent(c)}", MarkShape.Diamond));
         }
 
         var unit = Specification.UnitOf(quantity, units);
-        PlotPoint[] curve = [.. points.Select(point => new PlotPoint(point.Level, 100 * point.ProbabilityOfAcceptance)).Concat(marks.Select(mark => new PlotPoint(mark.X, mark.Y))).DistinctBy(point => point.X).OrderBy(point => point.X)];
+        PlotPoint[] curve = [.. Dense(points, plan, unit).Concat(marks.Select(mark => new PlotPoint(mark.X, mark.Y))).DistinctBy(point => point.X).OrderBy(point => point.X)];
         var title = (producers, consumers) switch
         {
             ({ } producer, { } consumer) => $"Producer’s risk {ReaderText.Percent(producer)}, consumer’s risk {ReaderText.Percent(consumer)}",
@@ -44,5 +46,14 @@ internal static class AcceptancePlanChart
             Limits = [.. plan.Rules.SelectMany(rule => new[] { rule.Limits.Minimum, rule.Limits.Maximum }).OfType<double>().Distinct().Select(limit => new PlotLimit(limit / unit, "limit", Upright: true, PlotLineRole.Reference))],
             Marks = curve.Length > 1 ? marks : [.. marks, .. curve.Select(point => new PlotMark(point.X, point.Y, MarkRole.Measured))],
         };
+    }
+
+    /// <summary>The levels asked for, and between them what theory gives: few levels make no corners in the picture.</summary>
+    private static IEnumerable<PlotPoint> Dense(IReadOnlyList<AcceptanceAnswer> points, AcceptancePlan plan, double unit)
+    {
+        var asked = points.Select(point => new PlotPoint(point.Level, 100 * point.ProbabilityOfAcceptance));
+        var (from, to) = (points.Min(point => point.Level), points.Max(point => point.Level));
+        return points.Count is 1 or > Between || !plan.IsExact ? asked
+            : asked.Concat(plan.At([.. Enumerable.Range(1, Between).Select(i => (from + ((to - from) * i / (Between + 1))) * unit)], 0, 1).Points.Select(point => new PlotPoint(point.Level / unit, 100 * point.Probability)));
     }
 }

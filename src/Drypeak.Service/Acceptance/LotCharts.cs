@@ -135,7 +135,7 @@ internal sealed class LotCharts(Lot lot, LotResult result, string? reference)
         return new PlotChart
         {
             Title = $"{window.Inside.Count} of {result.Counted.Count} tests lie inside the compaction window",
-            Subtitle = window.WetOfOptimums is { } share ? $"{ReaderText.Percent(share, 0)} on the line of optimums or wet of it" : null,
+            Subtitle = window.WetOfOptimums is { } share ? $"{ReaderText.Percent(share)} on the line of optimums or wet of it" : null,
             Reference = reference,
             Description = $"Dry density against water content of {marks.Count} tests{(window.Polygon is { Count: > 0 } ? ", with the compaction window" : "")}. {window.Inside.Count} lie inside, {outside.Count} outside.",
             X = new PlotAxis("Water content (%)"),
