@@ -138,7 +138,7 @@ internal sealed class AcceptancePlanRules : AbstractValidator<AcceptancePlanRequ
     private static void CheckWork(AcceptancePlanRequest request, ValidationContext<AcceptancePlanRequest> context)
     {
         if (request.Count is not (> 0 and <= MostTests and var count) || request.StandardDeviation is not (>= RuleWords.Least and <= RuleWords.Greatest)
-            || Placed(request).Any(placed => placed.Rule is null || Missing(placed.Rule).Any() || !new LotRuleRules(true, MostTests).Validate(placed.Rule).IsValid))
+            || !Placed(request).Any() || Placed(request).Any(placed => placed.Rule is null || Missing(placed.Rule).Any() || !new LotRuleRules(true, MostTests).Validate(placed.Rule).IsValid))
         {
             return;
         }

@@ -292,8 +292,14 @@ internal static class LotTimes
 
     public static IEnumerable<Fault> Check(IReadOnlyList<LotTestContract> tests)
     {
-        if (!tests.Any(test => test?.Time is { }))
+        // An empty text is no time, but asks none of the others.
+        if (!tests.Any(test => test?.Time is { Length: > 0 }))
         {
+            foreach (var (i, _) in tests.Index().Where(test => test.Item?.Time is { }))
+            {
+                yield return NotATime(i);
+            }
+
             yield break;
         }
 
@@ -307,7 +313,7 @@ internal static class LotTimes
             }
             else if (Read(text) is null)
             {
-                yield return At("not-a-time", "A time is written as 2026-05-12, 2026-05-12T14:30 or 2026-05-12T14:30:00, with or without an offset such as +02:00.");
+                yield return NotATime(i);
             }
             else if ((withOffset ??= HasOffset(text)) != HasOffset(text))
             {
@@ -315,6 +321,9 @@ internal static class LotTimes
             }
         }
     }
+
+    private static Fault NotATime(int test) =>
+        new($"/tests/{test}/time", "not-a-time", "A time is written as 2026-05-12, 2026-05-12T14:30 or 2026-05-12T14:30:00, with or without an offset such as +02:00.");
 
     private static bool HasOffset(string text) => text.EndsWith('Z') || text.LastIndexOfAny(['+', '-']) > "yyyy-MM-dd".Length;
 }
