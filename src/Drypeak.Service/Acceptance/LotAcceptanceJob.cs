@@ -97,7 +97,7 @@ internal sealed class LotAcceptanceJob(MoistureDensityJob laboratory, FieldDensi
     private static List<LotTestAnswer> TestsOf(
         Lot lot, LotResult result, IReadOnlyDictionary<string, IReadOnlyList<Finding>> findings, LotAcceptanceRequest request)
     {
-        var counted = result.Counted.ToHashSet();
+        var counted = result.Counted.ToHashSet<LotTest>(ReferenceEqualityComparer.Instance);
         return
         [
             .. lot.Tests.Select((test, i) =>

@@ -21,6 +21,9 @@ internal sealed class LotCharts(Lot lot, LotResult result, string? reference)
         ?? lot.Tests.SelectMany(test => test.Judgements).FirstOrDefault()?.Requirement.Quantity
         ?? result.Statistics.FirstOrDefault()?.Quantity;
 
+    /// <summary>The tests that count.</summary>
+    private readonly HashSet<LotTest> _counted = result.Counted.ToHashSet<LotTest>(ReferenceEqualityComparer.Instance);
+
     /// <summary>Results in order with limits and signals; null where no result is known.</summary>
     public PlotChart? InOrder()
     {
@@ -36,7 +39,7 @@ internal sealed class LotCharts(Lot lot, LotResult result, string? reference)
             return null;
         }
 
-        var left = lot.Tests.Where(test => test.Values[quantity] is { } && !result.Counted.Contains(test)).ToList();
+        var left = lot.Tests.Where(test => test.Values[quantity] is { } && !_counted.Contains(test)).ToList();
         var order = lot.Tests.Select((test, i) => (test.Label, i)).ToDictionary(pair => pair.Label, pair => pair.i);
         List<(LotTest Test, double Value, string? Signal)> all =
         [
@@ -44,7 +47,6 @@ internal sealed class LotCharts(Lot lot, LotResult result, string? reference)
             .. chart is null or { Plan.Kind: ControlChartKind.Individuals } ? left.Select(test => (test, test.Values[quantity]!.Value, (string?)null)) : [],
         ];
         all = lot.Tests.All(test => test.Time is { }) ? [.. all.OrderBy(entry => entry.Test.Time).ThenBy(entry => order[entry.Test.Label])] : [.. all.OrderBy(entry => order[entry.Test.Label])];
-        var counted = result.Counted.ToHashSet();
         List<PlotLimit> limits = chart is { Lower: { } lower, Upper: { } upper, Center: { } center }
             ? [.. ControlLimits(quantity, lower, center, upper)]
             : [];
@@ -66,9 +68,9 @@ internal sealed class LotCharts(Lot lot, LotResult result, string? reference)
             Description = $"{Capital(quantity.Words())} of {points.Count} tests in order. {Outcomes()}{(chart is null ? "" : $" {chart.Points.Count(point => point.Signal is { })} of them signal on the control chart.")}",
             X = new PlotAxis("Test") { Positions = Positions(all) },
             Y = AxisOf(quantity),
-            Lines = all.Count(entry => counted.Contains(entry.Test)) < 2 ? [] :
+            Lines = all.Count(entry => _counted.Contains(entry.Test)) < 2 ? [] :
             [
-                new PlotLine([.. all.Select((entry, i) => (entry, i)).Where(pair => counted.Contains(pair.entry.Test)).Select(pair => new PlotPoint(pair.i + 1, In(quantity, pair.entry.Value)))], PlotLineRole.Quiet),
+                new PlotLine([.. all.Select((entry, i) => (entry, i)).Where(pair => _counted.Contains(pair.entry.Test)).Select(pair => new PlotPoint(pair.i + 1, In(quantity, pair.entry.Value)))], PlotLineRole.Quiet),
             ],
             Limits = limits,
             Marks = [.. all.Select((entry, i) => new PlotMark(i + 1, In(quantity, entry.Value), RoleOf(entry.Test), entry.Signal is null ? null : $"{entry.Test.Label}: signal", entry.Signal is null ? MarkShape.Disc : MarkShape.Diamond))],
@@ -123,7 +125,7 @@ internal sealed class LotCharts(Lot lot, LotResult result, string? reference)
                let w = test.Values[AcceptedQuantity.WaterContent]
                let dry = test.Values[AcceptedQuantity.DryDensity]
                where w is { } && dry is { }
-               let counts = result.Counted.Contains(test)
+               let counts = _counted.Contains(test)
                let role = !counts ? MarkRole.SetAside : outside.Contains(test.Label) ? MarkRole.NotMet : unknown.Contains(test.Label) ? MarkRole.Undecided : MarkRole.Met
                select new PlotMark(100 * w.Value, In(AcceptedQuantity.DryDensity, dry.Value), role, outside.Contains(test.Label) ? test.Label : null),
         ];
@@ -198,7 +200,7 @@ internal sealed class LotCharts(Lot lot, LotResult result, string? reference)
             : $"{Count(TestOutcome.Accepted)} accepted, {Count(TestOutcome.Rejected)} rejected, {Count(TestOutcome.Undecided)} undecided.";
     }
 
-    private MarkRole RoleOf(LotTest test) => !result.Counted.Contains(test) ? MarkRole.SetAside : test.Outcome switch
+    private MarkRole RoleOf(LotTest test) => !_counted.Contains(test) ? MarkRole.SetAside : test.Outcome switch
     {
         TestOutcome.Accepted => MarkRole.Met,
         TestOutcome.Rejected => MarkRole.NotMet,
