@@ -9,6 +9,12 @@ namespace Drypeak.Service;
 internal readonly record struct Charted<TAnswer, TChart>(TAnswer Answer, TChart? Chart)
     where TChart : class;
 
+/// <summary>An answer as another text than JSON, such as a table.</summary>
+/// <param name="MediaType">As in Accept.</param>
+/// <param name="Parameters">Of the media type, each after a semicolon.</param>
+/// <param name="Write">The text.</param>
+internal sealed record TextForm<TAnswer>(string MediaType, string Parameters, Func<TAnswer, string> Write);
+
 /// <summary>A job that takes JSON and gives JSON, or its picture: negotiate, read, check, compute, answer.</summary>
 internal static class JsonJob
 {
@@ -50,12 +56,14 @@ internal static class JsonJob
     /// <param name="compute">The answer to a request without broken rules, and its chart.</param>
     /// <param name="example">A whole request that is accepted.</param>
     /// <param name="kind">The kind of its chart.</param>
+    /// <param name="text">A text that may be asked for as well; null: none.</param>
     /// <param name="bodyBytes">The largest body, where it is not the usual one.</param>
     public static RouteHandlerBuilder MapJob<TRequest, TAnswer, TChart>(
-        this IEndpointRouteBuilder app, string path, Func<TRequest, IReadOnlyList<Fault>> check, Func<TRequest, Charted<TAnswer, TChart>> compute, string example, ChartKind<TChart> kind, int? bodyBytes = null)
+        this IEndpointRouteBuilder app, string path, Func<TRequest, IReadOnlyList<Fault>> check, Func<TRequest, Charted<TAnswer, TChart>> compute, string example, ChartKind<TChart> kind, TextForm<TAnswer>? text = null, int? bodyBytes = null)
         where TRequest : class
         where TChart : class
     {
+        string[] offered = text is null ? JsonOrPicture : [.. JsonOrPicture, text.MediaType];
         app.MapChart(kind);
         var job = app.MapPost(path, AnswerAsync).Takes<TRequest>(Json, example).Gives<TAnswer>(Json).Refuses(400, 406, 413, 415, 422);
         ChartOptions.Describe(job, kind.Parameters, ChartFormat.All);
@@ -64,13 +72,13 @@ internal static class JsonJob
             job.Gives<byte[]>(format.MediaType);
         }
 
-        return job;
+        return text is null ? job : job.Gives<string>(text.MediaType);
 
         async Task<IResult> AnswerAsync(HttpContext context, Limits limits)
         {
-            if (Negotiation.Choose(context.Request, JsonOrPicture) is not { } mediaType)
+            if (Negotiation.Choose(context.Request, offered) is not { } mediaType)
             {
-                return Problems.NotAcceptable(JsonOrPicture);
+                return Problems.NotAcceptable(offered);
             }
 
             var faults = new List<Fault>();
@@ -89,13 +97,13 @@ internal static class JsonJob
 
             var (answer, chart) = compute(request.Value);
             context.Response.Headers.Vary = "Accept";
-            return format is null || options is null
-                ? Results.Json(answer, ServiceJson.Of<TAnswer>())
-                : Picture(chart, format, options);
+            return format is { } && options is { } ? Picture(chart, format, options)
+                : mediaType == text?.MediaType ? Results.Text(text.Write(answer), text.MediaType + text.Parameters)
+                : Results.Json(answer, ServiceJson.Of<TAnswer>());
         }
 
         IResult Picture(TChart? chart, ChartFormat format, ChartOptions options) =>
-            (chart is null ? "The answer leaves nothing to draw." : kind.Refusal(chart, options.Figure.Size)) is { } refusal
+            (chart is null ? "The answer leaves nothing to draw." : kind.Refusal(chart, options.Figure)) is { } refusal
                 ? Problems.InvalidValues([new Fault("", "not-drawable", refusal + " Check the values and their units; with Accept: application/json they are answered.")])
                 : Results.Bytes(kind.Picture(chart!, format, options), format.MediaType);
     }

@@ -1,4 +1,5 @@
 using Drypeak.Service.Acceptance;
+using Drypeak.Service.Earthwork;
 using Drypeak.Service.Field;
 using Drypeak.Service.Hosting;
 using Drypeak.Service.Laboratory;
@@ -6,6 +7,7 @@ using Drypeak.Service.Pages;
 
 var builder = WebApplication.CreateBuilder(args).AddDrypeakHosting();
 builder.Services.AddSingleton<MoistureDensityJob>().AddSingleton<ComparisonJob>().AddSingleton<FieldDensityJob>()
+    .AddSingleton<RelativeDensityJob>().AddSingleton<OnePointJob>().AddSingleton<RapidMethodJob>().AddEarthworkJobs()
     .AddSingleton<LotAcceptanceJob>().AddSingleton<AcceptancePlanJob>();
 
 var app = builder.Build();
@@ -21,6 +23,7 @@ OnePointJob.Map(app);
 RapidMethodJob.Map(app);
 LotAcceptanceJob.Map(app);
 AcceptancePlanJob.Map(app);
+app.MapEarthwork();
 app.MapTestMethods();
 app.MapFindingKinds();
 app.MapSpecimenSheet();

@@ -3,6 +3,7 @@ using System.Text.Json.Serialization;
 using System.Text.Json.Serialization.Metadata;
 using Drypeak.Figures;
 using Drypeak.Service.Acceptance;
+using Drypeak.Service.Earthwork;
 using Drypeak.Service.Field;
 using Drypeak.Service.Hosting;
 using Drypeak.Service.Laboratory;
@@ -53,6 +54,18 @@ internal static class ServiceJson
 [JsonSerializable(typeof(LotAcceptanceAnswer))]
 [JsonSerializable(typeof(AcceptancePlanRequest))]
 [JsonSerializable(typeof(AcceptancePlanAnswer))]
+[JsonSerializable(typeof(SpecimenWaterRequest))]
+[JsonSerializable(typeof(SpecimenWaterAnswer))]
+[JsonSerializable(typeof(LiftWaterRequest))]
+[JsonSerializable(typeof(LiftWaterAnswer))]
+[JsonSerializable(typeof(QuantitiesRequest))]
+[JsonSerializable(typeof(QuantitiesAnswer))]
+[JsonSerializable(typeof(TestLocationsRequest))]
+[JsonSerializable(typeof(TestLocationsAnswer))]
+[JsonSerializable(typeof(RollerOutputRequest))]
+[JsonSerializable(typeof(RollerOutputAnswer))]
+[JsonSerializable(typeof(TestStripRequest))]
+[JsonSerializable(typeof(TestStripAnswer))]
 [JsonSerializable(typeof(CompactionChart))]
 [JsonSerializable(typeof(PlotChart))]
 internal sealed partial class ContractsJson : JsonSerializerContext;

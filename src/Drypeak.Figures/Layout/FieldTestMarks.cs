@@ -1,5 +1,3 @@
-using Drypeak.Figures.Drawing;
-
 namespace Drypeak.Figures.Layout;
 
 /// <summary>Field tests among the specimens of their laboratory's curve: squares, filled or crossed by what each came to.</summary>

@@ -28,7 +28,8 @@ internal sealed class LotAcceptanceJob(MoistureDensityJob laboratory, FieldDensi
     {
         var job = app.ServiceProvider.GetRequiredService<LotAcceptanceJob>();
         app.MapJob<LotAcceptanceRequest, LotAcceptanceAnswer, PlotChart>(
-                "/v1/lot-acceptance", job.Check, job.Compute, Examples.LotAcceptanceRequest, job.Chart, app.ServiceProvider.GetRequiredService<Limits>().LotBodyBytes)
+                "/v1/lot-acceptance", job.Check, job.Compute, Examples.LotAcceptanceRequest, job.Chart,
+                bodyBytes: app.ServiceProvider.GetRequiredService<Limits>().LotBodyBytes)
             .WithTags("Lots")
             .WithName("lot-acceptance")
             .WithSummary("Accept or reject a lot by its rules")

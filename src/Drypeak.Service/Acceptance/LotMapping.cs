@@ -93,7 +93,7 @@ internal static class LotMapping
         string place, Dictionary<string, IReadOnlyList<Finding>> findings, string label)
     {
         List<Finding> found = [];
-        var test = FieldDensityJob.HeldAgainst(request, found);
+        var test = FieldDensityJob.HeldAgainst(request, found).Test;
         test = (request.Laboratory is null ? soil.Hold(test) : test) with
         {
             WaterDensity = request is { WaterTemperature: null, WaterDensity: null } ? soil.Held.WaterDensity : test.WaterDensity,

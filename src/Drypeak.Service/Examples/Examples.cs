@@ -40,6 +40,24 @@ internal static class Examples
     /// <summary>What six tests a lot risk, as JSON.</summary>
     public static string AcceptancePlanRequest { get; } = Text("acceptance-plan.json");
 
+    /// <summary>Water for five portions of the borrow area's soil, as JSON.</summary>
+    public static string SpecimenWaterRequest { get; } = Text("specimen-water.json");
+
+    /// <summary>Water for a lift on a dry day, as JSON.</summary>
+    public static string LiftWaterRequest { get; } = Text("lift-water.json");
+
+    /// <summary>A reach of the embankment from two borrow areas, as JSON.</summary>
+    public static string QuantitiesRequest { get; } = Text("quantities.json");
+
+    /// <summary>A test programme around a culvert, as JSON.</summary>
+    public static string TestLocationsRequest { get; } = Text("test-locations.json");
+
+    /// <summary>A padfoot roller, as JSON.</summary>
+    public static string RollerOutputRequest { get; } = Text("roller-output.json");
+
+    /// <summary>A trial strip of four, six, eight and ten passes, as JSON.</summary>
+    public static string TestStripRequest { get; } = Text("test-strip.json");
+
     private static string Text(string name)
     {
         using var stream = typeof(Examples).Assembly.GetManifestResourceStream($"Drypeak.Service.Examples.{name}")

@@ -1,3 +1,5 @@
+using Drypeak.Figures;
+using Drypeak.Service.Charts;
 using Drypeak.Service.Contracts;
 using Drypeak.Service.Hosting;
 using Drypeak.Service.Laboratory;
@@ -14,27 +16,49 @@ internal sealed class FieldDensityJob(MoistureDensityJob laboratory, Limits limi
 {
     private readonly FieldDensityRules _rules = new(laboratory, limits);
 
-    public static void Map(IEndpointRouteBuilder app) =>
-        app.MapJob<FieldDensityRequest, FieldDensityAnswer>(
-                "/v1/field-density", app.ServiceProvider.GetRequiredService<FieldDensityJob>().Check, Compute, Examples.FieldDensityRequest)
+    /// <summary>The kind of its chart.</summary>
+    public ChartKind<CompactionChart> Chart { get; } = ChartKind.Compaction("field-density", "The chart of a field test on its laboratory's curve, with the zone in which it is accepted", limits);
+
+    public static void Map(IEndpointRouteBuilder app)
+    {
+        var job = app.ServiceProvider.GetRequiredService<FieldDensityJob>();
+        app.MapJob<FieldDensityRequest, FieldDensityAnswer, CompactionChart>(
+                "/v1/field-density", job.Check, job.ComputeWithChart, Examples.FieldDensityRequest, job.Chart)
             .WithTags("Field")
             .WithName("field-density")
             .WithSummary("Reduce a field density test and decide on it")
-            .WithDescription("From the readings of six methods to the soil in place, its relative compaction, and each requirement met, missed or undecided, with the probability of conformance where an uncertainty is known.");
+            .WithDescription("From the readings of six methods to the soil in place, its relative compaction, and each requirement met, missed or undecided, with the probability of conformance where an uncertainty is known. With Accept: image/svg+xml, image/png or application/pdf the chart is the answer: the test on its laboratory's curve, and the zone in which it is accepted.");
+    }
 
     /// <summary>Every broken rule; empty where the request can be computed.</summary>
     public IReadOnlyList<Fault> Check(FieldDensityRequest request) => _rules.Check(request);
 
-    /// <summary>Computes a request that passed <see cref="Check"/>.</summary>
-    public static FieldDensityAnswer Compute(FieldDensityRequest request)
+    /// <summary>Computes a request that passed <see cref="Check"/>, with its chart and the chart's addresses.</summary>
+    public Charted<FieldDensityAnswer, CompactionChart> ComputeWithChart(FieldDensityRequest request)
+    {
+        var (answer, chart) = Answer(request);
+        if (chart is null)
+        {
+            return new(answer, null);
+        }
+
+        var links = Chart.LinksOf(chart, limits, out var whyNot);
+        return new(answer with { Links = links, Findings = whyNot is null ? answer.Findings : [.. answer.Findings, FindingContract.Of(whyNot)] }, chart);
+    }
+
+    /// <summary>Computes a request that passed <see cref="Check"/>, where only its numbers are wanted.</summary>
+    public static FieldDensityAnswer Compute(FieldDensityRequest request) => Answer(request).Answer;
+
+    private static Charted<FieldDensityAnswer, CompactionChart> Answer(FieldDensityRequest request)
     {
         var ofLaboratory = new List<Finding>();
-        var test = HeldAgainst(request, ofLaboratory);
+        var (test, laboratory) = HeldAgainst(request, ofLaboratory);
+        var curve = laboratory is { } known ? MoistureDensityChart.Of(request.Laboratory!.Test!, known.Test with { Units = test.Units }, known.Result) : null;
         var faults = new List<Fault>();
         var result = FieldAnalysis.Analyze(test, faults)
             ?? throw new ArgumentException("The request does not keep the rules: " + faults[0].Message, nameof(request));
         var judged = result.Judged;
-        return new FieldDensityAnswer
+        var answer = new FieldDensityAnswer
         {
             Reference = request.Reference,
             Identification = request.Identification,
@@ -59,28 +83,29 @@ internal sealed class FieldDensityJob(MoistureDensityJob laboratory, Limits limi
             Links = new LinksContract(),
             Provenance = ProvenanceContract.Of(request),
         };
+        return new(answer, FieldDensityChart.Of(request, test, result, curve));
     }
 
     /// <summary>The test of a request that passed <see cref="Check"/>, held against its laboratory: values, or a whole test that is computed here.</summary>
     /// <param name="request">The request.</param>
     /// <param name="findings">Receives what a reviewer says of the laboratory test.</param>
-    public static FieldTest HeldAgainst(FieldDensityRequest request, List<Finding> findings)
+    public static (FieldTest Test, (MoistureDensityTest Test, MoistureDensityResult Result)? Laboratory) HeldAgainst(FieldDensityRequest request, List<Finding> findings)
     {
         var test = request.ToTest();
         if (request.Laboratory?.Test is not { } embedded)
         {
-            return test;
+            return (test, null);
         }
 
-        var (laboratoryTest, laboratoryResult) = MoistureDensityJob.Analyze(embedded);
-        test = test.Against(laboratoryTest, laboratoryResult);
-        findings.AddRange(laboratoryResult.Findings.Select(finding => finding with { Place = "/laboratory/test" + finding.Place }));
+        var laboratory = MoistureDensityJob.Analyze(embedded);
+        test = test.Against(laboratory.Test, laboratory.Result);
+        findings.AddRange(laboratory.Result.Findings.Select(finding => finding with { Place = "/laboratory/test" + finding.Place }));
         if (test.Reference.MaximumDryDensity is null)
         {
             findings.Add(FieldFindingKinds.ReferenceWithoutPeak.At("/laboratory/test", "The laboratory test has no optimum, so that there is nothing to hold the field test against. See its own findings."));
         }
 
-        return test;
+        return (test, laboratory);
     }
 
     private static SoilInPlaceAnswer ToAnswer(FieldResult result, UnitSet units)

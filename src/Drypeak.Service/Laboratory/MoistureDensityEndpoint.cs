@@ -1,5 +1,3 @@
-using Drypeak.Service.Hosting;
-
 namespace Drypeak.Service.Laboratory;
 
 /// <summary><c>POST /v1/moisture-density</c>: a laboratory test in, its curve out; as JSON, or as its picture by Accept.</summary>

@@ -60,7 +60,7 @@ internal static class FieldDensityPage
         Demonstrations = Demonstrations,
         View = typeof(FieldAnswerView),
         Check = job.Check,
-        Compute = FieldDensityJob.Compute,
+        Compute = FormAnswer.Of<FieldDensityRequest, FieldDensityAnswer, Figures.CompactionChart>(job.ComputeWithChart, job.Chart),
         Headline = FieldAnswerWords.Headline,
     };
 

@@ -74,8 +74,8 @@ public sealed class FormPage<TRequest, TAnswer> : FormPage
     /// <summary>Every broken rule of a request.</summary>
     public required Func<TRequest, IReadOnlyList<Fault>> Check { get; init; }
 
-    /// <summary>The answer to a request without broken rules.</summary>
-    public required Func<TRequest, TAnswer> Compute { get; init; }
+    /// <summary>The answer to a request without broken rules, see <see cref="FormAnswer"/>.</summary>
+    public required Func<TRequest, FormAnswer<TAnswer>> Compute { get; init; }
 
     /// <summary>The answer in a few words, for the page's title.</summary>
     public required Func<TAnswer, string> Headline { get; init; }
@@ -95,10 +95,11 @@ public sealed class FormPage<TRequest, TAnswer> : FormPage
             };
         }
 
-        var answer = Compute(read.Value!);
+        var (answer, draw) = Compute(read.Value!);
         return new FormSubmission(this, texts, reading)
         {
             Answer = answer,
+            Draw = draw,
             Headline = Headline(answer),
             RequestFile = request,
             AnswerFile = JsonSerializer.SerializeToUtf8Bytes(answer, ServiceJson.Of<TAnswer>()),

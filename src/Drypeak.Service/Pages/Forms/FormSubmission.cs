@@ -1,3 +1,5 @@
+using Drypeak.Figures;
+
 namespace Drypeak.Service.Pages.Forms;
 
 /// <summary>A form with what came of it: an answer, or all that is wrong. Immutable, safe on any thread.</summary>
@@ -11,6 +13,9 @@ public sealed record FormSubmission(FormPage Page, FormTexts Texts, FormReading?
 
     /// <summary>The answer, or null.</summary>
     public object? Answer { get; init; }
+
+    /// <summary>Draws the answer's figure in a size; null where there is none.</summary>
+    public Func<FigureSize, Figure>? Draw { get; init; }
 
     /// <summary>The answer in a few words, or null.</summary>
     public string? Headline { get; init; }
