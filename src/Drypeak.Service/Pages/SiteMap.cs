@@ -6,7 +6,7 @@ internal static class SiteMap
     public static IReadOnlyList<(string Group, IReadOnlyList<(string Address, string Name)> Links)> Groups { get; } =
     [
         ("Laboratory", [("/", "Compaction test"), ("/specimen-sheet", "Blank sheet")]),
-        ("Field", [("/field", "Field density test")]),
+        ("Field", [("/field", "Field density test"), ("/rapid-method", "Rapid method"), ("/one-point", "One point on a family"), ("/relative-density", "Relative density")]),
         ("Reference", [("/test-methods", "Test methods"), ("/findings", "Findings"), ("/reference", "For programs")]),
     ];
 }

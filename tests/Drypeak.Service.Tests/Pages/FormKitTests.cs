@@ -9,7 +9,7 @@ namespace Drypeak.Service.Tests.Pages;
 public sealed class FormKitTests(PageService service) : IClassFixture<PageService>
 {
     /// <summary>Every page of the kit.</summary>
-    public static TheoryData<string> Addresses => ["/field"];
+    public static TheoryData<string> Addresses => ["/field", "/relative-density", "/one-point", "/rapid-method"];
 
     [Theory]
     [MemberData(nameof(Addresses))]
