@@ -69,13 +69,13 @@ internal sealed class LotAcceptanceJob(MoistureDensityJob laboratory, FieldDensi
         return new Charted<LotAcceptanceAnswer, PlotChart>(answer, main);
     }
 
-    /// <summary>The pictures of a lot for a page, each with its name.</summary>
-    public static IReadOnlyList<(string Name, PlotChart Chart)> Pictures(LotAcceptanceRequest request)
+    /// <summary>The pictures besides the main one that can be drawn, each with its name.</summary>
+    public IReadOnlyList<(string Name, PlotChart Chart)> FurtherPictures(LotAcceptanceRequest request)
     {
         var lot = LotMapping.ToLot(request, []).Lot;
         var charts = new LotCharts(lot, LotAnalysis.Analyze(lot), request.Reference);
-        (string, PlotChart?)[] all = [("Results in order", charts.InOrder()), ("Histogram", charts.Histogram()), ("Window", charts.Window()), ("Map", charts.Map())];
-        return [.. all.Where(picture => picture.Item2 is { }).Select(picture => (picture.Item1, picture.Item2!))];
+        (string Name, PlotChart? Chart)[] all = [("Histogram", charts.Histogram()), ("Compaction window", charts.Window()), ("Map", charts.Map())];
+        return [.. all.Where(picture => picture.Chart is { } chart && Chart.CheckAddress(chart).Count == 0).Select(picture => (picture.Name, picture.Chart!))];
     }
 
     /// <summary>The lot's outcome in one sentence.</summary>
