@@ -15,6 +15,9 @@ public sealed class FormTable
 {
     private const int MostRows = 20_000;
 
+    /// <summary>In place of a column where a whole row is meant.</summary>
+    private const int NoColumn = -1;
+
     private readonly TableField _field;
     private readonly List<(string Place, JsonNode Value)> _values = [];
     private readonly List<Fault> _faults = [];
@@ -57,7 +60,7 @@ public sealed class FormTable
 
     /// <summary>Row and column of a place, such as <c>Test 4, Water content</c>; null where it is in no row.</summary>
     public string? NameOf(string place) => RowOf(place) is not { } row ? null
-        : $"{_field.Row} {row + 1}" + (_cells.TryGetValue(place, out var cell) ? $", {Columns[cell.Column].Heading}" : "");
+        : $"{_field.Row} {row + 1}" + (_cells.TryGetValue(place, out var cell) && cell.Column != NoColumn ? $", {Columns[cell.Column].Heading}" : "");
 
     private bool TryFirstWithin(string place, out (int Row, int Column) cell)
     {
@@ -115,7 +118,7 @@ public sealed class FormTable
     private void ReadRow(int row, string item, int inItem, UnitSet units, DecimalMark? mark)
     {
         var cells = Rows[row];
-        _cells.TryAdd(item, (row, 0));
+        _cells.TryAdd(item, (row, NoColumn));
         if (cells.Skip(Columns.Count).Any(cell => cell.Length > 0))
         {
             _faults.Add(new Fault(item, "too-many-cells", $"It has {cells.Count} cells, but the table has {Columns.Count} columns. Look for a mark that parts a cell in two."));
