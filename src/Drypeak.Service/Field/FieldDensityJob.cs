@@ -3,6 +3,7 @@ using Drypeak.Service.Charts;
 using Drypeak.Service.Contracts;
 using Drypeak.Service.Hosting;
 using Drypeak.Service.Laboratory;
+using Drypeak.Service.Reports;
 using Drypeak.Soil.Acceptance;
 using Drypeak.Soil.FieldDensity;
 using Drypeak.Soil.FieldDensity.Review;
@@ -37,13 +38,14 @@ internal sealed class FieldDensityJob(MoistureDensityJob laboratory, Limits limi
     public Charted<FieldDensityAnswer, CompactionChart> ComputeWithChart(FieldDensityRequest request)
     {
         var (answer, chart) = Answer(request);
+        var report = ReportAddress.Of(FieldDensityReport.Job, request, limits);
         if (chart is null)
         {
-            return new(answer, null);
+            return new(answer with { Links = new LinksContract { Report = report } }, null);
         }
 
         var links = Chart.LinksOf(chart, limits, out var whyNot);
-        return new(answer with { Links = links, Findings = whyNot is null ? answer.Findings : [.. answer.Findings, FindingContract.Of(whyNot)] }, chart);
+        return new(answer with { Links = links with { Report = report }, Findings = whyNot is null ? answer.Findings : [.. answer.Findings, FindingContract.Of(whyNot)] }, chart);
     }
 
     /// <summary>Computes a request that passed <see cref="Check"/>, where only its numbers are wanted.</summary>
