@@ -44,6 +44,9 @@ public sealed class FormReading
 
     public static FormReading Of(FormPage page, FormTexts texts) => new(page, texts);
 
+    /// <summary>A message of the rules or of a review, with the request's members called as the form calls them.</summary>
+    public string InWordsOfTheForm(string message) => _words.InWordsOfTheForm(message);
+
     /// <summary>How a pasted table was understood; null where the field is empty.</summary>
     public FormTable? TableOf(TableField field) => _tables.GetValueOrDefault(field.Name);
 
@@ -96,6 +99,9 @@ public sealed class FormReading
                 break;
             case CheckField check when text == CheckField.Ticked:
                 Put(check, check.Place.EndsWith(']') ? null : true);
+                break;
+            case ChoiceField choice when choice.Choices.FirstOrDefault(known => known.Value == text)?.Flag is { } flag:
+                Put(choice, flag);
                 break;
             case TextField or ChoiceField:
                 Put(field, text);
