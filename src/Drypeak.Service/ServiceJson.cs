@@ -2,7 +2,11 @@ using System.Text.Json;
 using System.Text.Json.Serialization;
 using System.Text.Json.Serialization.Metadata;
 using Drypeak.Figures;
+using Drypeak.Service.Acceptance;
 using Drypeak.Service.Earthwork;
+using Drypeak.Service.Exchange.Ags;
+using Drypeak.Service.Exchange.Batch;
+using Drypeak.Service.Exchange.Csv;
 using Drypeak.Service.Field;
 using Drypeak.Service.Hosting;
 using Drypeak.Service.Laboratory;
@@ -49,6 +53,14 @@ internal static class ServiceJson
 [JsonSerializable(typeof(OnePointAnswer))]
 [JsonSerializable(typeof(RapidMethodRequest))]
 [JsonSerializable(typeof(RapidMethodAnswer))]
+[JsonSerializable(typeof(LotAcceptanceRequest))]
+[JsonSerializable(typeof(LotAcceptanceAnswer))]
+[JsonSerializable(typeof(AcceptancePlanRequest))]
+[JsonSerializable(typeof(AcceptancePlanAnswer))]
+[JsonSerializable(typeof(AgsAnswer))]
+[JsonSerializable(typeof(BatchSummaryLine))]
+[JsonSerializable(typeof(LaboratoryFileAnswer))]
+[JsonSerializable(typeof(FieldFileAnswer))]
 [JsonSerializable(typeof(SpecimenWaterRequest))]
 [JsonSerializable(typeof(SpecimenWaterAnswer))]
 [JsonSerializable(typeof(LiftWaterRequest))]
