@@ -1,13 +1,20 @@
 using Drypeak.Service.Acceptance;
 using Drypeak.Service.Earthwork;
+using Drypeak.Service.Exchange;
 using Drypeak.Service.Field;
 using Drypeak.Service.Hosting;
 using Drypeak.Service.Laboratory;
 using Drypeak.Service.Pages;
+using Drypeak.Service.Reports;
+
+if (args is [ComputeCommand.Name, .. var arguments])
+{
+    return await ComputeCommand.RunAsync(arguments);
+}
 
 var builder = WebApplication.CreateBuilder(args).AddDrypeakHosting();
 builder.Services.AddSingleton<MoistureDensityJob>().AddSingleton<ComparisonJob>().AddSingleton<FieldDensityJob>()
-    .AddSingleton<RelativeDensityJob>().AddSingleton<OnePointJob>().AddSingleton<RapidMethodJob>().AddEarthworkJobs()
+    .AddSingleton<RelativeDensityJob>().AddSingleton<OnePointJob>().AddSingleton<RapidMethodJob>().AddEarthworkJobs().AddExchangeJobs()
     .AddSingleton<LotAcceptanceJob>().AddSingleton<AcceptancePlanJob>();
 
 var app = builder.Build();
@@ -24,15 +31,18 @@ RapidMethodJob.Map(app);
 LotAcceptanceJob.Map(app);
 AcceptancePlanJob.Map(app);
 app.MapEarthwork();
+app.MapExchange();
 app.MapTestMethods();
 app.MapFindingKinds();
 app.MapSpecimenSheet();
+MoistureDensityReport.Map(app);
 app.MapPages();
 
 if (args is ["openapi", var path])
 {
     await app.ExportOpenApiAsync(path);
-    return;
+    return 0;
 }
 
 await app.RunAsync();
+return 0;

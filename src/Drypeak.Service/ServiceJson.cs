@@ -4,6 +4,9 @@ using System.Text.Json.Serialization.Metadata;
 using Drypeak.Figures;
 using Drypeak.Service.Acceptance;
 using Drypeak.Service.Earthwork;
+using Drypeak.Service.Exchange.Ags;
+using Drypeak.Service.Exchange.Batch;
+using Drypeak.Service.Exchange.Csv;
 using Drypeak.Service.Field;
 using Drypeak.Service.Hosting;
 using Drypeak.Service.Laboratory;
@@ -54,6 +57,10 @@ internal static class ServiceJson
 [JsonSerializable(typeof(LotAcceptanceAnswer))]
 [JsonSerializable(typeof(AcceptancePlanRequest))]
 [JsonSerializable(typeof(AcceptancePlanAnswer))]
+[JsonSerializable(typeof(AgsAnswer))]
+[JsonSerializable(typeof(BatchSummaryLine))]
+[JsonSerializable(typeof(LaboratoryFileAnswer))]
+[JsonSerializable(typeof(FieldFileAnswer))]
 [JsonSerializable(typeof(SpecimenWaterRequest))]
 [JsonSerializable(typeof(SpecimenWaterAnswer))]
 [JsonSerializable(typeof(LiftWaterRequest))]

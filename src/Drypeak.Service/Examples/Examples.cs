@@ -40,6 +40,12 @@ internal static class Examples
     /// <summary>What six tests a lot risk, as JSON.</summary>
     public static string AcceptancePlanRequest { get; } = Text("acceptance-plan.json");
 
+    /// <summary>Two laboratory tests, a row a specimen, as CSV.</summary>
+    public static string LaboratoryCsv { get; } = Text("moisture-density.csv");
+
+    /// <summary>A compaction test and two field densities, as AGS4.</summary>
+    public static string Ags4 { get; } = Text("ternmarsh.ags");
+
     /// <summary>Water for five portions of the borrow area's soil, as JSON.</summary>
     public static string SpecimenWaterRequest { get; } = Text("specimen-water.json");
 

@@ -3,6 +3,8 @@ using Drypeak.Service.Field;
 using Drypeak.Service.Hosting;
 using Drypeak.Service.Pages.Acceptance;
 using Drypeak.Service.Pages.Catalogues;
+using Drypeak.Service.Pages.Earthwork;
+using Drypeak.Service.Pages.Exchange;
 using Drypeak.Service.Pages.FieldDensity;
 using Drypeak.Service.Pages.Forms;
 using Drypeak.Service.Pages.Laboratory;
@@ -27,6 +29,8 @@ internal static class PageEndpoints
         app.MapForm(RapidMethodPage.Of(app.ServiceProvider.GetRequiredService<RapidMethodJob>()));
         app.MapForm(LotPage.Of(app.ServiceProvider.GetRequiredService<LotAcceptanceJob>()));
         app.MapForm(PlanPage.Of(app.ServiceProvider.GetRequiredService<AcceptancePlanJob>()));
+        EarthworkPages.Map(app);
+        ExchangePageEndpoints.Map(app);
         SpecimenSheetPageEndpoint.Map(app);
         MapStill<TestMethodsPage>(app, "/test-methods");
         MapStill<FindingsPage>(app, "/findings");

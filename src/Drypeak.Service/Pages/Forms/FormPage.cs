@@ -54,6 +54,12 @@ public abstract class FormPage
     /// <summary>A component below the form that helps to fill it; null: none.</summary>
     public Type? Help { get; init; }
 
+    /// <summary>Files that an answer can be taken away in beside those of every page.</summary>
+    internal IReadOnlyList<FormFile> MoreFiles { get; init; } = [];
+
+    /// <summary>Every file that an answer can be taken away in.</summary>
+    internal IEnumerable<FormFile> Files => FormFile.All.Concat(MoreFiles);
+
     /// <summary>Every field that the form may have.</summary>
     public IReadOnlyList<FormField> Fields => _fields.Value;
 

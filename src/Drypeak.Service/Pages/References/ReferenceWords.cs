@@ -22,7 +22,7 @@ internal static class ReferenceWords
         return (Reporting.DryDensity(null, Soil.Quantities.Density.From(density, unit), unit), Reporting.WaterContent(null, WaterContent.FromPercent(waterContent)));
     }
 
-    /// <summary>A difference from the optimum: <c>1.2 % dry of the optimum</c>.</summary>
+    /// <summary>A difference from the optimum: <c>1.2 % dry</c>.</summary>
     public static string FromOptimum(double points) =>
-        $"{ReaderText.Fixed(Math.Abs(points), 1)} % {(points < 0 ? "dry" : "wet")} of the optimum";
+        $"{ReaderText.Fixed(Math.Abs(points), 1)} % {(points < 0 ? "dry" : "wet")}";
 }
