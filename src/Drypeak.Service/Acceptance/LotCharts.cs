@@ -19,7 +19,7 @@ internal sealed class LotCharts(Lot lot, LotResult result, string? reference)
         lot.ControlChart?.Quantity
         ?? lot.Rules.OfType<QuantityRule>().FirstOrDefault()?.Limits.Quantity
         ?? lot.Tests.SelectMany(test => test.Judgements).FirstOrDefault()?.Requirement.Quantity
-        ?? result.Statistics.FirstOrDefault()?.Quantity;
+        ?? (result.Statistics.Count > 0 ? result.Statistics[0].Quantity : null);
 
     /// <summary>The tests that count.</summary>
     private readonly HashSet<LotTest> _counted = result.Counted.ToHashSet<LotTest>(ReferenceEqualityComparer.Instance);
