@@ -86,9 +86,9 @@ public static class CompactionFigure
         optima.Label(space);
         zone.Label(space, keyed, nameless);
         var next = NextSpecimenMark.Draw(chart.NextSpecimen, wording, plot, type, space);
+        specimens.Label(space);
         var labeledLines = phaseLines.DrawLabeled(space, keyed, nameless);
         var labeledModels = models.DrawLabeled(space, keyed, nameless);
-        specimens.Label(space);
 
         return (
             new Figure(size, wording.Title, wording.Description, theme.Palette,

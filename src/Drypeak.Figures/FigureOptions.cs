@@ -20,6 +20,9 @@ public sealed record FigureOptions
     /// <summary>A title in place of the result, which then stands under it; null or blank: the result is the title.</summary>
     public string? Title { get; init; }
 
+    /// <summary>Whether the figure says its result itself; false where it stands under a text that does, as in a report.</summary>
+    public bool SaysResult { get; init; } = true;
+
     /// <summary>What a second axis at the right shows, or null where there is none.</summary>
     public SecondAxis? Second { get; init; }
 

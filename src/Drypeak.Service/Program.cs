@@ -4,6 +4,7 @@ using Drypeak.Service.Field;
 using Drypeak.Service.Hosting;
 using Drypeak.Service.Laboratory;
 using Drypeak.Service.Pages;
+using Drypeak.Service.Reports;
 
 if (args is [ComputeCommand.Name, .. var arguments])
 {
@@ -30,6 +31,7 @@ app.MapExchange();
 app.MapTestMethods();
 app.MapFindingKinds();
 app.MapSpecimenSheet();
+MoistureDensityReport.Map(app);
 app.MapPages();
 
 if (args is ["openapi", var path])

@@ -83,7 +83,7 @@ internal sealed class Wording
     };
 
     /// <summary>What is written over the plot.</summary>
-    public HeadingWords Heading => new(
+    public HeadingWords Heading => !_options.SaysResult ? new("", null, [[Bars, Band]]) : new(
         Title,
         OwnTitle is null ? Headline : null,
         [[OwnTitle == Statement ? "" : Statement ?? "", OwnTitle is null || IsWithoutLaboratory ? "" : ResultLine, Reference], [Intervals, Bars, Band]]);

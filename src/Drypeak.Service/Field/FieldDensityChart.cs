@@ -10,9 +10,9 @@ namespace Drypeak.Service.Field;
 /// <summary>What the chart of a field test shows: the test among its laboratory's specimens, or beside its reference, and the zone in which it would be accepted.</summary>
 internal static class FieldDensityChart
 {
-    /// <summary>How far beyond what is shown a zone without an end of its own reaches: percentage points of water, and a share of the density.</summary>
-    private const double WaterBeyond = 0.03;
-    private const double DensityBeyond = 0.04;
+    /// <summary>How far beyond what is shown a zone without an end of its own reaches, so that the edge of the picture cuts it: water content, and a share of the density.</summary>
+    private const double WaterBeyond = 0.05;
+    private const double DensityBeyond = 0.5;
 
     /// <summary>The chart; null where the readings give no point to show.</summary>
     /// <param name="request">The request.</param>
@@ -80,7 +80,7 @@ internal static class FieldDensityWords
         var judged = result.Judged;
         var compaction = judged.ValueOf(Soil.Acceptance.AcceptedQuantity.RelativeCompaction) is { } ratio ? $"relative compaction {ReaderText.Percent(ratio)}" : null;
         var water = judged.ValueOf(Soil.Acceptance.AcceptedQuantity.WaterContentFromOptimum) is { } apart
-            ? $"water {ReaderText.Fixed(Math.Abs(apart) * 100, 1)} % {(apart < 0 ? "dry" : "wet")} of the optimum" : null;
+            ? $"{ReaderText.Fixed(Math.Abs(apart) * 100, 1)} % {(apart < 0 ? "dry" : "wet")} of the optimum" : null;
         var measured = string.Join(", ", new[] { compaction, water }.OfType<string>());
         var text = result.Outcome is { } outcome ? $"{outcome}{(measured.Length > 0 ? ": " + measured : "")}" : measured;
         return text.Length == 0 ? "Field density test" : char.ToUpperInvariant(text[0]) + text[1..];

@@ -41,7 +41,10 @@ public static class RapidMethod
     private const int Parabola = 3;
     private const double HighRatio = 1.05;
 
-    /// <summary>Where the driest specimen is put on the axis of the fit, as a fraction: a usual water content, since the fit takes none below 0.</summary>
+    /// <summary>
+    /// The fit wants water contents and dry densities. Which water content the driest specimen is put at changes a parabola not at all and the averaged
+    /// curve hardly: it is a usual one, as a fraction.
+    /// </summary>
     private const double DriestFitted = 0.1;
 
     /// <summary>Computes the method.</summary>
@@ -79,13 +82,16 @@ public static class RapidMethod
     /// <summary>Peak of the converted wet densities and the curve through them: z, and kg/m³.</summary>
     private static (CompactionPoint? Peak, IReadOnlyList<CompactionPoint> Curve) Fitted(IReadOnlyList<RapidSpecimen> specimens)
     {
-        var shift = DriestFitted - specimens.Min(specimen => specimen.WaterAdded);
+        var driest = specimens.Min(specimen => specimen.WaterAdded);
+        var fill = (DriestFitted - driest) / (1 + driest);
         var data = new CompactionData(
-            [.. specimens.Select(specimen => new CompactionPoint(specimen.WaterAdded + shift, specimen.Converted.KilogramsPerCubicMeter))], null, 1000);
+            [.. specimens.Select(specimen => new CompactionPoint(fill + (specimen.WaterAdded * (1 + fill)), specimen.Converted.KilogramsPerCubicMeter / (1 + fill)))], null, 1000);
         var chosen = CompactionCurve.Analyze(data, specimens.Count == Parabola ? CurveModel.Parabola : CurveModel.Averaged).Chosen;
         return (
-            chosen.Optimum is { } optimum ? new CompactionPoint(optimum.WaterContent.Value - shift, optimum.MaximumDryDensity.Value) : null,
-            [.. chosen.Curve.Select(point => point with { WaterContent = point.WaterContent - shift })]);
+            chosen.Optimum is { } optimum ? Back(new CompactionPoint(optimum.WaterContent.Value, optimum.MaximumDryDensity.Value)) : null,
+            [.. chosen.Curve.Select(Back)]);
+
+        CompactionPoint Back(CompactionPoint point) => new((point.WaterContent - fill) / (1 + fill), point.DryDensity * (1 + fill));
     }
 
     private static Finding NoPeak(IReadOnlyList<RapidSpecimen> specimens, DensityUnit unit)

@@ -45,7 +45,7 @@ internal static class RapidWorking
         ]);
         steps.Add(Ratio.Step("density ratio", $"100*{Text(field)}/{Text(peak)}", ratio * 100, "%"));
         steps.Add(FromOptimum.Step(water is null ? "water content from the optimum, an estimate with w = 0" : "water content from the optimum",
-            $"-({Number(peakWater * 100)})*(1 + {Number((water?.Fraction ?? 0) * 100)}/100)", apart * 100, "%"));
+            $"{Number(-peakWater * 100)}*(1 + {Number((water?.Fraction ?? 0) * 100)}/100)", apart * 100, "%"));
         return steps;
     }
 

@@ -15,7 +15,7 @@ public static class JudgementWords
             return $"The {quantity.Words()} could not be computed: {WhatIsMissing(quantity, result)}";
         }
 
-        var start = $"The {quantity.Words()} is {Standing(requirement, value, units)}";
+        var start = $"The {quantity.Words()} {(quantity == AcceptedQuantity.AirVoids ? "are" : "is")} {Standing(requirement, value, units)}";
         return judged.Doubt switch
         {
             Doubt.UncertaintyUnknown => start + ". The guarded rule needs its uncertainty, and none is known: give the standard uncertainties, or decide by the simple rule.",
