@@ -12,11 +12,11 @@ internal static class ChartEndpoints
         var charts = app.MapGroup("/v1/charts").WithTags("Charts");
         foreach (var format in ChartFormat.All)
         {
-            var chart = charts.MapRead($"/{ChartAddress.MoistureDensity}.{format.Suffix}", (HttpContext context, ChartRules rules, Limits limits) => Draw(context, rules, limits, format))
+            var chart = charts.MapMethods($"/{ChartAddress.MoistureDensity}.{format.Suffix}", EndpointDescription.Reading, (HttpContext context, ChartRules rules, Limits limits) => Draw(context, rules, limits, format))
                 .WithName($"moisture-density-chart-{format.Suffix}")
                 .WithSummary($"The chart of a laboratory test as {format.Suffix.ToUpperInvariant()}")
                 .WithDescription("The address comes from an answer's links and holds all that the picture shows. The same address gives the same bytes, with a strong ETag.")
-                .TakesQuery<string>(Data, "The chart, as an answer's links give it.", ExampleChart.Address, required: true)
+                .TakesQuery<string>(Data, "The chart, as an answer's links give it.", () => ExampleChart.Address, required: true)
                 .Gives<byte[]>(format.MediaType)
                 .Refuses(400);
             ChartOptions.Describe(chart, format);

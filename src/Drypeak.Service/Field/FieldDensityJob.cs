@@ -12,18 +12,18 @@ namespace Drypeak.Service.Field;
 /// <summary><c>POST /v1/field-density</c>: the field test from contract to contract. The endpoint and the page both call this.</summary>
 internal sealed class FieldDensityJob(MoistureDensityJob laboratory, Limits limits)
 {
-    private readonly FieldDensityRules _rules = new(laboratory, limits);
+    private readonly Lazy<FieldDensityRules> _rules = new(() => new(laboratory, limits));
 
     public static void Map(IEndpointRouteBuilder app) =>
         app.MapJob<FieldDensityRequest, FieldDensityAnswer>(
-                "/v1/field-density", app.ServiceProvider.GetRequiredService<FieldDensityJob>().Check, Compute, Examples.FieldDensityRequest)
+                "/v1/field-density", services => services.GetRequiredService<FieldDensityJob>().Check, Compute, Examples.FieldDensityRequest)
             .WithTags("Field")
             .WithName("field-density")
             .WithSummary("Reduce a field density test and decide on it")
             .WithDescription("From the readings of six methods to the soil in place, its relative compaction, and each requirement met, missed or undecided, with the probability of conformance where an uncertainty is known.");
 
     /// <summary>Every broken rule; empty where the request can be computed.</summary>
-    public IReadOnlyList<Fault> Check(FieldDensityRequest request) => _rules.Check(request);
+    public IReadOnlyList<Fault> Check(FieldDensityRequest request) => _rules.Value.Check(request);
 
     /// <summary>Computes a request that passed <see cref="Check"/>.</summary>
     public static FieldDensityAnswer Compute(FieldDensityRequest request)

@@ -19,7 +19,7 @@ internal sealed class OnePointJob(MoistureDensityJob laboratory, Limits limits)
     public static void Map(IEndpointRouteBuilder app) =>
         app.MapJob<OnePointRequest, OnePointAnswer>(
                 "/v1/one-point",
-                new OnePointJob(app.ServiceProvider.GetRequiredService<MoistureDensityJob>(), app.ServiceProvider.GetRequiredService<Limits>()).Check,
+                services => new OnePointJob(services.GetRequiredService<MoistureDensityJob>(), services.GetRequiredService<Limits>()).Check,
                 Compute, Examples.OnePointRequest)
             .WithTags("Field")
             .WithName("one-point")

@@ -14,7 +14,7 @@ internal sealed class RapidMethodJob(Limits limits)
 
     public static void Map(IEndpointRouteBuilder app) =>
         app.MapJob<RapidMethodRequest, RapidMethodAnswer>(
-                "/v1/rapid-method", new RapidMethodJob(app.ServiceProvider.GetRequiredService<Limits>()).Check, Compute, Examples.RapidMethodRequest)
+                "/v1/rapid-method", services => new RapidMethodJob(services.GetRequiredService<Limits>()).Check, Compute, Examples.RapidMethodRequest)
             .WithTags("Field")
             .WithName("rapid-method")
             .WithSummary("The rapid method: density ratio without a water content")

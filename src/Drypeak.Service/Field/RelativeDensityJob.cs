@@ -16,7 +16,7 @@ internal sealed class RelativeDensityJob(Limits limits)
 
     public static void Map(IEndpointRouteBuilder app) =>
         app.MapJob<RelativeDensityRequest, RelativeDensityAnswer>(
-                "/v1/relative-density", new RelativeDensityJob(app.ServiceProvider.GetRequiredService<Limits>()).Check, Compute, Examples.RelativeDensityRequest)
+                "/v1/relative-density", services => new RelativeDensityJob(services.GetRequiredService<Limits>()).Check, Compute, Examples.RelativeDensityRequest)
             .WithTags("Field")
             .WithName("relative-density")
             .WithSummary("Relative density and relative compaction of a free-draining soil")

@@ -7,9 +7,9 @@ public static class Health
 {
     public static void Map(IEndpointRouteBuilder endpoints)
     {
-        endpoints.MapRead("/health/live", Live).WithTags("Health").WithName("live")
+        endpoints.MapMethods("/health/live", EndpointDescription.Reading, Live).WithTags("Health").WithName("live")
             .Gives<HealthAnswer>("application/json", """{ "status": "live" }""");
-        endpoints.MapRead("/health/ready", Ready).WithTags("Health").WithName("ready")
+        endpoints.MapMethods("/health/ready", EndpointDescription.Reading, Ready).WithTags("Health").WithName("ready")
             .Gives<HealthAnswer>("application/json", """{ "status": "ready" }""").Refuses(503);
     }
 

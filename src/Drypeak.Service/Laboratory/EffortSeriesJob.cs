@@ -14,7 +14,7 @@ internal sealed class EffortSeriesJob(MoistureDensityJob laboratory)
 
     public static void Map(IEndpointRouteBuilder app) =>
         app.MapJob<EffortSeriesRequest, EffortSeriesAnswer>(
-                "/v1/effort-series", new EffortSeriesJob(app.ServiceProvider.GetRequiredService<MoistureDensityJob>()).Check, Compute, Examples.EffortSeriesRequest)
+                "/v1/effort-series", services => new EffortSeriesJob(services.GetRequiredService<MoistureDensityJob>()).Check, Compute, Examples.EffortSeriesRequest)
             .WithTags("Laboratory")
             .WithName("effort-series")
             .WithSummary("The line of optimums over compactive effort")

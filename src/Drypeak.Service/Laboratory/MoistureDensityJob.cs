@@ -17,14 +17,14 @@ internal sealed record MoistureDensityOutcome(MoistureDensityAnswer Answer, Comp
 /// <summary>The laboratory test from contract to contract. The endpoint, the page and a batch line all call this.</summary>
 internal sealed class MoistureDensityJob(Limits limits)
 {
-    private readonly MoistureDensityRules _rules = new(limits);
-    private readonly ChartRules _drawable = new(limits);
+    private readonly Lazy<MoistureDensityRules> _rules = new(() => new(limits));
+    private readonly Lazy<ChartRules> _drawable = new(() => new(limits));
 
     private const int LinePoints = 41;
     private const double Coverage = 0.95;
 
     /// <summary>Every broken rule; empty where the request can be computed.</summary>
-    public IReadOnlyList<Fault> Check(MoistureDensityRequest request) => _rules.Check(request);
+    public IReadOnlyList<Fault> Check(MoistureDensityRequest request) => _rules.Value.Check(request);
 
     /// <summary>Computes a request that passed <see cref="Check"/>.</summary>
     public MoistureDensityOutcome Compute(MoistureDensityRequest request)
@@ -32,7 +32,7 @@ internal sealed class MoistureDensityJob(Limits limits)
         var (test, result) = Analyze(request);
         var specimens = result.Specimens;
         var chart = MoistureDensityChart.Of(request, test, result);
-        var links = ChartAddress.LinksFor(ChartAddress.MoistureDensity, chart, _drawable, limits.AddressBytes, out var whyNoLink);
+        var links = ChartAddress.LinksFor(ChartAddress.MoistureDensity, chart, _drawable.Value, limits.AddressBytes, out var whyNoLink);
         var findings = (whyNoLink is null ? result.Findings : result.Findings.Append(whyNoLink)).Select(FindingContract.Of);
         return new MoistureDensityOutcome(
             new MoistureDensityAnswer

@@ -32,7 +32,7 @@ internal sealed class DescribedOperation : IOperationFilter
                 Required = query.Required,
                 Description = query.Description,
                 Schema = SchemaOf(query.Type),
-                Example = query.Type == typeof(string) ? JsonValue.Create(query.Example) : JsonNode.Parse(query.Example),
+                Example = query.Type == typeof(string) ? JsonValue.Create(query.Example()) : JsonNode.Parse(query.Example()),
             });
         }
     }
