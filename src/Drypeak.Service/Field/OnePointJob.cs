@@ -26,7 +26,7 @@ internal sealed class OnePointJob(MoistureDensityJob laboratory, Limits limits)
             .WithSummary("One point on a family of curves")
             .WithDescription("The curve through the point, shaped like its two neighbours in the family (AASHTO T 272, R 75); it may be used where the point lies at 80 to 100 % of its optimum.");
 
-    private IReadOnlyList<Fault> Check(OnePointRequest request)
+    private List<Fault> Check(OnePointRequest request)
     {
         var faults = _rules.Validate(request).ToFaults().ToList();
         for (var i = 0; i < request.Family?.Count; i++)

@@ -20,7 +20,7 @@ internal sealed class RapidMethodJob(Limits limits)
             .WithSummary("The rapid method: density ratio without a water content")
             .WithDescription("Field soil compacted at fill water content and with water added gives the relative compaction exactly, and the difference from the optimum (Hilf; ASTM D5080, AS 1289.5.7.1).");
 
-    private IReadOnlyList<Fault> Check(RapidMethodRequest request)
+    private List<Fault> Check(RapidMethodRequest request)
     {
         var faults = _rules.Validate(request).ToFaults().ToList();
         if (faults.Count == 0)

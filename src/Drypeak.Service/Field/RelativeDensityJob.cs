@@ -22,7 +22,7 @@ internal sealed class RelativeDensityJob(Limits limits)
             .WithSummary("Relative density and relative compaction of a free-draining soil")
             .WithDescription("Any one measure of the soil gives the others: dry density, void ratio, wet density with a water content, relative density, relative compaction.");
 
-    private IReadOnlyList<Fault> Check(RelativeDensityRequest request)
+    private List<Fault> Check(RelativeDensityRequest request)
     {
         var faults = _rules.Validate(request).ToFaults().ToList();
         if (faults.Count == 0 && StateOf(request, faults) is not { } && faults.Count == 0)

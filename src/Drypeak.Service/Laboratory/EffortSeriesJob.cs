@@ -20,7 +20,7 @@ internal sealed class EffortSeriesJob(MoistureDensityJob laboratory)
             .WithSummary("The line of optimums over compactive effort")
             .WithDescription("Two or more tests of one soil at different efforts; the optimum at another effort between them.");
 
-    private IReadOnlyList<Fault> Check(EffortSeriesRequest request)
+    private List<Fault> Check(EffortSeriesRequest request)
     {
         if (request.Tests is not { Count: >= FewestTests and <= MostTests } tests)
         {

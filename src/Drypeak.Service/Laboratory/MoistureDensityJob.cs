@@ -71,7 +71,13 @@ internal sealed class MoistureDensityJob(Limits limits)
     public static (MoistureDensityTest Test, MoistureDensityResult Result) Analyze(MoistureDensityRequest request)
     {
         var (test, specimens) = Reduce(request);
-        return (test, MoistureDensity.Analyze(test, specimens));
+        var result = MoistureDensity.Analyze(test, specimens);
+        if (result.Curve is { } curve)
+        {
+            Meters.Curve(curve.Chosen.Model.Name(), hasOptimum: result.Optimum is { });
+        }
+
+        return (test, result);
     }
 
     /// <summary>The reduced specimens of a request that passed <see cref="Check"/>, without a curve.</summary>

@@ -25,7 +25,7 @@ public static class ApiReference
 
     internal static void Use(WebApplication app)
     {
-        app.MapMethods(ApiDescription.Address, EndpointDescription.Reading, Document).WithTags("Description").WithName("description")
+        app.MapMethods(ApiDescription.Address, EndpointDescription.Reading, Document).AllowAnonymous().WithTags("Description").WithName("description")
             .Gives<JsonObject>("application/json", """{ "openapi": "3.1.1" }""");
         app.MapMethods(StyleSheetAddress, EndpointDescription.Reading, () => new CachedBytes(StyleSheet, "text/css") { CacheControl = CachedBytes.Revalidated })
             .ExcludeFromDescription();
