@@ -10,12 +10,15 @@ internal static class ChartBounds
             .Select(number => $"{number.What} must be a number between −1e9 and 1e9, not {number.Value}.").FirstOrDefault()
         ?? chart.Specimens.SelectMany(Bars).Where(half => half < 0).Select(half => $"Half of an interval must be 0 or more, not {half}.").FirstOrDefault()
         ?? (Intervals(chart).Any(interval => interval is not [_, _]) ? "An interval must have two ends." : null)
+        ?? (chart.Zone is { Corners.Count: < 3 } ? "A zone must have three corners or more." : null)
+        ?? (chart.FieldTests.Any(test => test.Outcome == MarkRole.Result) ? "A field test is measured, set aside, met, not met or undecided, not a result." : null)
         ?? (chart.SpecificGravity <= 0 ? $"The specific gravity must be over 0, not {chart.SpecificGravity}." : null)
         ?? (chart.WaterDensity <= 0 ? $"The density of water must be over 0, not {chart.WaterDensity}." : null)
         ?? chart.Saturation.Where(percent => percent is not (> 0 and <= 100)).Select(percent => $"A saturation must be over 0 and up to 100 %, not {percent}.").FirstOrDefault()
         ?? chart.AirVoids.Where(percent => percent is not (>= 0 and < 100)).Select(percent => $"Air voids must be from 0 to below 100 %, not {percent}.").FirstOrDefault();
 
-    private static string? Refusal(FigureSize size)
+    /// <summary>Why a size is not drawn, or null.</summary>
+    public static string? Refusal(FigureSize size)
     {
         var (smallest, largest) = (FigureSize.Smallest, FigureSize.Largest);
         var fits = size.Width >= smallest && size.Width <= largest && size.Height >= smallest && size.Height <= largest;
@@ -32,7 +35,9 @@ internal static class ChartBounds
     {
         var points = chart.Specimens.Select(specimen => ("A specimen's", specimen.Point))
             .Concat(chart.Curve.Select(point => ("The curve's", point)))
-            .Concat(chart.Optima.Select(optimum => ("An optimum's", optimum.Point)));
+            .Concat(chart.Optima.Select(optimum => ("An optimum's", optimum.Point)))
+            .Concat(chart.FieldTests.Select(test => ("A field test's", test.Point)))
+            .Concat((chart.Zone?.Corners ?? []).Select(corner => ("The zone's", corner)));
         foreach (var (whose, point) in points)
         {
             yield return ($"{whose} water content", point.WaterContent);

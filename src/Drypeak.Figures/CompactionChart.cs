@@ -1,4 +1,5 @@
 using System.Text.Json.Serialization;
+using Drypeak.Figures.Drawing;
 using Drypeak.Soil.Quantities;
 
 namespace Drypeak.Figures;
@@ -15,6 +16,10 @@ public sealed record CompactionChart
 
     /// <summary>The test's one-line name, in any language; shown elided where it is long. Null or blank: none.</summary>
     public string? Reference { get; init; }
+
+    /// <summary>The result in one line where it is not the optimum, as for a field test on its laboratory's curve; null or blank: the optimum is the result.</summary>
+    [JsonIgnore(Condition = JsonIgnoreCondition.WhenWritingNull)]
+    public string? Statement { get; init; }
 
     /// <summary>Unit of every density of the chart.</summary>
     public required DensityUnit DensityUnit { get; init; }
@@ -49,6 +54,13 @@ public sealed record CompactionChart
     /// <summary>Water content where one more specimen would tell most, %, or null.</summary>
     public double? NextSpecimen { get; init; }
 
+    /// <summary>Field tests, in any order.</summary>
+    public IReadOnlyList<ChartFieldTest> FieldTests { get; init; } = [];
+
+    /// <summary>Where a field test is accepted, or null.</summary>
+    [JsonIgnore(Condition = JsonIgnoreCondition.WhenWritingNull)]
+    public ChartZone? Zone { get; init; }
+
     /// <summary>Every optimum that is given.</summary>
     internal IEnumerable<ChartOptimum> Optima => new[] { Optimum, Adopted, Corrected }.OfType<ChartOptimum>();
 }
@@ -56,7 +68,11 @@ public sealed record CompactionChart
 /// <summary>A point of the chart.</summary>
 /// <param name="WaterContent">%.</param>
 /// <param name="DryDensity">In the chart's unit.</param>
-public readonly record struct ChartPoint(double WaterContent, double DryDensity);
+public readonly record struct ChartPoint(double WaterContent, double DryDensity)
+{
+    /// <summary>As numbers along the axes.</summary>
+    internal DataPoint Data => new(WaterContent, DryDensity);
+}
 
 /// <summary>A specimen's mark.</summary>
 /// <param name="WaterContent">%.</param>
@@ -79,6 +95,22 @@ public sealed record ChartSpecimen(double WaterContent, double DryDensity, strin
     /// <summary>Where the specimen stands.</summary>
     internal ChartPoint Point => new(WaterContent, DryDensity);
 }
+
+/// <summary>A field test's mark: a square, filled or crossed by what it came to.</summary>
+/// <param name="WaterContent">%.</param>
+/// <param name="DryDensity">In the chart's unit.</param>
+/// <param name="Label">The test's label, drawn beside the mark where there is room; null: none.</param>
+/// <param name="Outcome">What it came to; <see cref="MarkRole.Measured"/> where it was not judged.</param>
+public sealed record ChartFieldTest(double WaterContent, double DryDensity, string? Label, MarkRole Outcome)
+{
+    /// <summary>Where the test stands.</summary>
+    internal ChartPoint Point => new(WaterContent, DryDensity);
+}
+
+/// <summary>Where water content and dry density are both as asked for.</summary>
+/// <param name="Corners">In turn, three or more; the last is joined to the first.</param>
+/// <param name="Label">What is written in it, where there is room; null: nothing.</param>
+public sealed record ChartZone(IReadOnlyList<ChartPoint> Corners, string? Label);
 
 /// <summary>An optimum, with the texts in which it is reported.</summary>
 /// <param name="WaterContent">%.</param>

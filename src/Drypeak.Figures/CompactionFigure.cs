@@ -34,13 +34,15 @@ public static class CompactionFigure
         var type = new TypeScale(size);
         var wording = new Wording(chart, options);
         var lines = PhaseLines.Of(chart, options);
-        var heading = Heading.Lay(wording, size, type);
-        var plot = Plot.Lay(View.Of(chart, lines), heading.Bottom, wording, size, type);
+        var heading = Heading.Lay(wording.Heading, size, type);
+        var plot = Plot.Lay(CompactionView.Of(chart, lines), heading.Bottom, below: 0, wording.Axes, size, type);
 
-        var axes = new Axes(plot, wording, size, type, theme);
+        var axes = new Axes(plot, wording.Axes, size, type, theme);
         var phaseLines = new PhaseLineMarks(lines, plot, type, theme);
         var curve = new CurveLine(chart, plot, type);
         var specimens = new SpecimenMarks(chart, wording, plot, type);
+        var zone = new AcceptanceZone(chart, plot, type);
+        var fieldTests = new FieldTestMarks(chart, wording, plot, type);
         var optima = new OptimumMarks(chart, wording, plot, type, theme);
 
         var space = new LabelSpace(new Area(0, 0, size.Width, size.Height).Grown(-1));
@@ -48,12 +50,15 @@ public static class CompactionFigure
         phaseLines.Block(space);
         curve.Block(space);
         specimens.Block(space);
+        fieldTests.Block(space);
         optima.Block(space);
 
         // In the order of importance: what comes later takes the room that is left.
         space.PlaceEach(heading.Runs);
         axes.Label(space);
+        fieldTests.Label(space);
         optima.Label(space);
+        zone.Label(space);
         var next = NextSpecimenMark.Draw(chart.NextSpecimen, wording, plot, type, space);
         var labeledLines = phaseLines.DrawLabeled(space);
         specimens.Label(space);
@@ -61,6 +66,7 @@ public static class CompactionFigure
         return new Figure(size, wording.Title, wording.Description, theme.Palette,
         [
             axes.Grid(),
+            zone.Draw(),
             labeledLines,
             curve.Draw(),
             axes.Frame(),
@@ -68,6 +74,7 @@ public static class CompactionFigure
             optima.Leaders(),
             specimens.Draw(),
             optima.Draw(),
+            fieldTests.Draw(),
             new FigurePart("text", space.Placed),
         ]);
     }

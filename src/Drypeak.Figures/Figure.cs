@@ -13,10 +13,10 @@ namespace Drypeak.Figures;
 /// <param name="Parts">The parts, in drawing order.</param>
 public sealed record Figure(FigureSize Size, string Title, string Description, Palette Palette, IReadOnlyList<FigurePart> Parts)
 {
-    /// <summary>Draws every part, in order.</summary>
+    /// <summary>Draws every part that has a shape, in order.</summary>
     internal void DrawOn(ICanvas canvas)
     {
-        foreach (var part in Parts)
+        foreach (var part in Parts.Where(part => part.Shapes.Count > 0))
         {
             canvas.Begin(part.Name);
             foreach (var shape in part.Shapes)

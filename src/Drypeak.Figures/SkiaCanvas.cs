@@ -68,6 +68,29 @@ internal sealed class SkiaCanvas : ICanvas, IDisposable
         }
     }
 
+    public void Draw(Polygon polygon)
+    {
+        using var builder = new SKPathBuilder();
+        builder.AddPoly([.. polygon.Corners.Select(PointOf)], close: true);
+        using var path = builder.Detach();
+        if (polygon.Fill is { } fill)
+        {
+            UseFill(fill);
+            _paint.Color = ColorOf(fill).WithAlpha((byte)Math.Round(255 * polygon.Opacity));
+            _canvas.DrawPath(path, _paint);
+        }
+
+        if (polygon.Edge is { Dash.Count: > 0 } dashed)
+        {
+            Draw(new Lines([[.. polygon.Corners, polygon.Corners[0]]], dashed));
+        }
+        else if (polygon.Edge is { } edge)
+        {
+            UseStroke(edge);
+            _canvas.DrawPath(path, _paint);
+        }
+    }
+
     public void Draw(TextRun text)
     {
         var font = FontFor(text);

@@ -49,25 +49,12 @@ public static class SvgWriter
             _svg.Append(" d=\"");
             foreach (var run in lines.Runs)
             {
-                var command = 'M';
-                foreach (var place in run)
-                {
-                    _svg.Append(command);
-                    AppendNumber(place.X);
-                    _svg.Append(' ');
-                    AppendNumber(place.Y);
-                    command = 'L';
-                }
+                AppendRun(run);
             }
 
             _svg.Append("\" fill=\"none\"");
-            AppendStroke(lines.Stroke);
-            if (lines.Stroke.Dash.Count > 0)
-            {
-                AppendNumbers(" stroke-dasharray=\"", lines.Stroke.Dash, "\"");
-            }
-
-            _svg.Append(" stroke-linejoin=\"round\"/>\n");
+            AppendJoinedStroke(lines.Stroke);
+            Close(lines);
         }
 
         public void Draw(Disc disc)
@@ -82,12 +69,26 @@ public static class SvgWriter
                 AppendStroke(stroke);
             }
 
-            if (disc.Data is { } data)
+            Close(disc);
+        }
+
+        public void Draw(Polygon polygon)
+        {
+            Open("path", polygon.Name);
+            _svg.Append(" d=\"");
+            AppendRun(polygon.Corners);
+            _svg.Append("Z\" fill=\"").Append(polygon.Fill is { } fill ? _palette[fill].Hex : "none").Append('"');
+            if (polygon.Opacity < 1)
             {
-                _svg.Append(CultureInfo.InvariantCulture, $" data-x=\"{data.WaterContent:R}\" data-y=\"{data.DryDensity:R}\"");
+                Append("fill-opacity", polygon.Opacity);
             }
 
-            _svg.Append("/>\n");
+            if (polygon.Edge is { } edge)
+            {
+                AppendJoinedStroke(edge);
+            }
+
+            Close(polygon);
         }
 
         public void Draw(TextRun text)
@@ -135,6 +136,40 @@ public static class SvgWriter
             {
                 _svg.Append(" class=\"").Append(name).Append('"');
             }
+        }
+
+        private void Close(Shape shape)
+        {
+            if (shape.Data is { } data)
+            {
+                _svg.Append(CultureInfo.InvariantCulture, $" data-x=\"{data.X:R}\" data-y=\"{data.Y:R}\"");
+            }
+
+            _svg.Append("/>\n");
+        }
+
+        private void AppendRun(IReadOnlyList<Place> run)
+        {
+            var command = 'M';
+            foreach (var place in run)
+            {
+                _svg.Append(command);
+                AppendNumber(place.X);
+                _svg.Append(' ');
+                AppendNumber(place.Y);
+                command = 'L';
+            }
+        }
+
+        private void AppendJoinedStroke(Stroke stroke)
+        {
+            AppendStroke(stroke);
+            if (stroke.Dash.Count > 0)
+            {
+                AppendNumbers(" stroke-dasharray=\"", stroke.Dash, "\"");
+            }
+
+            _svg.Append(" stroke-linejoin=\"round\"");
         }
 
         private void Append(string attribute, double value)

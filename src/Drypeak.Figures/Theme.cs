@@ -20,7 +20,7 @@ public sealed record Theme
     public static Theme Print { get; } = new("print", Palette.BlackOnWhite)
     {
         GridWidth = 0.2,
-        ZeroAirVoidsDash = [16, 3, 3, 3],
+        ReferenceDash = [16, 3, 3, 3],
         LeaderDash = [3, 2],
     };
 
@@ -36,8 +36,8 @@ public sealed record Theme
     /// <summary>Width of the lines that lead from the ticks through the plot, px: finer where they are as dark as all else.</summary>
     internal double GridWidth { get; private init; } = 0.6;
 
-    /// <summary>Dash and gap in turn of the zero-air-voids line, at the default size; empty where its color keeps it from the curve.</summary>
-    internal IReadOnlyList<double> ZeroAirVoidsDash { get; private init; } = [];
+    /// <summary>Dash and gap in turn of the zero-air-voids line and of curves to compare with, at the default size; empty where their color keeps them from the result.</summary>
+    internal IReadOnlyList<double> ReferenceDash { get; private init; } = [];
 
     /// <summary>Dash and gap in turn of the lines that lead from the optimum to its values, at the default size.</summary>
     internal IReadOnlyList<double> LeaderDash { get; private init; } = [];

@@ -1,18 +1,27 @@
+using Drypeak.Service.Charts;
 using Drypeak.Service.Hosting;
 
 namespace Drypeak.Service;
 
-/// <summary>A job that takes JSON and gives JSON: negotiate, read, check, compute, answer.</summary>
+/// <summary>An answer with the chart that it can be looked at as.</summary>
+/// <param name="Answer">As JSON.</param>
+/// <param name="Chart">What its picture shows; null where it leaves nothing to draw.</param>
+internal readonly record struct Charted<TAnswer, TChart>(TAnswer Answer, TChart? Chart)
+    where TChart : class;
+
+/// <summary>A job that takes JSON and gives JSON, or its picture: negotiate, read, check, compute, answer.</summary>
 internal static class JsonJob
 {
     private const string Json = "application/json";
+
+    private static readonly string[] JsonOrPicture = [Json, .. ChartFormat.All.Select(format => format.MediaType)];
 
     /// <summary>Maps a job whose rules need nothing of the service.</summary>
     public static RouteHandlerBuilder MapJob<TRequest, TAnswer>(
         this IEndpointRouteBuilder app, string path, Func<TRequest, IReadOnlyList<Fault>> check, Func<TRequest, TAnswer> compute, string example)
         where TRequest : class => app.MapJob(path, _ => check, compute, example);
 
-    /// <summary>Maps a job.</summary>
+    /// <summary>Maps a job that gives JSON.</summary>
     /// <param name="app">Where.</param>
     /// <param name="path">Its address.</param>
     /// <param name="rules">Makes what finds every broken rule of a request. It is called at the first request: rules are slow to make, and the start waits for none.</param>
@@ -35,5 +44,70 @@ internal static class JsonJob
             var request = await RequestReader.ReadAsync(context, ServiceJson.Of<TRequest>(), check.Value, limits.BodyBytes);
             return request.Succeeded ? Results.Json(compute(request.Value), ServiceJson.Of<TAnswer>()) : request.Problem;
         }
+    }
+
+    /// <summary>
+    /// Maps a job that gives JSON, or by Accept its picture, and the picture's addresses. The picture has the bytes of the answer's links;
+    /// its options stand in the query.
+    /// </summary>
+    /// <param name="app">Where.</param>
+    /// <param name="path">Its address.</param>
+    /// <param name="check">Every broken rule of a request.</param>
+    /// <param name="compute">The answer to a request without broken rules, and its chart.</param>
+    /// <param name="example">A whole request that is accepted.</param>
+    /// <param name="kind">The kind of its chart.</param>
+    public static RouteHandlerBuilder MapJob<TRequest, TAnswer, TChart>(
+        this IEndpointRouteBuilder app, string path, Func<TRequest, IReadOnlyList<Fault>> check, Func<TRequest, Charted<TAnswer, TChart>> compute, string example, ChartKind<TChart> kind)
+        where TRequest : class
+        where TChart : class
+    {
+        app.MapChart(kind);
+        var job = app.MapPost(path, AnswerAsync).Takes<TRequest>(Json, example).Gives<TAnswer>(Json).Refuses(400, 406, 413, 415, 422);
+        ChartOptions.Describe(job, kind.Parameters, ChartFormat.All);
+        foreach (var format in ChartFormat.All)
+        {
+            job.Gives<byte[]>(format.MediaType);
+        }
+
+        return job;
+
+        async Task<IResult> AnswerAsync(HttpContext context, Limits limits)
+        {
+            if (Negotiation.Choose(context.Request, JsonOrPicture) is not { } mediaType)
+            {
+                return Problems.NotAcceptable(JsonOrPicture);
+            }
+
+            var faults = new List<Fault>();
+            var format = ChartFormat.All.FirstOrDefault(format => format.MediaType == mediaType);
+            var options = format is null ? WithoutParameters(context.Request.Query, faults) : ChartOptions.Read(context.Request.Query, kind.Parameters, format, limits, [], faults);
+            if (faults.Count > 0)
+            {
+                return Problems.InvalidQuery(faults);
+            }
+
+            var request = await RequestReader.ReadAsync(context, ServiceJson.Of<TRequest>(), check, limits.BodyBytes);
+            if (!request.Succeeded)
+            {
+                return request.Problem;
+            }
+
+            var (answer, chart) = compute(request.Value);
+            context.Response.Headers.Vary = "Accept";
+            return format is null || options is null
+                ? Results.Json(answer, ServiceJson.Of<TAnswer>())
+                : Picture(chart, format, options);
+        }
+
+        IResult Picture(TChart? chart, ChartFormat format, ChartOptions options) =>
+            (chart is null ? "The answer leaves nothing to draw." : kind.Refusal(chart, options.Figure.Size)) is { } refusal
+                ? Problems.InvalidValues([new Fault("", "not-drawable", refusal + " Check the values and their units; with Accept: application/json they are answered.")])
+                : Results.Bytes(kind.Picture(chart!, format, options), format.MediaType);
+    }
+
+    private static ChartOptions? WithoutParameters(IQueryCollection query, List<Fault> faults)
+    {
+        faults.AddRange(query.Keys.Select(name => new Fault("/" + ChartOptions.Shortened(name), "unknown-parameter", "A JSON answer takes no parameters in the address. Leave it out.")));
+        return null;
     }
 }

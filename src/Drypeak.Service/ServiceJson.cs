@@ -49,4 +49,5 @@ internal static class ServiceJson
 [JsonSerializable(typeof(RapidMethodRequest))]
 [JsonSerializable(typeof(RapidMethodAnswer))]
 [JsonSerializable(typeof(CompactionChart))]
+[JsonSerializable(typeof(PlotChart))]
 internal sealed partial class ContractsJson : JsonSerializerContext;

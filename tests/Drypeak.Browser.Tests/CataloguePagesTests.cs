@@ -51,6 +51,7 @@ public sealed class CataloguePagesTests(Browser browser)
         await using var visit = await browser.OpenAsync(1280, scripts);
         var page = visit.Page;
         await page.GotoAsync("/");
+        await page.Locator(".mast summary", new() { HasTextString = "Laboratory" }).ClickAsync();
         await page.GetByRole(AriaRole.Link, new() { Name = "Blank sheet" }).ClickAsync();
         await page.GetByLabel("Test method").SelectOptionAsync("astm-d698-c");
         await page.GetByLabel("Water contents aimed at").FillAsync("9,5 11,5 13,5");

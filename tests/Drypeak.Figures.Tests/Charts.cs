@@ -36,6 +36,18 @@ internal static class Charts
         NextSpecimen = 14.5,
     };
 
+    /// <summary>Field tests on the laboratory's curve, with the zone where they are accepted.</summary>
+    public static CompactionChart InTheField { get; } = Ternmarsh with
+    {
+        Statement = "2 of 4 field tests accepted",
+        FieldTests =
+        [
+            new(13.1, 1.790, "1+240", MarkRole.Met), new(14.6, 1.775, "1+260", MarkRole.Met),
+            new(11.4, 1.742, "1+280", MarkRole.NotMet), new(16.2, 1.741, "1+300", MarkRole.Undecided),
+        ],
+        Zone = new([new(12.1, 1.735), new(16.1, 1.735), new(16.1, 1.85), new(12.1, 1.95)], "accepted"),
+    };
+
     /// <summary>A test without a peak.</summary>
     public static CompactionChart WithoutOptimum { get; } = Ternmarsh with { Specimens = [.. Ternmarsh.Specimens.Take(3)], Curve = [], Optimum = null };
 
@@ -69,10 +81,19 @@ internal static class Charts
         from gravity in Gen.Double[2.5, 2.9].Nullable()
         from saturation in Gen.Double[30, 100].Array[0, 20]
         from airVoids in Gen.Double[0, 30].Array[0, 20]
-        select Chart(unit, optimumWater, density, spread, bent, noise, setAside, labels, reference, hasOptimum, hasAdopted, hasCorrected, hasNext, gravity, saturation, airVoids);
+        from fieldTests in Gen.Select(Gen.Double[-3, 3], Gen.Double[0.9, 1.02], Text, Gen.Int[0, 4].Select(i => ((MarkRole[])[MarkRole.Measured, MarkRole.SetAside, MarkRole.Met, MarkRole.NotMet, MarkRole.Undecided])[i])).Array[0, 12]
+        from zone in Text.Null()
+        select Chart(unit, optimumWater, density, spread, bent, noise, setAside, labels, reference, hasOptimum, hasAdopted, hasCorrected, hasNext, gravity, saturation, airVoids) is var chart && fieldTests.Length == 0 ? chart : InField(chart, optimumWater, new Density(density).In(unit), fieldTests, zone);
 
     public static IReadOnlyList<ChartPoint> Parabola(double optimum, double maximum, double bent, double from, double to) =>
         [.. Enumerable.Range(0, 61).Select(i => from + ((to - from) * i / 60)).Select(w => new ChartPoint(w, maximum - (bent * (w - optimum) * (w - optimum))))];
+
+    private static CompactionChart InField(CompactionChart chart, double water, double maximum, (double OffWater, double Share, string Label, MarkRole Outcome)[] tests, string? zone) => chart with
+    {
+        Statement = zone,
+        FieldTests = [.. tests.Select(test => new ChartFieldTest(Math.Max(0, water + test.OffWater), maximum * test.Share, test.Label, test.Outcome))],
+        Zone = zone is null ? null : new([new(water - 1, maximum * 0.95), new(water + 2, maximum * 0.95), new(water + 2, maximum * 1.5), new(water - 1, maximum * 1.5)], zone),
+    };
 
     private static CompactionChart Chart(
         DensityUnit unit, double water, double kilogramsPerCubicMeter, double spread, double bent, double[] noise, int[] setAside, string[] labels, string reference,

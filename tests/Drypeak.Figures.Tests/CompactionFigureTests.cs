@@ -165,6 +165,43 @@ public sealed class CompactionFigureTests
         }
     }
 
+    [Fact]
+    public void Field_tests_are_squares_of_their_own_with_label_and_outcome_and_stand_on_the_specimens_scale()
+    {
+        var picture = SvgPicture.Of(Charts.InTheField, FigureSize.Default);
+        Assert.Superset(new HashSet<string>(["1+240, met", "1+260, met", "1+280, not met", "1+300, undecided", "accepted", "2 of 4 field tests accepted"]), picture.Texts.ToHashSet());
+        Assert.Contains(picture.Texts, text => text.StartsWith("Maximum dry density 1.83 Mg/m³ at 14.1 % water", StringComparison.Ordinal));
+        Assert.Single(picture.OfClass("accepted"));
+
+        var tests = picture.OfClass("field-test").ToList();
+        Assert.Equal(
+            Charts.InTheField.FieldTests.Select(test => (test.WaterContent, test.DryDensity)),
+            tests.Select(test => (SvgPicture.Number(test, "data-x"), SvgPicture.Number(test, "data-y"))));
+        var marks = picture.OfClass("specimen").ToList();
+        foreach (var test in tests)
+        {
+            var corners = Places(test);
+            Assert.Equal(SvgPicture.Number(test, "data-x"), Unscaled(marks, "cx", "data-x", corners.Average(corner => corner[0])), 0.01);
+            Assert.Equal(SvgPicture.Number(test, "data-y"), Unscaled(marks, "cy", "data-y", corners.Average(corner => corner[1])), 0.001);
+        }
+    }
+
+    [Fact]
+    public void The_description_begins_with_the_statement_and_counts_the_outcomes()
+    {
+        var figure = CompactionFigure.Draw(Charts.InTheField, FigureSize.Default);
+        Assert.Equal("2 of 4 field tests accepted", figure.Title);
+        Assert.StartsWith("2 of 4 field tests accepted. Dry density against water content of 5 specimens: 9.8 to 17.3 % water, 1.71 to 1.83 Mg/m³. Field tests: 4 (2 met, 1 not met, 1 undecided). Zone: accepted. The maximum dry density is", figure.Description, StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void Field_tests_alone_say_nothing_of_a_curve()
+    {
+        var picture = SvgPicture.Of(Charts.InTheField with { Specimens = [], Curve = [], Optimum = null }, FigureSize.Default);
+        Assert.Equal(4, picture.OfClass("field-test").Count());
+        Assert.DoesNotContain(picture.Texts, text => text.Contains("optimum", StringComparison.OrdinalIgnoreCase));
+    }
+
     [Theory]
     [InlineData(239, 640)]
     [InlineData(960, 2401)]
@@ -179,6 +216,9 @@ public sealed class CompactionFigureTests
     {
         Assert.Null(CompactionFigure.Refusal(Charts.Full, FigureSize.Default));
         Refused(Charts.Full with { Specimens = [new(double.NaN, 1.8, null, false)] }, "A specimen's water content must be a number between −1e9 and 1e9, not NaN.");
+        Refused(Charts.Full with { FieldTests = [new(1, double.NaN, null, MarkRole.Met)] }, "A field test's dry density must be a number between −1e9 and 1e9, not NaN.");
+        Refused(Charts.Full with { FieldTests = [new(1, 1, null, MarkRole.Result)] }, "A field test is measured, set aside, met, not met or undecided, not a result.");
+        Refused(Charts.Full with { Zone = new([new(1, 1), new(2, 2)], null) }, "A zone must have three corners or more.");
         Refused(Charts.Full with { Curve = [new(12, double.PositiveInfinity)] }, "The curve's dry density must be a number between −1e9 and 1e9, not Infinity.");
         Refused(Charts.Full with { NextSpecimen = 1e10 }, "The next specimen's water content must be a number between −1e9 and 1e9, not 10000000000.");
         Refused(Charts.Ternmarsh with { Optimum = Charts.Ternmarsh.Optimum! with { WaterContentInterval = [13.6] } }, "An interval must have two ends.");
@@ -193,7 +233,7 @@ public sealed class CompactionFigureTests
     }
 
     private static List<double[]> Places(System.Xml.Linq.XElement path) =>
-        [.. path.Attribute("d")!.Value.Split(['M', 'L'], StringSplitOptions.RemoveEmptyEntries)
+        [.. path.Attribute("d")!.Value.Split(['M', 'L', 'Z'], StringSplitOptions.RemoveEmptyEntries)
             .Select(pair => pair.Split(' ').Select(number => double.Parse(number, System.Globalization.CultureInfo.InvariantCulture)).ToArray())];
 
     /// <summary>The number at a place, by the scale that the marks show.</summary>

@@ -2,6 +2,7 @@ using System.Globalization;
 using System.Text;
 using System.Xml.Linq;
 using SkiaSharp;
+using Xunit;
 
 namespace Drypeak.Figures.Tests;
 
@@ -29,6 +30,20 @@ internal sealed class SvgPicture
     public IEnumerable<string> Texts => All("text").Select(text => text.Value);
 
     public IEnumerable<TextBox> TextBoxes => All("text").Select(Box);
+
+    /// <summary>Texts are large enough, keep apart, and stay in the picture.</summary>
+    public void AssertReadable(FigureSize size)
+    {
+        var boxes = TextBoxes.ToList();
+        for (var i = 0; i < boxes.Count; i++)
+        {
+            var box = boxes[i];
+            Assert.True(box.Size >= 9, $"{box} is too small.");
+            Assert.True(box.Left >= 0 && box.Top >= 0 && box.Right <= size.Width && box.Bottom <= size.Height, $"{box} leaves {size}.");
+            var other = boxes.Skip(i + 1).FirstOrDefault(box.Overlaps);
+            Assert.True(other is null, $"{box} overlaps {other}.");
+        }
+    }
 
     public static double Number(XElement element, string attribute) => double.Parse(element.Attribute(attribute)!.Value, CultureInfo.InvariantCulture);
 

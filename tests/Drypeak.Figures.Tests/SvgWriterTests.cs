@@ -83,6 +83,7 @@ public sealed partial class SvgWriterTests
         ["print-french-error-bars"] = (
             Charts.Ternmarsh with { Specimens = [.. Charts.Ternmarsh.Specimens.Select(specimen => specimen with { WaterContentPlusMinus = 0.2, DryDensityPlusMinus = 0.012 })] },
             new FigureOptions { Theme = Theme.Print, Language = Language.All.Single(language => language.Code == "fr") }),
+        ["field-tests"] = (Charts.InTheField, new FigureOptions()),
         ["without-optimum-own-title-no-lines"] = (Charts.WithoutOptimum, new FigureOptions { Title = "Ternmarsh, borrow area 7", Lines = [] }),
     };
 

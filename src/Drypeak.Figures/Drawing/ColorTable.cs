@@ -6,7 +6,7 @@ namespace Drypeak.Figures.Drawing;
 /// </summary>
 internal sealed class ColorTable
 {
-    private const int Steps = 51;
+    private const int Steps = 42;
 
     private readonly Dictionary<uint, byte> _nearest = [];
 

@@ -50,6 +50,43 @@ internal readonly record struct Area(double Left, double Top, double Right, doub
             return enters <= leaves;
         }
     }
+
+    /// <summary>
+    /// The part of a closed area that lies within, as corners; fewer than three where nothing does. Each side in turn cuts the corners
+    /// (Sutherland and Hodgman, Reentrant polygon clipping, Commun. ACM 17 (1974) 32–42).
+    /// </summary>
+    public IReadOnlyList<Place> Clip(IReadOnlyList<Place> corners)
+    {
+        var (left, top, right, bottom) = (Left, Top, Right, Bottom);
+        IReadOnlyList<Place> within = corners;
+        foreach (var room in (Func<Place, double>[])[place => place.X - left, place => right - place.X, place => place.Y - top, place => bottom - place.Y])
+        {
+            within = Cut(within, room);
+        }
+
+        return within;
+
+        static List<Place> Cut(IReadOnlyList<Place> corners, Func<Place, double> room)
+        {
+            var kept = new List<Place>(corners.Count + 2);
+            for (var i = 0; i < corners.Count; i++)
+            {
+                var (from, to) = (corners[i], corners[(i + 1) % corners.Count]);
+                var (before, after) = (room(from), room(to));
+                if (before >= 0)
+                {
+                    kept.Add(from);
+                }
+
+                if (before >= 0 != after >= 0)
+                {
+                    kept.Add(from.Toward(to, before / (before - after)));
+                }
+            }
+
+            return kept;
+        }
+    }
 }
 
 /// <summary>A rectangle turned about a place.</summary>

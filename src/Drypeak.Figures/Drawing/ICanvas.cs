@@ -15,6 +15,9 @@ internal interface ICanvas
     /// <summary>Draws a disc or a ring.</summary>
     void Draw(Disc disc);
 
+    /// <summary>Draws a closed area.</summary>
+    void Draw(Polygon polygon);
+
     /// <summary>Draws a line of text.</summary>
     void Draw(TextRun text);
 }

@@ -13,8 +13,10 @@ public enum ColorRole
     Rule,
     /// <summary>The fitted curve.</summary>
     Water,
-    /// <summary>The optimum.</summary>
+    /// <summary>The result; what is not met.</summary>
     Clay,
+    /// <summary>What is met, what is accepted.</summary>
+    Moss,
 }
 
 /// <summary>A color of the sRGB space.</summary>
@@ -44,16 +46,17 @@ public readonly record struct Color(byte Red, byte Green, byte Blue)
 }
 
 /// <summary>The colors of the roles. Immutable, safe on any thread.</summary>
-public sealed record Palette(Color Paper, Color Ink, Color Quiet, Color Rule, Color Water, Color Clay)
+public sealed record Palette(Color Paper, Color Ink, Color Quiet, Color Rule, Color Water, Color Clay, Color Moss)
 {
-    /// <summary>Ink on paper, one color for water and one for clay.</summary>
+    /// <summary>Ink on paper, one color for water, one for clay, one for moss.</summary>
     public static Palette Light { get; } = new(
         Paper: new(0xFC, 0xFB, 0xF8),
         Ink: new(0x1F, 0x1D, 0x1A),
         Quiet: new(0x5A, 0x55, 0x4C),
         Rule: new(0xCF, 0xC8, 0xBA),
         Water: new(0x0B, 0x5B, 0x73),
-        Clay: new(0xA3, 0x43, 0x1B));
+        Clay: new(0xA3, 0x43, 0x1B),
+        Moss: new(0x2E, 0x63, 0x36));
 
     /// <summary>The same roles on a dark ground.</summary>
     public static Palette Dark { get; } = new(
@@ -62,10 +65,11 @@ public sealed record Palette(Color Paper, Color Ink, Color Quiet, Color Rule, Co
         Quiet: new(0xB4, 0xAC, 0x9E),
         Rule: new(0x47, 0x42, 0x3A),
         Water: new(0x6C, 0xC3, 0xDC),
-        Clay: new(0xF0, 0x94, 0x6A));
+        Clay: new(0xF0, 0x94, 0x6A),
+        Moss: new(0x86, 0xC9, 0x8F));
 
     /// <summary>Every role black, the ground white.</summary>
-    public static Palette BlackOnWhite { get; } = new(Paper: new(255, 255, 255), Ink: Black, Quiet: Black, Rule: Black, Water: Black, Clay: Black);
+    public static Palette BlackOnWhite { get; } = new(Paper: new(255, 255, 255), Ink: Black, Quiet: Black, Rule: Black, Water: Black, Clay: Black, Moss: Black);
 
     private static Color Black => new(0, 0, 0);
 
@@ -78,6 +82,7 @@ public sealed record Palette(Color Paper, Color Ink, Color Quiet, Color Rule, Co
         ColorRole.Rule => Rule,
         ColorRole.Water => Water,
         ColorRole.Clay => Clay,
+        ColorRole.Moss => Moss,
         _ => throw new ArgumentOutOfRangeException(nameof(role)),
     };
 }

@@ -12,6 +12,11 @@ public readonly record struct Place(double X, double Y)
     internal double To(Place other) => Math.Sqrt(((other.X - X) * (other.X - X)) + ((other.Y - Y) * (other.Y - Y)));
 }
 
+/// <summary>Two numbers of the data, in the units of the axes.</summary>
+/// <param name="X">Along the axis to the right.</param>
+/// <param name="Y">Along the axis upward.</param>
+public readonly record struct DataPoint(double X, double Y);
+
 /// <summary>How a line is drawn.</summary>
 /// <param name="Color">Role of its color.</param>
 /// <param name="Width">px.</param>
@@ -33,11 +38,14 @@ public enum TextAnchor
     End,
 }
 
-/// <summary>A shape with its place and its looks: one of lines, a disc, a text.</summary>
+/// <summary>A shape with its place and its looks: one of lines, a disc, an area, a text.</summary>
 public abstract record Shape
 {
     /// <summary>Class of this shape within its part, in SVG; null for none.</summary>
     public string? Name { get; init; }
+
+    /// <summary>The numbers that the shape stands for, or null.</summary>
+    public DataPoint? Data { get; init; }
 
     /// <summary>Draws the shape by the canvas's primitive for it.</summary>
     internal abstract void DrawOn(ICanvas canvas);
@@ -56,8 +64,17 @@ public sealed record Lines(IReadOnlyList<IReadOnlyList<Place>> Runs, Stroke Stro
 /// <param name="Radius">px, to the middle of the stroke.</param>
 /// <param name="Fill">Role of its fill; null for none.</param>
 /// <param name="Stroke">Its edge; null for none.</param>
-/// <param name="Data">The numbers that it stands for, or null.</param>
-public sealed record Disc(Place Center, double Radius, ColorRole? Fill, Stroke? Stroke, ChartPoint? Data) : Shape
+public sealed record Disc(Place Center, double Radius, ColorRole? Fill, Stroke? Stroke) : Shape
+{
+    internal override void DrawOn(ICanvas canvas) => canvas.Draw(this);
+}
+
+/// <summary>A closed area.</summary>
+/// <param name="Corners">Its corners in turn, three or more.</param>
+/// <param name="Fill">Role of its fill; null for none.</param>
+/// <param name="Opacity">Of the fill: over 0, up to 1.</param>
+/// <param name="Edge">Its edge; null for none.</param>
+public sealed record Polygon(IReadOnlyList<Place> Corners, ColorRole? Fill, double Opacity, Stroke? Edge) : Shape
 {
     internal override void DrawOn(ICanvas canvas) => canvas.Draw(this);
 }

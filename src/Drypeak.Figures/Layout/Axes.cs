@@ -3,30 +3,30 @@ using Drypeak.Figures.Drawing;
 namespace Drypeak.Figures.Layout;
 
 /// <summary>The two axes: their lines, ticks, labels and titles, and the hairlines that lead from the ticks through the plot.</summary>
-internal sealed class Axes(Plot plot, Wording wording, FigureSize size, TypeScale type, Theme theme)
+internal sealed class Axes(Plot plot, AxisWords words, FigureSize size, TypeScale type, Theme theme)
 {
-    /// <summary>From the baseline of the density axis's title to the plot, in sizes of its text.</summary>
+    /// <summary>From the baseline of the upper axis title to the plot, in sizes of its text.</summary>
     private const double TitleAboveAxis = 1.2;
 
-    /// <summary>From the axis of water content down to the baseline of its labels, px.</summary>
+    /// <summary>From the axis to the right down to the baseline of its labels, px.</summary>
     public static double LabelBaseline(TypeScale type) => type.TickLength + (1.15 * type.Label);
 
-    /// <summary>From the labels of the density axis to the axis, px.</summary>
+    /// <summary>From the labels of the axis upward to the axis, px.</summary>
     public static double LabelGap(TypeScale type) => type.TickLength + (0.45 * type.Label);
 
-    /// <summary>From the heading to the plot: the title of the density axis, clear of that axis's topmost label, px.</summary>
+    /// <summary>From the heading to the plot: the title of the axis upward, clear of that axis's topmost label, px.</summary>
     public static double HeightAbove(TypeScale type) => (0.5 + EmbeddedFont.Regular.Ascent + TitleAboveAxis) * type.AxisTitle;
 
-    /// <summary>From the plot to the lower edge: the labels of water content, then the title of their axis, px.</summary>
+    /// <summary>From the plot to the lower edge: the labels of the axis to the right, then its title, px.</summary>
     public static double HeightBelow(TypeScale type) =>
-        LabelBaseline(type) + (EmbeddedFont.SemiBold.Descent * type.Value) + (EmbeddedFont.Regular.Ascent * type.AxisTitle) + WaterTitleDepth(type);
+        LabelBaseline(type) + (EmbeddedFont.SemiBold.Descent * type.Value) + (EmbeddedFont.Regular.Ascent * type.AxisTitle) + XTitleDepth(type);
 
     public FigurePart Grid() => new("grid",
     [
         new Lines(
             [
-                .. plot.WaterTicks.Values.Select(plot.Water.At).Select(Crisp).Where(x => x > plot.Area.Left).Select(x => Segment(x, plot.Area.Top, x, plot.Area.Bottom)),
-                .. plot.DensityTicks.Values.Select(plot.Density.At).Select(Crisp).Where(y => y < plot.Area.Bottom).Select(y => Segment(plot.Area.Left, y, plot.Area.Right, y)),
+                .. Lined(plot.XTicks).Select(plot.X.At).Select(Crisp).Where(x => x > plot.Area.Left).Select(x => Segment(x, plot.Area.Top, x, plot.Area.Bottom)),
+                .. Lined(plot.YTicks).Select(plot.Y.At).Select(Crisp).Where(y => y < plot.Area.Bottom).Select(y => Segment(plot.Area.Left, y, plot.Area.Right, y)),
             ],
             new Stroke(ColorRole.Rule, theme.GridWidth)),
     ]);
@@ -39,10 +39,10 @@ internal sealed class Axes(Plot plot, Wording wording, FigureSize size, TypeScal
             new Lines(
                 [
                     [new(left, plot.Area.Top), new(left, bottom), new(plot.Area.Right, bottom)],
-                    .. plot.WaterTicks.Values.Select(plot.Water.At).Select(Crisp).Select(x => Segment(x, bottom, x, bottom + length)),
-                    .. plot.WaterTicks.Halves.Select(plot.Water.At).Select(Crisp).Select(x => Segment(x, bottom, x, bottom + (length / 2))),
-                    .. plot.DensityTicks.Values.Select(plot.Density.At).Select(Crisp).Select(y => Segment(left - length, y, left, y)),
-                    .. plot.DensityTicks.Halves.Select(plot.Density.At).Select(Crisp).Select(y => Segment(left - (length / 2), y, left, y)),
+                    .. plot.XTicks.Values.Select(plot.X.At).Select(Crisp).Select(x => Segment(x, bottom, x, bottom + length)),
+                    .. plot.XTicks.Halves.Select(plot.X.At).Select(Crisp).Select(x => Segment(x, bottom, x, bottom + (length / 2))),
+                    .. plot.YTicks.Values.Select(plot.Y.At).Select(Crisp).Select(y => Segment(left - length, y, left, y)),
+                    .. plot.YTicks.Halves.Select(plot.Y.At).Select(Crisp).Select(y => Segment(left - (length / 2), y, left, y)),
                     .. SecondAxis(),
                 ],
                 new Stroke(ColorRole.Ink, 1)),
@@ -58,7 +58,7 @@ internal sealed class Axes(Plot plot, Wording wording, FigureSize size, TypeScal
 
         var right = plot.Area.Right;
         IEnumerable<Place[]> Marks(IEnumerable<double> values, double length) =>
-            values.Select(second.InFirst).Select(plot.Density.At).Select(Crisp).Select(y => Segment(right, y, right + length, y));
+            values.Select(second.InFirst).Select(plot.Y.At).Select(Crisp).Select(y => Segment(right, y, right + length, y));
         return [Segment(right, plot.Area.Bottom, right, plot.Area.Top), .. Marks(second.Ticks.Values, type.TickLength), .. Marks(second.Ticks.Halves, type.TickLength / 2)];
     }
 
@@ -69,56 +69,52 @@ internal sealed class Axes(Plot plot, Wording wording, FigureSize size, TypeScal
     public void Label(LabelSpace space)
     {
         space.PlaceEach(Titles());
-        if (wording.Result is { } result)
-        {
-            space.PlaceEach([WaterValue(result), DensityValue(result)]);
-        }
-
+        space.PlaceEach(Values());
         space.PlaceEach(TickLabels());
         space.PlaceEach(SecondTickLabels());
     }
 
-    /// <summary>The titles: over the density axis, where it is read without turning one's head, and under the axis of water content.</summary>
+    /// <summary>The titles: over the axis upward, where it is read without turning one's head, and under the axis to the right.</summary>
     private IEnumerable<TextRun> Titles()
     {
-        yield return Title(wording.DensityAxis, new Place(type.Margin, plot.Area.Top - (TitleAboveAxis * type.AxisTitle)), TextAnchor.Start);
-        if (wording.SecondAxis is { } second)
+        yield return Title(words.Y, new Place(type.Margin, plot.Area.Top - (TitleAboveAxis * type.AxisTitle)), TextAnchor.Start);
+        if (words.Second is { } second)
         {
             yield return Title(second, new Place(size.Width - type.Margin, plot.Area.Top - (TitleAboveAxis * type.AxisTitle)), TextAnchor.End);
         }
 
-        yield return Title(wording.WaterAxis, new Place(plot.Area.Right, size.Height - WaterTitleDepth(type)), TextAnchor.End);
+        yield return Title(words.X, new Place(plot.Area.Right, size.Height - plot.Below - XTitleDepth(type)), TextAnchor.End);
     }
 
-    /// <summary>A value of the result under the axis of water content.</summary>
-    private TextRun WaterValue(ChartOptimum optimum)
+    /// <summary>The values of the result: under the one axis, and left of the other.</summary>
+    private IEnumerable<TextRun> Values()
     {
-        var text = wording.BareWater(optimum);
-        var half = EmbeddedFont.SemiBold.Measure(text, type.Value) / 2;
-        var x = Math.Min(plot.Water.At(optimum.WaterContent), size.Width - half - 1);
-        return new TextRun(text, new Place(x, plot.Area.Bottom + LabelBaseline(type)), type.Value, EmbeddedFont.SemiBold, ColorRole.Clay, TextAnchor.Middle);
-    }
-
-    /// <summary>A value of the result left of the density axis.</summary>
-    private TextRun DensityValue(ChartOptimum optimum)
-    {
-        var place = new Place(plot.Area.Left - LabelGap(type), plot.Density.At(optimum.MaximumDryDensity) + (0.33 * type.Value));
-        return new TextRun(wording.BareDensity(optimum), place, type.Value, EmbeddedFont.SemiBold, ColorRole.Clay, TextAnchor.End);
-    }
-
-    /// <summary>The labels of the ticks, those of water content first.</summary>
-    private IEnumerable<TextRun> TickLabels()
-    {
-        foreach (var value in plot.WaterTicks.Values)
+        if (words.XValue is { } right)
         {
-            var place = new Place(plot.Water.At(value), plot.Area.Bottom + LabelBaseline(type));
-            yield return TickLabel(wording.Number(plot.WaterTicks.Label(value)), place, TextAnchor.Middle);
+            var half = EmbeddedFont.SemiBold.Measure(right.Text, type.Value) / 2;
+            var x = Math.Min(plot.X.At(right.At), size.Width - half - 1);
+            yield return Value(right.Text, new Place(x, plot.Area.Bottom + LabelBaseline(type)), TextAnchor.Middle);
         }
 
-        foreach (var value in plot.DensityTicks.Values)
+        if (words.YValue is { } up)
         {
-            var place = new Place(plot.Area.Left - LabelGap(type), plot.Density.At(value) + (0.33 * type.Label));
-            yield return TickLabel(wording.Number(plot.DensityTicks.Label(value)), place, TextAnchor.End);
+            yield return Value(up.Text, new Place(plot.Area.Left - LabelGap(type), plot.Y.At(up.At) + (0.33 * type.Value)), TextAnchor.End);
+        }
+    }
+
+    /// <summary>The labels of the ticks, those of the axis to the right first.</summary>
+    private IEnumerable<TextRun> TickLabels()
+    {
+        foreach (var value in plot.XTicks.Values)
+        {
+            var place = new Place(plot.X.At(value), plot.Area.Bottom + LabelBaseline(type));
+            yield return TickLabel(words.Number(plot.XTicks.Label(value)), place, TextAnchor.Middle);
+        }
+
+        foreach (var value in plot.YTicks.Values)
+        {
+            var place = new Place(plot.Area.Left - LabelGap(type), plot.Y.At(value) + (0.33 * type.Label));
+            yield return TickLabel(words.Number(plot.YTicks.Label(value)), place, TextAnchor.End);
         }
     }
 
@@ -126,16 +122,21 @@ internal sealed class Axes(Plot plot, Wording wording, FigureSize size, TypeScal
     {
         foreach (var value in plot.Second?.Ticks.Values ?? [])
         {
-            var place = new Place(plot.Area.Right + LabelGap(type), plot.Density.At(plot.Second!.InFirst(value)) + (0.33 * type.Label));
-            yield return TickLabel(wording.Number(plot.Second.Ticks.Label(value)), place, TextAnchor.Start);
+            var place = new Place(plot.Area.Right + LabelGap(type), plot.Y.At(plot.Second!.InFirst(value)) + (0.33 * type.Label));
+            yield return TickLabel(words.Number(plot.Second.Ticks.Label(value)), place, TextAnchor.Start);
         }
     }
 
-    private static double WaterTitleDepth(TypeScale type) => (0.5 * type.Margin) + (EmbeddedFont.Regular.Descent * type.AxisTitle);
+    /// <summary>From the baseline of the title of the axis to the right to the lower edge, or to the key, px.</summary>
+    public static double XTitleDepth(TypeScale type) => (0.5 * type.Margin) + (EmbeddedFont.Regular.Descent * type.AxisTitle);
 
     private TextRun Title(string text, Place at, TextAnchor anchor) => new(text, at, type.AxisTitle, EmbeddedFont.Regular, ColorRole.Ink, anchor);
 
+    private TextRun Value(string text, Place at, TextAnchor anchor) => new(text, at, type.Value, EmbeddedFont.SemiBold, ColorRole.Clay, anchor);
+
     private TextRun TickLabel(string text, Place at, TextAnchor anchor) => new(text, at, type.Label, EmbeddedFont.Regular, ColorRole.Quiet, anchor);
+
+    private static IEnumerable<double> Lined(IAxisTicks ticks) => ticks.HasGrid ? ticks.Values : [];
 
     private static Place[] Segment(double fromX, double fromY, double toX, double toY) => [new(fromX, fromY), new(toX, toY)];
 

@@ -2,7 +2,7 @@ using Drypeak.Figures.Drawing;
 
 namespace Drypeak.Figures.Layout;
 
-/// <summary>The lines over the plot: the result, then the test's name and the intervals of the result.</summary>
+/// <summary>The lines over the plot: the title, then what is said more quietly.</summary>
 /// <param name="Runs">The lines as texts with their places.</param>
 /// <param name="Bottom">Where the heading ends, px from the top.</param>
 internal sealed record Heading(IReadOnlyList<TextRun> Runs, double Bottom)
@@ -13,19 +13,19 @@ internal sealed record Heading(IReadOnlyList<TextRun> Runs, double Bottom)
     /// <summary>Below this height a picture has room for one line under the title, px.</summary>
     private const int TallEnoughForTwo = 420;
 
-    public static Heading Lay(Wording wording, FigureSize size, TypeScale type)
+    public static Heading Lay(HeadingWords words, FigureSize size, TypeScale type)
     {
         var width = size.Width - (2 * type.Margin);
         var runs = new List<TextRun>();
         var top = type.Margin * 0.6;
 
-        var (lines, titleSize) = Title(wording, width, type);
+        var (lines, titleSize) = Title(words, width, type);
         foreach (var line in lines)
         {
             Add(line, titleSize, EmbeddedFont.SemiBold, ColorRole.Ink);
         }
 
-        foreach (var line in Subtitles(wording, width, size, type))
+        foreach (var line in Subtitles(words, width, size, type))
         {
             Add(line, type.Subtitle, EmbeddedFont.Regular, ColorRole.Quiet);
         }
@@ -40,46 +40,38 @@ internal sealed record Heading(IReadOnlyList<TextRun> Runs, double Bottom)
     }
 
     /// <summary>One line if it fits with little shrinking, else two, as large as they fit; a text too long even so is elided.</summary>
-    private static (IReadOnlyList<string> Lines, double Size) Title(Wording wording, double width, TypeScale type)
+    private static (IReadOnlyList<string> Lines, double Size) Title(HeadingWords words, double width, TypeScale type)
     {
         const double step = 0.5;
-        if (wording.OwnTitle is { } own)
+        var least = Math.Max(type.Title * 0.8, TypeScale.LeastText);
+        var size = type.Title;
+        while (size > least && !Fits(words.Title, size))
         {
-            var largest = type.Title;
-            while (largest > type.Title * 0.8 && largest > TypeScale.LeastText && !Fits(own, largest))
-            {
-                largest -= step;
-            }
-
-            return ([PlainText.Elide(own, EmbeddedFont.SemiBold, largest, width)], largest);
+            size = Math.Max(least, size - step);
         }
 
-        var headline = wording.Headline;
-        for (var size = type.Title; size >= Math.Max(type.Title * 0.8, TypeScale.LeastText); size -= step)
+        if (words.Halves is not { } halves || Fits(words.Title, size))
         {
-            if (Fits(wording.Title, size))
-            {
-                return ([wording.Title], size);
-            }
+            return ([PlainText.Elide(words.Title, EmbeddedFont.SemiBold, size, width)], size);
         }
 
-        for (var size = type.Title; size >= TypeScale.LeastText; size -= step)
+        for (size = type.Title; size >= TypeScale.LeastText; size -= step)
         {
-            if (Fits(headline.First, size) && Fits(headline.Second, size))
+            if (Fits(halves.First, size) && Fits(halves.Second, size))
             {
-                return ([headline.First, headline.Second], size);
+                return ([halves.First, halves.Second], size);
             }
         }
 
         string Short(string text) => PlainText.Elide(text, EmbeddedFont.SemiBold, TypeScale.LeastText, width);
-        return ([Short(headline.First), Short(headline.Second)], TypeScale.LeastText);
+        return ([Short(halves.First), Short(halves.Second)], TypeScale.LeastText);
 
         bool Fits(string text, double size) => EmbeddedFont.SemiBold.Measure(text, size) <= width;
     }
 
-    private static IEnumerable<string> Subtitles(Wording wording, double width, FigureSize size, TypeScale type)
+    private static IEnumerable<string> Subtitles(HeadingWords words, double width, FigureSize size, TypeScale type)
     {
-        var lines = new[] { Joined([wording.OwnTitle is null ? "" : wording.ResultLine, wording.Reference]), Joined([wording.Intervals, wording.Bars]) }.Where(line => line.Length > 0).ToList();
+        var lines = words.Subtitles.Select(Joined).Where(line => line.Length > 0).ToList();
         var joined = Joined(lines);
         if (lines.Count == 2 && Fits(joined))
         {

@@ -28,7 +28,7 @@ internal sealed class LabelSpace(Area picture)
     private readonly List<TextRun> _placed = [];
     private readonly List<Area> _taken = [];
     private readonly List<(Barriers Kind, Place From, Place To, Area Around, object? Owner)> _segments = [];
-    private readonly List<(Place Center, double Radius)> _discs = [];
+    private readonly MarksByCell _marks = new();
 
     /// <summary>The labels placed so far.</summary>
     public IReadOnlyList<TextRun> Placed => _placed;
@@ -43,7 +43,7 @@ internal sealed class LabelSpace(Area picture)
     }
 
     /// <summary>Keeps labels off a mark.</summary>
-    public void BlockMark(Place center, double radius) => _discs.Add((center, radius));
+    public void BlockMark(Place center, double radius) => _marks.Add(center, radius);
 
     /// <summary>Places the first of the candidates that is free.</summary>
     /// <param name="candidates">The label at its possible places, the best first.</param>
@@ -99,7 +99,7 @@ internal sealed class LabelSpace(Area picture)
                 && (owner is null || !ReferenceEquals(segment.Owner, owner))
                 && near.Overlaps(segment.Around)
                 && letters.Meets(segment.From, segment.To))
-            && !(barriers.HasFlag(Barriers.Marks) && _discs.Exists(disc => letters.MeetsDisc(disc.Center, disc.Radius)));
+            && !(barriers.HasFlag(Barriers.Marks) && _marks.Meet(letters));
     }
 
     private static Area Around(Place from, Place to) =>

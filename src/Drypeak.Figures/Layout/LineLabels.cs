@@ -8,14 +8,20 @@ internal static class LineLabels
     /// <summary>How far a line may bend away from the straight label on it, em.</summary>
     private const double LargestBend = 0.15;
 
-    /// <summary>Draws a line with its label where there is a free place along it, or whole.</summary>
-    public static IReadOnlyList<IReadOnlyList<Place>> Place(PhaseLine line, Course course, double size, ColorRole color, LabelSpace space)
+    /// <summary>Parts a line for its label where there is a free place along it; null where there is none.</summary>
+    /// <param name="labels">The label, the fullest wording first.</param>
+    /// <param name="owner">The owner of the line's own segments in <paramref name="space"/>.</param>
+    /// <param name="course">The line.</param>
+    /// <param name="size">Of the label, px.</param>
+    /// <param name="color">Of the label.</param>
+    /// <param name="space">The room that is left.</param>
+    public static IReadOnlyList<IReadOnlyList<Place>>? Place(IReadOnlyList<string> labels, object owner, Course course, double size, ColorRole color, LabelSpace space)
     {
-        var candidates = line.Labels.SelectMany(text => Candidates(text, course, size, color)).ToList();
-        var placed = space.Place(candidates.Select(candidate => candidate.Text), Barriers.All, line);
+        var candidates = labels.SelectMany(text => Candidates(text, course, size, color)).ToList();
+        var placed = space.Place(candidates.Select(candidate => candidate.Text), Barriers.All, owner);
         if (placed is null)
         {
-            return [course.Whole()];
+            return null;
         }
 
         var at = candidates.Find(candidate => ReferenceEquals(candidate.Text, placed)).At;

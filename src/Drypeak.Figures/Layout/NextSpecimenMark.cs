@@ -12,7 +12,7 @@ internal static class NextSpecimenMark
             return new FigurePart("next-specimen", []);
         }
 
-        var foot = new Place(plot.Water.At(percent), plot.Area.Bottom);
+        var foot = new Place(plot.X.At(percent), plot.Area.Bottom);
         var top = foot with { Y = foot.Y - (2 * type.TickLength) };
         space.Block(Barriers.Marks, [foot, top]);
         space.PlaceFullest(wording.Next(percent).Select(text => MarkLabels

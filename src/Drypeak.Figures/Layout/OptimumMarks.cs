@@ -92,13 +92,13 @@ internal sealed class OptimumMarks(CompactionChart chart, Wording wording, Plot 
     {
         if (result.WaterContentInterval is [var driest, var wettest])
         {
-            var (from, to) = (plot.Water.At(plot.Water.Range.Clamp(driest)), plot.Water.At(plot.Water.Range.Clamp(wettest)));
+            var (from, to) = (plot.X.At(plot.X.Range.Clamp(driest)), plot.X.At(plot.X.Range.Clamp(wettest)));
             yield return [new(from, plot.Area.Bottom), new(to, plot.Area.Bottom)];
         }
 
         if (result.MaximumDryDensityInterval is [var lowest, var highest])
         {
-            var (from, to) = (plot.Density.At(plot.Density.Range.Clamp(lowest)), plot.Density.At(plot.Density.Range.Clamp(highest)));
+            var (from, to) = (plot.Y.At(plot.Y.Range.Clamp(lowest)), plot.Y.At(plot.Y.Range.Clamp(highest)));
             yield return [new(plot.Area.Left, from), new(plot.Area.Left, to)];
         }
     }

@@ -17,13 +17,13 @@ internal sealed class PhaseLineMarks(PhaseLines lines, Plot plot, TypeScale type
     private Lines DrawLabeled(PhaseLine line, Course course, LabelSpace space)
     {
         var stroke = line.Stroke(type, theme);
-        return new Lines(LineLabels.Place(line, course, type.Label, stroke.Color, space), stroke) { Name = line.Name };
+        return new Lines(LineLabels.Place(line.Labels, line, course, type.Label, stroke.Color, space) ?? [course.Whole()], stroke) { Name = line.Name };
     }
 
     /// <summary>Over the axis of water content, from 0 on. Density falls as water rises, so a line comes into the plot once or not at all.</summary>
     private static List<Course> Courses(PhaseLine line, Plot plot)
     {
-        var range = plot.Water.Range;
+        var range = plot.X.Range;
         var from = Math.Max(0, range.From);
         return from >= range.To ? [] : Course.Clipped(
             [.. Enumerable.Range(0, Samples + 1)

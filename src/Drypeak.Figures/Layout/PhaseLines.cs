@@ -28,7 +28,7 @@ internal sealed record PhaseLine(PhaseLineKind Kind, double Percent, Phrases Phr
 
     public Stroke Stroke(TypeScale type, Theme theme) => Kind switch
     {
-        PhaseLineKind.ZeroAirVoids => new(ColorRole.Ink, 1.25 * type.Unit, type.Dash(theme.ZeroAirVoidsDash)),
+        PhaseLineKind.ZeroAirVoids => new(ColorRole.Ink, 1.25 * type.Unit, type.Dash(theme.ReferenceDash)),
         PhaseLineKind.Saturation => new(ColorRole.Quiet, type.Unit, type.Dash([7, 4])),
         PhaseLineKind.AirVoids => new(ColorRole.Quiet, type.Unit, type.Dash([1.5, 3.5])),
         _ => throw new InvalidOperationException(),

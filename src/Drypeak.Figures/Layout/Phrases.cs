@@ -53,6 +53,9 @@ internal sealed record Phrases
     /// <summary>Of a specimen that is not fitted.</summary>
     public required string SetAside { get; init; }
 
+    /// <summary>What a field test came to.</summary>
+    public required (string Met, string NotMet, string Undecided) Outcomes { get; init; }
+
     /// <summary>At the next specimen's place, in full and in brief.</summary>
     public required (string Full, string Brief) Next { get; init; }
 
@@ -90,6 +93,8 @@ internal sealed record Phrases
     /// <param name="Bars">What the bars are.</param>
     /// <param name="Lines">{0} the lines' names.</param>
     /// <param name="Next">{0} a water content.</param>
+    /// <param name="FieldTests">{0} how many, {1} each outcome with how many have it; empty where none was judged.</param>
+    /// <param name="Zone">{0} the zone's name.</param>
     public sealed record Description(
-        string NoSpecimens, string Specimens, string One, string Many, string ManySetAside, string NoResult, string Result, string Fitted, string Corrected, string Bars, string Lines, string Next);
+        string NoSpecimens, string Specimens, string One, string Many, string ManySetAside, string NoResult, string Result, string Fitted, string Corrected, string Bars, string Lines, string Next, string FieldTests, string Zone);
 }

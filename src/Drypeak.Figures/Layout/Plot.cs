@@ -5,72 +5,101 @@ namespace Drypeak.Figures.Layout;
 /// <summary>The rectangle between the axes, and where numbers stand in it.</summary>
 internal sealed class Plot
 {
-    private const double LeastDensityTickDistance = 44;
-    private const double LeastWaterTickDistance = 80;
+    private const double LeastTickDistanceUpward = 44;
+    private const double LeastTickDistanceToTheRight = 80;
 
     /// <summary>More ticks than this do not make a value easier to read.</summary>
     private const double MostTicks = 12;
 
-    private Plot(Area area, View view, Ticks waterTicks, Ticks densityTicks, SecondScale? second)
+    private Plot(Area area, double below, View view, IAxisTicks xTicks, IAxisTicks yTicks, SecondScale? second)
     {
         Area = area;
-        Water = new LinearScale(view.WaterContent, area.Left, area.Right);
-        Density = new LinearScale(view.DryDensity, area.Bottom, area.Top);
-        WaterTicks = waterTicks;
-        DensityTicks = densityTicks;
+        Below = below;
+        X = new LinearScale(view.X, area.Left, area.Right);
+        Y = new LinearScale(view.Y, area.Bottom, area.Top);
+        XTicks = xTicks;
+        YTicks = yTicks;
         Second = second;
     }
 
     public Area Area { get; }
 
-    public LinearScale Water { get; }
+    /// <summary>px under the titles of the axes that are kept for the key.</summary>
+    public double Below { get; }
 
-    public LinearScale Density { get; }
+    public LinearScale X { get; }
 
-    public Ticks WaterTicks { get; }
+    public LinearScale Y { get; }
 
-    public Ticks DensityTicks { get; }
+    public IAxisTicks XTicks { get; }
 
-    /// <summary>The density once more in another unit, or null.</summary>
+    public IAxisTicks YTicks { get; }
+
+    /// <summary>The axis upward once more in another unit, or null.</summary>
     public SecondScale? Second { get; }
 
-    public Place At(ChartPoint point) => new(Water.At(point.WaterContent), Density.At(point.DryDensity));
+    public Place At(DataPoint point) => new(X.At(point.X), Y.At(point.Y));
+
+    public Place At(ChartPoint point) => At(point.Data);
+
+    public Place At(PlotPoint point) => At(new DataPoint(point.X, point.Y));
 
     /// <summary>The rectangle that the heading, the ticks and the titles of the axes leave.</summary>
     /// <param name="view">The ranges.</param>
     /// <param name="headingBottom">px from the top.</param>
-    /// <param name="wording">For the value of the result, which stands among the labels of the density axis.</param>
+    /// <param name="below">px that the key takes under the titles of the axes.</param>
+    /// <param name="words">For the width of the labels.</param>
     /// <param name="size">The picture's size.</param>
     /// <param name="type">Sizes of text and marks.</param>
-    public static Plot Lay(View view, double headingBottom, Wording wording, FigureSize size, TypeScale type)
+    public static Plot Lay(View view, double headingBottom, double below, AxisWords words, FigureSize size, TypeScale type)
     {
-        var top = headingBottom + Axes.HeightAbove(type);
-        var bottom = size.Height - Axes.HeightBelow(type);
-        var mostTicks = Math.Clamp((bottom - top) / (LeastDensityTickDistance * type.Unit), 1, MostTicks);
-        var densityTicks = Ticks.Within(view.DryDensity, mostTicks);
-        var second = wording.SecondUnitRatio is { } ratio ? SecondScale.Of(view.DryDensity, ratio, mostTicks) : null;
+        var plot = LayAsIs(view, headingBottom, below, words, size, type);
+        if (!view.SameScale)
+        {
+            return plot;
+        }
 
-        var labelWidth = LabelWidths(densityTicks, wording, type)
-            .Append(wording.Result is { } result ? EmbeddedFont.SemiBold.Measure(wording.BareDensity(result), type.Value) : 0)
-            .Max();
-        var left = Math.Round(Math.Min(type.Margin + labelWidth + Axes.LabelGap(type), size.Width * 0.45)) + 0.5;
-        var rightLabels = second is null ? 0 : Math.Min(LabelWidths(second.Ticks, wording, type).DefaultIfEmpty(0).Max() + Axes.LabelGap(type), size.Width * 0.25);
-        var right = Math.Floor(size.Width - type.Margin - rightLabels);
-        var waterTicks = WaterTicksWithin(view.WaterContent, right - left, type);
-        return new Plot(new Area(left, Math.Ceiling(top) + 0.5, right, Math.Floor(bottom) - 0.5), view, waterTicks, densityTicks, second);
+        // The labels of the wider range may need another margin, which changes the shape a little: hence twice.
+        plot = LayAsIs(view.Shaped(plot.Area), headingBottom, below, words, size, type);
+        var shaped = view.Shaped(plot.Area);
+        return new Plot(plot.Area, below, shaped, XTicksOf(shaped, plot.Area.Width, words, type), YTicksOf(shaped, MostUpward(plot.Area.Height, type)), plot.Second);
     }
 
-    private static IEnumerable<double> LabelWidths(Ticks ticks, Wording wording, TypeScale type) =>
-        ticks.Values.Select(value => EmbeddedFont.Regular.Measure(wording.Number(ticks.Label(value)), type.Label));
+    private static Plot LayAsIs(View view, double headingBottom, double below, AxisWords words, FigureSize size, TypeScale type)
+    {
+        var top = headingBottom + Axes.HeightAbove(type);
+        var bottom = size.Height - Axes.HeightBelow(type) - below;
+        var mostTicks = MostUpward(bottom - top, type);
+        var yTicks = YTicksOf(view, mostTicks);
+        var second = words.SecondRatio is { } ratio ? SecondScale.Of(view.Y, ratio, mostTicks) : null;
+
+        var labelWidth = LabelWidths(yTicks, words, type)
+            .Append(words.YValue is { } value ? EmbeddedFont.SemiBold.Measure(value.Text, type.Value) : 0)
+            .Max();
+        var left = Math.Round(Math.Min(type.Margin + labelWidth + Axes.LabelGap(type), size.Width * 0.45)) + 0.5;
+        var rightLabels = second is null ? 0 : Math.Min(LabelWidths(second.Ticks, words, type).DefaultIfEmpty(0).Max() + Axes.LabelGap(type), size.Width * 0.25);
+        var right = Math.Floor(size.Width - type.Margin - rightLabels);
+        return new Plot(
+            new Area(left, Math.Ceiling(top) + 0.5, right, Math.Floor(bottom) - 0.5), below, view, XTicksOf(view, right - left, words, type), yTicks, second);
+    }
+
+    private static double MostUpward(double height, TypeScale type) => Math.Clamp(height / (LeastTickDistanceUpward * type.Unit), 1, MostTicks);
+
+    private static IAxisTicks YTicksOf(View view, double most) => view.YNames is { } names ? names : Ticks.Within(view.Y, most);
+
+    private static IAxisTicks XTicksOf(View view, double width, AxisWords words, TypeScale type) => view.XNames is { } names ? names : RoomyTicks(view.X, width, words, type);
+
+    private static IEnumerable<double> LabelWidths(IAxisTicks ticks, AxisWords words, TypeScale type) =>
+        ticks.Values.Select(value => EmbeddedFont.Regular.Measure(words.Number(ticks.Label(value)), type.Label));
 
     /// <summary>As fine as the labels leave room between them.</summary>
-    private static Ticks WaterTicksWithin(Interval range, double width, TypeScale type)
+    private static Ticks RoomyTicks(Interval range, double width, AxisWords words, TypeScale type)
     {
-        var most = Math.Clamp(width / (LeastWaterTickDistance * type.Unit), 1, MostTicks);
+        var most = Math.Clamp(width / (LeastTickDistanceToTheRight * type.Unit), 1, MostTicks);
         while (true)
         {
             var ticks = Ticks.Within(range, most);
-            var widest = ticks.Values.Select(value => EmbeddedFont.Regular.Measure(ticks.Label(value), type.Label)).DefaultIfEmpty(0).Max();
+            var widest = LabelWidths(ticks, words, type).DefaultIfEmpty(0).Max();
             var distance = width * ticks.Step / range.Span;
             if (distance >= widest + type.Label || most <= 1)
             {

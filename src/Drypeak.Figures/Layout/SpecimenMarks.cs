@@ -62,6 +62,6 @@ internal sealed class SpecimenMarks(CompactionChart chart, Wording wording, Plot
         select (Place[])[ends.Value.From, ends.Value.To];
 
     private Disc Mark(ChartSpecimen specimen) => specimen.SetAside
-        ? new Disc(plot.At(specimen.Point), RingRadius, null, new Stroke(ColorRole.Ink, EdgeWidth * type.Unit), specimen.Point) { Name = "specimen set-aside" }
-        : new Disc(plot.At(specimen.Point), type.MarkRadius, ColorRole.Ink, null, specimen.Point) { Name = "specimen" };
+        ? new Disc(plot.At(specimen.Point), RingRadius, null, new Stroke(ColorRole.Ink, EdgeWidth * type.Unit)) { Name = "specimen set-aside", Data = specimen.Point.Data }
+        : new Disc(plot.At(specimen.Point), type.MarkRadius, ColorRole.Ink, null) { Name = "specimen", Data = specimen.Point.Data };
 }

@@ -6,7 +6,7 @@ namespace Drypeak.Figures.Layout;
 /// The round values at which an axis is marked: multiples of 1, 2, 2.5 or 5 times a power of ten. They are counted in whole steps, so that
 /// no value drifts by rounding, and written with as many decimals as the step has.
 /// </summary>
-internal sealed class Ticks
+internal sealed class Ticks : IAxisTicks
 {
     private static readonly double[] Mantissas = [1, 2, 2.5, 5];
 
@@ -74,6 +74,8 @@ internal sealed class Ticks
             exponent++;
         }
     }
+
+    public bool HasGrid => true;
 
     public string Label(double value) => Format(value, Decimals);
 

@@ -24,6 +24,7 @@ internal static class TranslatedPhrases
         Fitted = "fitted",
         Corrected = ("corrected for oversize", "corrected"),
         SetAside = "set aside",
+        Outcomes = ("met", "not met", "undecided"),
         Next = ("next specimen", "next"),
         ZeroAirVoids = "zero air voids",
         Saturation = ("saturation {0}", "S {0}"),
@@ -40,7 +41,9 @@ internal static class TranslatedPhrases
             "Corrected for oversize: {0} at {1}.",
             "Bars on the marks are the 95 % intervals of the measurements.",
             "Lines: {0}.",
-            "Suggested next specimen: {0} water."),
+            "Suggested next specimen: {0} water.",
+            "Field tests: {0}{1}.",
+            "Zone: {0}."),
     };
 
     /// <summary>German, with a decimal comma.</summary>
@@ -62,6 +65,7 @@ internal static class TranslatedPhrases
         Fitted = "angepasst",
         Corrected = ("mit Überkorn", "korrigiert"),
         SetAside = "ausgeschlossen",
+        Outcomes = ("erfüllt", "nicht erfüllt", "unentschieden"),
         Next = ("nächster Versuch", "nächster"),
         ZeroAirVoids = "Sättigungslinie",
         Saturation = ("Sättigungsgrad {0}", "S {0}"),
@@ -78,7 +82,9 @@ internal static class TranslatedPhrases
             "Mit Überkorn: {0} bei {1}.",
             "Balken an den Punkten sind die 95-%-Intervalle der Messungen.",
             "Linien: {0}.",
-            "Vorgeschlagener nächster Versuch: {0} Wasser."),
+            "Vorgeschlagener nächster Versuch: {0} Wasser.",
+            "Feldversuche: {0}{1}.",
+            "Bereich: {0}."),
     };
 
     /// <summary>French, with a decimal comma.</summary>
@@ -100,6 +106,7 @@ internal static class TranslatedPhrases
         Fitted = "ajusté",
         Corrected = ("corrigé des gros éléments", "corrigé"),
         SetAside = "écarté",
+        Outcomes = ("conforme", "non conforme", "indécis"),
         Next = ("prochaine éprouvette", "prochaine"),
         ZeroAirVoids = "courbe de saturation",
         Saturation = ("degré de saturation {0}", "Sr {0}"),
@@ -116,7 +123,9 @@ internal static class TranslatedPhrases
             "Corrigé des gros éléments : {0} à {1}.",
             "Les barres sur les points sont les intervalles à 95 % des mesures.",
             "Lignes : {0}.",
-            "Prochaine éprouvette proposée : {0} d’eau."),
+            "Prochaine éprouvette proposée : {0} d’eau.",
+            "Essais en place : {0}{1}.",
+            "Zone : {0}."),
     };
 
     /// <summary>Spanish, with a decimal comma.</summary>
@@ -138,6 +147,7 @@ internal static class TranslatedPhrases
         Fitted = "ajustado",
         Corrected = ("corregido por gruesos", "corregido"),
         SetAside = "descartada",
+        Outcomes = ("cumple", "no cumple", "sin decidir"),
         Next = ("próxima probeta", "próxima"),
         ZeroAirVoids = "línea de saturación",
         Saturation = ("grado de saturación {0}", "Sr {0}"),
@@ -154,7 +164,9 @@ internal static class TranslatedPhrases
             "Corregido por gruesos: {0} con {1}.",
             "Las barras en los puntos son los intervalos del 95 % de las medidas.",
             "Líneas: {0}.",
-            "Próxima probeta propuesta: {0} de humedad."),
+            "Próxima probeta propuesta: {0} de humedad.",
+            "Ensayos de campo: {0}{1}.",
+            "Zona: {0}."),
     };
 
     /// <summary>Portuguese, with a decimal comma.</summary>
@@ -176,6 +188,7 @@ internal static class TranslatedPhrases
         Fitted = "ajustado",
         Corrected = ("corrigido pelos graúdos", "corrigido"),
         SetAside = "descartado",
+        Outcomes = ("atende", "não atende", "indefinido"),
         Next = ("próximo corpo de prova", "próximo"),
         ZeroAirVoids = "curva de saturação",
         Saturation = ("grau de saturação {0}", "S {0}"),
@@ -192,6 +205,8 @@ internal static class TranslatedPhrases
             "Corrigido pelos graúdos: {0} com {1}.",
             "As barras nos pontos são os intervalos de 95 % das medidas.",
             "Linhas: {0}.",
-            "Próximo corpo de prova proposto: {0} de umidade."),
+            "Próximo corpo de prova proposto: {0} de umidade.",
+            "Ensaios de campo: {0}{1}.",
+            "Zona: {0}."),
     };
 }

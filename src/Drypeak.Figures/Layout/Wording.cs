@@ -17,7 +17,8 @@ internal sealed class Wording
         (_chart, _options, _phrases) = (chart, options, options.Language.Phrases);
         Result = chart.Adopted ?? chart.Optimum;
         Reference = PlainText.Clean(chart.Reference ?? "");
-        OwnTitle = PlainText.Clean(options.Title ?? "") is { Length: > 0 } own ? own : null;
+        Statement = PlainText.Clean(chart.Statement ?? "") is { Length: > 0 } said ? said : null;
+        OwnTitle = PlainText.Clean(options.Title ?? "") is { Length: > 0 } own ? own : Statement;
     }
 
     /// <summary>The optimum that stands for the result, or null.</summary>
@@ -26,7 +27,10 @@ internal sealed class Wording
     /// <summary>The test's name, empty where there is none.</summary>
     public string Reference { get; }
 
-    /// <summary>The title that was asked for, or null where the result is the title.</summary>
+    /// <summary>The result in one line where it is not the optimum, or null.</summary>
+    public string? Statement { get; }
+
+    /// <summary>The title that was asked for, or the statement; null where the optimum is the title.</summary>
     public string? OwnTitle { get; }
 
     private string Unit => _chart.DensityUnit.Symbol();
@@ -66,15 +70,21 @@ internal sealed class Wording
         }
     }
 
-    public string WaterAxis => $"{Capitalized(_phrases.WaterContent)} (%)";
+    /// <summary>What is written along the axes.</summary>
+    public AxisWords Axes => new($"{Capitalized(_phrases.WaterContent)} (%)", $"{Capitalized(DensityName)} ({Unit})")
+    {
+        Second = _options.SecondUnit?.Symbol(),
+        SecondRatio = _options.SecondUnit is { } second ? Soil.Quantities.Density.From(1, _chart.DensityUnit).In(second) : null,
+        XValue = Result is null ? null : new AxisValue(Result.WaterContent, Bare(Water(Result), "%")),
+        YValue = Result is null ? null : new AxisValue(Result.MaximumDryDensity, Bare(Density(Result), Unit)),
+        Number = Number,
+    };
 
-    public string DensityAxis => $"{Capitalized(DensityName)} ({Unit})";
-
-    /// <summary>The title of the second axis of density, or null.</summary>
-    public string? SecondAxis => _options.SecondUnit?.Symbol();
-
-    /// <summary>What 1 of the chart's unit is in the second unit, or null where none is asked for.</summary>
-    public double? SecondUnitRatio => _options.SecondUnit is { } second ? Soil.Quantities.Density.From(1, _chart.DensityUnit).In(second) : null;
+    /// <summary>What is written over the plot.</summary>
+    public HeadingWords Heading => new(
+        Title,
+        OwnTitle is null ? Headline : null,
+        [[OwnTitle == Statement ? "" : Statement ?? "", OwnTitle is null || IsWithoutLaboratory ? "" : ResultLine, Reference], [Intervals, Bars]]);
 
     /// <summary>What the picture says, for who cannot see it.</summary>
     public string Description
@@ -82,11 +92,32 @@ internal sealed class Wording
         get
         {
             var describe = _phrases.Describe;
-            var sentences = new List<string>
+            var sentences = new List<string>();
+            if (Statement is not null)
             {
-                Specimens,
-                Result is null ? describe.NoResult : Capitalized(Fill(describe.Result, MaximumName, Density(Result), Water(Result))),
-            };
+                sentences.Add($"{Statement.TrimEnd('.')}.");
+            }
+
+            if (!IsWithoutLaboratory)
+            {
+                sentences.Add(Specimens);
+            }
+
+            if (_chart.FieldTests.Count > 0)
+            {
+                sentences.Add(FieldTests);
+            }
+
+            if (PlainText.Clean(_chart.Zone?.Label ?? "") is { Length: > 0 } zone)
+            {
+                sentences.Add(Fill(describe.Zone, zone));
+            }
+
+            if (!IsWithoutLaboratory)
+            {
+                sentences.Add(Result is null ? describe.NoResult : Capitalized(Fill(describe.Result, MaximumName, Density(Result), Water(Result))));
+            }
+
             if (Intervals.Length > 0)
             {
                 sentences.Add($"{Capitalized(Intervals)}.");
@@ -143,18 +174,47 @@ internal sealed class Wording
         };
     }
 
+    /// <summary>What stands beside a field test's mark, the fullest first.</summary>
+    public IReadOnlyList<string> FieldTest(ChartFieldTest test)
+    {
+        var (label, outcome) = (PlainText.Clean(test.Label ?? ""), Outcome(test.Outcome));
+        return (label, outcome) switch
+        {
+            (_, "") => [label],
+            ("", _) => [outcome],
+            _ => [$"{label}, {outcome}", label],
+        };
+    }
+
     /// <summary>What stands at the next specimen's place, the fullest first.</summary>
     public IReadOnlyList<string> Next(double waterContent) =>
         [$"{_phrases.Next.Full} {WaterText(waterContent)}", $"{_phrases.Next.Brief} {WaterText(waterContent)}", _phrases.Next.Brief];
 
-    /// <summary>A reported water content without its unit, which the axis names.</summary>
-    public string BareWater(ChartOptimum optimum) => Bare(Water(optimum), "%");
-
-    /// <summary>A reported density without its unit, which the axis names.</summary>
-    public string BareDensity(ChartOptimum optimum) => Bare(Density(optimum), Unit);
-
     /// <summary>A number with a decimal point as the language writes it.</summary>
     public string Number(string text) => _phrases.Number(text);
+
+    /// <summary>Whether the chart shows field tests alone, so that nothing is to be said of a curve.</summary>
+    private bool IsWithoutLaboratory => _chart.FieldTests.Count > 0 && _chart.Specimens.Count == 0 && Result is null;
+
+    private string FieldTests
+    {
+        get
+        {
+            var outcomes = _chart.FieldTests.GroupBy(test => test.Outcome).OrderBy(group => group.Key)
+                .Select(group => (Word: Outcome(group.Key), Count: group.Count())).Where(outcome => outcome.Word.Length > 0)
+                .Select(outcome => $"{outcome.Count} {outcome.Word}").ToList();
+            return Fill(_phrases.Describe.FieldTests, _chart.FieldTests.Count, outcomes.Count == 0 ? "" : $" ({string.Join(", ", outcomes)})");
+        }
+    }
+
+    private string Outcome(MarkRole role) => role switch
+    {
+        MarkRole.SetAside => _phrases.SetAside,
+        MarkRole.Met => _phrases.Outcomes.Met,
+        MarkRole.NotMet => _phrases.Outcomes.NotMet,
+        MarkRole.Undecided => _phrases.Outcomes.Undecided,
+        _ => "",
+    };
 
     private bool HasBars => _chart.Specimens.Any(specimen => specimen.IsUncertain);
 
@@ -212,6 +272,7 @@ internal sealed class Wording
         return Between(lower, upper, Math.Clamp(needed, decimals, decimals + 3), unit);
     }
 
+    /// <summary>A reported value without its unit, which the axis names.</summary>
     private static string Bare(string reported, string unit) =>
         reported.EndsWith(unit, StringComparison.Ordinal) ? reported[..^unit.Length].TrimEnd() : reported;
 

@@ -13,7 +13,4 @@ internal sealed record ChartFormat(string Suffix, string MediaType, Func<Figure,
     public static readonly ChartFormat Pdf = new("pdf", "application/pdf", (figure, _) => PdfWriter.Write(figure));
 
     public static IReadOnlyList<ChartFormat> All { get; } = [Svg, Png, Pdf];
-
-    /// <summary>The picture in this format.</summary>
-    public byte[] Draw(CompactionChart chart, ChartOptions options) => Write(CompactionFigure.Draw(chart, options.Figure), options.Scale);
 }

@@ -1,6 +1,5 @@
 using System.Text;
 using Drypeak.Figures;
-using Drypeak.Service.Charts;
 using Drypeak.Soil.Quantities;
 
 namespace Drypeak.Service;
@@ -44,11 +43,11 @@ internal static class Examples
     }
 }
 
-/// <summary>An address of a chart, for the API description. Its numbers are written here, not computed, so that it reads the same on every machine.</summary>
+/// <summary>Charts for the API description's addresses. Their numbers are written here, not computed, so that an address reads the same on every machine.</summary>
 internal static class ExampleChart
 {
-    /// <summary>The query's <c>d</c>.</summary>
-    public static string Address { get; } = ChartAddress.Encode(new CompactionChart
+    /// <summary>A laboratory test.</summary>
+    public static CompactionChart Compaction { get; } = new()
     {
         Reference = "Ternmarsh, borrow area 7, sample 3",
         DensityUnit = DensityUnit.MegagramPerCubicMeter,
@@ -65,5 +64,21 @@ internal static class ExampleChart
         Optimum = new ChartOptimum(14.2, 1.864, "14.2 %", "1.86 Mg/m³", [13.7, 15.3], [1.843, 1.885]),
         SpecificGravity = 2.7,
         WaterDensity = 998.2,
-    });
+    };
+
+    /// <summary>Results in order with a limit.</summary>
+    public static PlotChart Plot { get; } = new()
+    {
+        Title = "4 of 5 tests met 95 % relative compaction",
+        Reference = "Ternmarsh, lot 12",
+        Description = "Relative compaction of 5 tests in order: 94.1 to 98.3 %. 4 of them met at least 95 %.",
+        X = new PlotAxis("Test") { Positions = [new(1, "1"), new(2, "2"), new(3, "3"), new(4, "4"), new(5, "5")] },
+        Y = new PlotAxis("Relative compaction (%)"),
+        Limits = [new PlotLimit(95, "at least 95 %")],
+        Marks =
+        [
+            new PlotMark(1, 97.2, MarkRole.Met), new PlotMark(2, 96.4, MarkRole.Met), new PlotMark(3, 94.1, MarkRole.NotMet, "3"),
+            new PlotMark(4, 98.3, MarkRole.Met), new PlotMark(5, 96.9, MarkRole.Met),
+        ],
+    };
 }

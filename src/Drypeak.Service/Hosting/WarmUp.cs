@@ -50,10 +50,14 @@ internal sealed partial class WarmUp(
             await using var scope = scopes.CreateAsyncScope();
             await endpoint.RequestDelegate!(RequestOf(endpoint, accept, scope.ServiceProvider));
         }
-        catch (Exception failure) when (failure is not OutOfMemoryException)
+        catch (Exception failure) when (!readiness.IsStopping)
         {
             // A caller will meet the same failure and be told of it; the other endpoints must not stay cold for it.
             LogFailure(log, endpoint.RoutePattern.RawText, accept, failure);
+        }
+        catch (ObjectDisposedException)
+        {
+            // The service is stopping, and has taken away what the rehearsal needs.
         }
     }
 

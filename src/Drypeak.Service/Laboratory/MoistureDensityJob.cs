@@ -11,30 +11,29 @@ using Drypeak.Soil.TestMethods;
 
 namespace Drypeak.Service.Laboratory;
 
-/// <summary>A laboratory test computed: what is answered, and what its chart shows.</summary>
-internal sealed record MoistureDensityOutcome(MoistureDensityAnswer Answer, CompactionChart Chart);
-
 /// <summary>The laboratory test from contract to contract. The endpoint, the page and a batch line all call this.</summary>
 internal sealed class MoistureDensityJob(Limits limits)
 {
     private readonly Lazy<MoistureDensityRules> _rules = new(() => new(limits));
-    private readonly Lazy<ChartRules> _drawable = new(() => new(limits));
 
     private const int LinePoints = 41;
     private const double Coverage = 0.95;
+
+    /// <summary>The kind of its chart.</summary>
+    public ChartKind<CompactionChart> Chart { get; } = ChartKind.Compaction("moisture-density", "The chart of a laboratory test", limits);
 
     /// <summary>Every broken rule; empty where the request can be computed.</summary>
     public IReadOnlyList<Fault> Check(MoistureDensityRequest request) => _rules.Value.Check(request);
 
     /// <summary>Computes a request that passed <see cref="Check"/>.</summary>
-    public MoistureDensityOutcome Compute(MoistureDensityRequest request)
+    public Charted<MoistureDensityAnswer, CompactionChart> Compute(MoistureDensityRequest request)
     {
         var (test, result) = Analyze(request);
         var specimens = result.Specimens;
         var chart = MoistureDensityChart.Of(request, test, result);
-        var links = ChartAddress.LinksFor(ChartAddress.MoistureDensity, chart, _drawable.Value, limits.AddressBytes, out var whyNoLink);
+        var links = Chart.LinksOf(chart, limits, out var whyNoLink);
         var findings = (whyNoLink is null ? result.Findings : result.Findings.Append(whyNoLink)).Select(FindingContract.Of);
-        return new MoistureDensityOutcome(
+        return new Charted<MoistureDensityAnswer, CompactionChart>(
             new MoistureDensityAnswer
             {
                 Reference = request.Reference,

@@ -1,5 +1,7 @@
+using Drypeak.Service.Field;
 using Drypeak.Service.Pages.Catalogues;
 using Drypeak.Service.Pages.FieldDensity;
+using Drypeak.Service.Pages.Forms;
 using Drypeak.Service.Pages.Laboratory;
 using Drypeak.Service.Pages.Preparation;
 using Microsoft.AspNetCore.Components;
@@ -14,7 +16,7 @@ internal static class PageEndpoints
     {
         PageFiles.Map(app);
         LaboratoryPageEndpoints.Map(app);
-        FieldPageEndpoints.Map(app);
+        app.MapForm(FieldDensityPage.Of(app.ServiceProvider.GetRequiredService<FieldDensityJob>()));
         SpecimenSheetPageEndpoint.Map(app);
         MapStill<TestMethodsPage>(app, "/test-methods");
         MapStill<FindingsPage>(app, "/findings");

@@ -134,7 +134,7 @@ public sealed class ChartAddressTests(RunningService service)
                 }
 
                 using var response = await service.GetAsync($"{ChartLink.Svg}?d={ChartLink.Pack(copy.ToJsonString())}");
-                var needed = member is "densityUnit" or "specimens" or "curve" or "saturation" or "airVoids";
+                var needed = member is "densityUnit" or "specimens" or "curve" or "saturation" or "airVoids" or "fieldTests";
                 Assert.True(needed ? response.StatusCode == HttpStatusCode.BadRequest : response.StatusCode == HttpStatusCode.OK, $"{response.StatusCode} without {member}");
             }
         }

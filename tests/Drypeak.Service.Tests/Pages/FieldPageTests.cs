@@ -33,12 +33,12 @@ public sealed class FieldPageTests(RunningService service)
     public async Task Each_method_is_a_link_and_asks_for_its_own_readings_with_labels()
     {
         var first = await OpenAsync(Address);
-        var methods = first.QuerySelectorAll(".methods-of-test a").Select(link => link.GetAttribute("href")!).ToList();
+        var methods = first.QuerySelectorAll(".variants a").Select(link => link.GetAttribute("href")!).ToList();
         Assert.Equal(6, methods.Count);
         foreach (var method in methods)
         {
             var page = await OpenAsync(method);
-            Assert.Equal(method, page.QuerySelector(".methods-of-test [aria-current=page]")!.GetAttribute("href"));
+            Assert.Equal(method, page.QuerySelector(".variants [aria-current=page]")!.GetAttribute("href"));
             Assert.All(page.QuerySelectorAll("form input[type=text], form select"), control =>
                 Assert.True(control.HasAttribute("aria-label") || page.QuerySelector($"label[for='{control.Id}']") is not null, control.Id));
             Assert.Equal(page.QuerySelectorAll("[id]").Length, page.QuerySelectorAll("[id]").Select(element => element.Id).Distinct().Count());

@@ -8,6 +8,12 @@ if (answer?.dataset.address) {
   history.replaceState(null, '', answer.dataset.address);
 }
 
+// A unit that is chosen elsewhere in the form follows the choice.
+for (const unit of document.querySelectorAll('[data-unit-of]')) {
+  const choice = document.getElementById(unit.dataset.unitOf);
+  choice?.addEventListener('change', () => { unit.textContent = choice.selectedOptions[0].text; });
+}
+
 const grid = document.querySelector('table.cells');
 if (grid) {
   grid.addEventListener('keydown', move);

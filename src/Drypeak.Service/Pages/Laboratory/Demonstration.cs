@@ -1,3 +1,4 @@
+using Drypeak.Service.Pages.Forms;
 using Microsoft.Extensions.Primitives;
 
 namespace Drypeak.Service.Pages.Laboratory;
@@ -10,14 +11,14 @@ internal sealed record Demonstration(string Name, string Label, TestForm Form)
 {
     /// <summary>Five specimens by their weighings, two tins each: what most laboratories have.</summary>
     public static readonly Demonstration Weighings = new("weighings", "five specimens from their weighings", Filled(
-        (Field.Reference, "Ternmarsh, borrow area 7, sample 3"),
-        (Field.Method, "astm-d698-a"),
-        (Field.MoldMass, "4250"),
-        (Field.MoldVolume, "943.3"),
-        (Field.SpecificGravity, "2.68"),
-        (Field.Determined, "measured"),
-        (Field.SaturationLines, "80 90"),
-        (Field.Table, """
+        (TestFields.Reference, "Ternmarsh, borrow area 7, sample 3"),
+        (TestFields.Method, "astm-d698-a"),
+        (TestFields.MoldMass, "4250"),
+        (TestFields.MoldVolume, "943.3"),
+        (TestFields.SpecificGravity, "2.68"),
+        (TestFields.Determined, "measured"),
+        (TestFields.SaturationLines, "80 90"),
+        (TestFields.Table, """
             Specimen	Mold + wet soil	Tin	Tin + wet soil	Tin + dry soil	Tin 2	Tin 2 + wet soil	Tin 2 + dry soil
             1	6027	29.42	138.80	129.06	28.93	136.50	126.92
             2	6137	33.51	180.20	164.53	29.33	162.59	148.48
@@ -28,11 +29,11 @@ internal sealed record Demonstration(string Name, string Label, TestForm Form)
 
     /// <summary>Four specimens that rise and never fall: no optimum, and what to do about it.</summary>
     public static readonly Demonstration StillRising = new("still-rising", "a test that never reached its peak", Filled(
-        (Field.Reference, "Ternmarsh, borrow area 9, sample 1"),
-        (Field.MoldMass, "4250"),
-        (Field.MoldVolume, "943.3"),
-        (Field.SpecificGravity, "2.70"),
-        (Field.Table, """
+        (TestFields.Reference, "Ternmarsh, borrow area 9, sample 1"),
+        (TestFields.MoldMass, "4250"),
+        (TestFields.MoldVolume, "943.3"),
+        (TestFields.SpecificGravity, "2.70"),
+        (TestFields.Table, """
             Specimen	Mold + wet soil	Tin	Tin + wet soil	Tin + dry soil
             1	5938	30.84	137.98	129.86
             2	6014	33.19	164.62	152.83
@@ -42,14 +43,14 @@ internal sealed record Demonstration(string Name, string Label, TestForm Form)
 
     /// <summary>Densities already reduced, in pounds per cubic foot, with stones that did not fit the mold and one point set aside.</summary>
     public static readonly Demonstration Stones = new("stones", "densities in lb/ft³, with oversize to correct for", Filled(
-        (Field.Reference, "Ternmarsh, crest, trial strip 2"),
-        (Field.DensityUnit, "lb/ft3"),
-        (Field.SpecificGravity, "2.71"),
-        (Field.Determined, "measured"),
-        (Field.OversizePercent, "14"),
-        (Field.OversizeGravity, "2.65"),
-        (Field.OversizeWater, "1.5"),
-        (Field.Table, """
+        (TestFields.Reference, "Ternmarsh, crest, trial strip 2"),
+        (TestFields.DensityUnit, "lb/ft3"),
+        (TestFields.SpecificGravity, "2.71"),
+        (TestFields.Determined, "measured"),
+        (TestFields.OversizePercent, "14"),
+        (TestFields.OversizeGravity, "2.65"),
+        (TestFields.OversizeWater, "1.5"),
+        (TestFields.Table, """
             Specimen	Water content	Dry density	Set aside
             A	6.9	118.6
             B	8.8	122.9
@@ -66,6 +67,6 @@ internal sealed record Demonstration(string Name, string Label, TestForm Form)
 
     public static Demonstration? Find(string name) => All.FirstOrDefault(demonstration => demonstration.Name == name);
 
-    private static TestForm Filled(params (Field Field, string Text)[] texts) =>
+    private static TestForm Filled(params (FormField Field, string Text)[] texts) =>
         TestForm.From(texts.Select(text => KeyValuePair.Create(text.Field.Name, new StringValues(text.Text))));
 }

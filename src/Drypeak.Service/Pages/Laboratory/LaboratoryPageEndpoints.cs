@@ -1,5 +1,6 @@
 using Drypeak.Service.Hosting;
 using Drypeak.Service.Laboratory;
+using Drypeak.Service.Pages.Forms;
 
 namespace Drypeak.Service.Pages.Laboratory;
 
@@ -33,8 +34,8 @@ internal static class LaboratoryPageEndpoints
     };
 
     private static Submission Opened(string? test, MoistureDensityJob job, Limits limits) =>
-        FormAddress.Read(test ?? "", limits.UnpackedAddressBytes) is { } form
-            ? Submission.Of(form, job)
+        FormAddress.Read(test ?? "", limits.UnpackedAddressBytes) is { } texts
+            ? Submission.Of(TestForm.From(texts), job)
             : Submission.Refused("The link is damaged or cut short, so the test in it cannot be read. Copy the whole link, or type the test in again.");
 
     private static async Task<IResult> PostAsync(HttpContext context, MoistureDensityJob job, Limits limits, Func<Submission, Limits, IResult> answer)
@@ -52,7 +53,7 @@ internal static class LaboratoryPageEndpoints
     private static IResult Page(Submission submission, Limits limits) => new PageResult<LaboratoryPage>(new Dictionary<string, object?>
     {
         [nameof(LaboratoryPage.Submission)] = submission,
-        [nameof(LaboratoryPage.Query)] = submission.Answer is null ? null : FormAddress.QueryOf(submission.Form, limits.AddressBytes),
+        [nameof(LaboratoryPage.Query)] = submission.Answer is null ? null : FormAddress.QueryOf(submission.Form.Texts, limits.AddressBytes),
     })
     {
         Status = submission.Status,

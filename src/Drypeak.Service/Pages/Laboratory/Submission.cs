@@ -1,17 +1,8 @@
 using Drypeak.Figures;
 using Drypeak.Service.Laboratory;
+using Drypeak.Service.Pages.Forms;
 
 namespace Drypeak.Service.Pages.Laboratory;
-
-/// <summary>A form as it was typed, with what is wrong with each of its fields: what the controls of every page show.</summary>
-public interface IFilledForm
-{
-    /// <summary>What a field holds.</summary>
-    string TextOf(Field field);
-
-    /// <summary>What is wrong with a field, or null.</summary>
-    string? FaultOf(Field field);
-}
 
 /// <summary>A form with what came of it: an answer, or all that is wrong.</summary>
 /// <param name="Form">As it was typed.</param>
@@ -20,45 +11,34 @@ public interface IFilledForm
 /// <param name="Answer">The answer, or null.</param>
 /// <param name="Chart">Its chart, or null.</param>
 /// <param name="Status">HTTP status: 200, 400 where a text could not be read, 422 where values cannot be computed.</param>
-public sealed record Submission(TestForm Form, FormReading? Reading, IReadOnlyList<FormFault> Faults, MoistureDensityAnswer? Answer, CompactionChart? Chart, int Status) : IFilledForm
+public sealed record Submission(TestForm Form, TestReading? Reading, IReadOnlyList<FormFault> Faults, MoistureDensityAnswer? Answer, CompactionChart? Chart, int Status) : IFilledForm
 {
-    private static readonly Field[] FieldsUnderMore =
-    [
-        Field.CurveModel, Field.WaterTemperature, Field.SaturationLines, Field.AirVoidsLines, Field.OversizePercent, Field.OversizeSieve,
-        Field.OversizeGravity, Field.OversizeWater, Field.MoldDiameter, Field.MoldHeight, Field.LengthUnit,
-        Field.AdoptedDensity, Field.AdoptedWater, Field.AdoptedReason,
-    ];
-
     /// <summary>Whether the grid was asked to be longer.</summary>
-    public bool GridAsked => Form[Field.GridRows].Length > 0;
+    public bool GridAsked => Form[TestFields.GridRows].Length > 0;
 
     /// <summary>Whether a field under "More" is wrong: it must then be in view.</summary>
-    public bool MoreAsked => Faults.Any(fault => FieldsUnderMore.Contains(fault.Field));
+    public bool MoreAsked => Faults.Any(fault => TestFields.UnderMore.Contains(fault.Field));
 
     /// <inheritdoc/>
-    public string TextOf(Field field) => Form[field];
-
-    /// <inheritdoc/>
-    public string? FaultOf(Field field) =>
-        Faults.Where(fault => fault.Field == field).Select(fault => fault.Advice).ToList() is { Count: > 0 } advice ? string.Join(" ", advice) : null;
+    public string TextOf(FormField field) => Form[field];
 
     /// <summary>What is wrong at a control: several sentences where it is the table.</summary>
-    public IReadOnlyList<string> FaultsAt(string control) => [.. Faults.Where(fault => fault.Control == control).Select(fault => fault.Where == fault.Field.Label ? fault.Advice : fault.Message)];
+    public IReadOnlyList<string> FaultsAt(string control) => [.. Faults.Where(fault => fault.Control == control).Select(fault => fault.AtField)];
 
     /// <summary>A form that is shown and not computed.</summary>
     public static Submission Opened(TestForm form) => new(form, null, [], null, null, StatusCodes.Status200OK);
 
     /// <summary>A form that is shown with something that is wrong with its address.</summary>
     public static Submission Refused(string message) =>
-        new(TestForm.Empty, null, [new FormFault(Field.Table.Name, Field.Table, Field.Table.Label, message)], null, null, StatusCodes.Status400BadRequest);
+        new(TestForm.Empty, null, [new FormFault(TestFields.Table.Name, TestFields.Table, TestFields.Table.Label, message)], null, null, StatusCodes.Status400BadRequest);
 
     /// <summary>Reads, checks and computes a form.</summary>
     internal static Submission Of(TestForm form, MoistureDensityJob job)
     {
-        var reading = FormReading.Of(form);
+        var reading = TestReading.Of(form);
         List<Fault> formFaults = [.. reading.Unreadable, .. reading.Missing];
         var broken = job.Check(reading.Request).Where(fault => !formFaults.Exists(known => FollowsFrom(fault, known, reading)));
-        List<FormFault> faults = [.. formFaults.Concat(broken).Select(fault => FormFault.Of(fault, reading)).Distinct().Order(FormFault.AsOnThePage)];
+        List<FormFault> faults = [.. formFaults.Concat(broken).Select(fault => TestFaults.Of(fault, reading)).Distinct().Order(TestFaults.AsOnThePage)];
         if (faults.Count > 0)
         {
             return new Submission(form, reading, faults, null, null,
@@ -73,7 +53,7 @@ public sealed record Submission(TestForm Form, FormReading? Reading, IReadOnlyLi
     /// Whether a rule is broken only since a text could not be read: its member is then missing, and so is what would have been made
     /// of it. A specimen lacks its density where the mold is unknown.
     /// </summary>
-    private static bool FollowsFrom(Fault broken, Fault known, FormReading reading)
+    private static bool FollowsFrom(Fault broken, Fault known, TestReading reading)
     {
         if (broken.Place == known.Place || known.Place.StartsWith(broken.Place + "/", StringComparison.Ordinal) || broken.Place.StartsWith(known.Place + "/", StringComparison.Ordinal))
         {

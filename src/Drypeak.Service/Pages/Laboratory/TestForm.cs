@@ -1,4 +1,5 @@
 using System.Globalization;
+using Drypeak.Service.Pages.Forms;
 using Drypeak.Service.Pages.Tables;
 using Microsoft.Extensions.Primitives;
 
@@ -34,7 +35,7 @@ public sealed class TestForm
     public IEnumerable<KeyValuePair<string, string>> Texts => _texts.OrderBy(text => text.Key, StringComparer.Ordinal);
 
     /// <summary>What a field holds.</summary>
-    public string this[Field field] => _texts.GetValueOrDefault(field.Name, field.Otherwise);
+    public string this[FormField field] => _texts.GetValueOrDefault(field.Name, field.Otherwise);
 
     /// <summary>What a cell of the grid holds.</summary>
     public string this[CellAt cell] => _texts.GetValueOrDefault(CellName(cell), "");
@@ -44,7 +45,7 @@ public sealed class TestForm
     {
         get
         {
-            var asked = int.TryParse(this[Field.GridRows], NumberStyles.None, CultureInfo.InvariantCulture, out var rows) ? rows : FewestRows;
+            var asked = int.TryParse(this[TestFields.GridRows], NumberStyles.None, CultureInfo.InvariantCulture, out var rows) ? rows : FewestRows;
             return Math.Clamp(Math.Max(asked, LastFilledRow + 2), FewestRows, MostRows);
         }
     }
@@ -67,7 +68,7 @@ public sealed class TestForm
         {
             var text = values.ToString();
             var cell = CellOf(name);
-            var field = Field.All.FirstOrDefault(field => field.Name == name);
+            var field = TestFields.All.FirstOrDefault(field => field.Name == name);
             if (text.Length > 0 && text != field?.Otherwise && (field is not null || cell is not null))
             {
                 texts[name] = text;
@@ -81,7 +82,7 @@ public sealed class TestForm
     /// <summary>The same form with a longer grid.</summary>
     public TestForm WithMoreRows() => new(new(_texts, StringComparer.Ordinal)
     {
-        [Field.GridRows.Name] = Math.Min(GridRows + FewestRows, MostRows).ToString(CultureInfo.InvariantCulture),
+        [TestFields.GridRows.Name] = Math.Min(GridRows + FewestRows, MostRows).ToString(CultureInfo.InvariantCulture),
     })
     {
         LastFilledRow = LastFilledRow,

@@ -10,6 +10,7 @@ public enum Measure
     Length,
     Density,
     Percent,
+    Ratio,
 }
 
 /// <summary>A column that the table of specimens may have.</summary>

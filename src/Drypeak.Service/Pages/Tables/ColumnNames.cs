@@ -92,14 +92,18 @@ internal static partial class ColumnNames
     /// Cuts a header whose cells are parted by single spaces: at each place the longest run of words that is a name. Null where words are
     /// left over.
     /// </summary>
-    public static IReadOnlyList<string>? CutAtNames(string line)
+    public static IReadOnlyList<string>? CutAtNames(string line) =>
+        CutAt(line, words => !words.EndsWith('+') && !words.StartsWith('+') && Read(words, afterTin: true).Kind is not null);
+
+    /// <summary>The same for names of any kind.</summary>
+    public static IReadOnlyList<string>? CutAt(string line, Func<string, bool> isName)
     {
         var words = line.Split(' ', StringSplitOptions.RemoveEmptyEntries);
         var cells = new List<string>();
         for (var start = 0; start < words.Length;)
         {
             var end = words.Length;
-            while (end > start && !IsName(string.Join(' ', words[start..end])))
+            while (end > start && !isName(string.Join(' ', words[start..end])))
             {
                 end--;
             }
@@ -114,8 +118,14 @@ internal static partial class ColumnNames
         }
 
         return cells;
+    }
 
-        static bool IsName(string words) => !words.EndsWith('+') && !words.StartsWith('+') && Read(words, afterTin: true).Kind is not null;
+    /// <summary>Which of some columns a header cell names, by its heading or by the contract's member, and the unit as written.</summary>
+    public static (ColumnKind? Kind, string? Unit) Find(string text, IReadOnlyList<ColumnKind> columns)
+    {
+        var unit = UnitPart().Match(text);
+        var name = Name(Words(UnitPart().Replace(text, " ")));
+        return (columns.FirstOrDefault(kind => name == Name(Words(kind.Heading)) || name == Name(Words(kind.Member))), unit.Success ? unit.Groups["unit"].Value.Trim() : null);
     }
 
     private static string Name(IEnumerable<string> words) => string.Join(' ', words.Where(word => !Fillers.Contains(word)));

@@ -52,7 +52,8 @@ internal static class Header
             : column),
     ];
 
-    private static Column WithUnit(Column column, string? written, int position, List<Fault> faults)
+    /// <summary>A column with the unit that its header names; a unit that it cannot have is a fault.</summary>
+    public static Column WithUnit(Column column, string? written, int position, List<Fault> faults, string place = "/specimens")
     {
         if (written is null || (column.Kind.Measure == Measure.Text && written.Length == 0))
         {
@@ -65,7 +66,7 @@ internal static class Header
         }
 
         var known = string.Join(", ", ColumnUnits.Known(column.Kind.Measure));
-        faults.Add(new Fault("/specimens", "unknown-unit", known.Length > 0
+        faults.Add(new Fault(place, "unknown-unit", known.Length > 0
             ? $"The unit “{NumberText.Shortened(written)}” of column {position + 1}, {column.Heading}, is none of {known}. Correct it, or leave it out: the form's unit then holds."
             : $"Column {position + 1}, {column.Heading}, has no unit; “{NumberText.Shortened(written)}” was read. Leave it out."));
         return column;

@@ -52,7 +52,7 @@ internal static partial class NumberText
         if (mark is null && MayGroupThousands(text))
         {
             var (whole, decimals) = (text.Replace(",", "", StringComparison.Ordinal), text.Replace(',', '.'));
-            return $"“{text}” may mean {whole} or {decimals}. Choose the decimal mark below the table, or write one of the two.";
+            return $"“{text}” may mean {whole} or {decimals}. Choose the decimal mark, or write one of the two.";
         }
 
         if ((mark == DecimalMark.Point && text.Contains(',', StringComparison.Ordinal)) || (mark == DecimalMark.Comma && text.Contains('.', StringComparison.Ordinal)))
