@@ -127,5 +127,8 @@ internal sealed class Capacity(Limits limits) : IDisposable
     });
 }
 
-/// <summary>Marks an endpoint that reads its body while it answers: a batch. It has neither a bound on its length nor on its time.</summary>
+/// <summary>
+/// Marks an endpoint that reads its body while it answers: a batch. It has neither a bound on its length nor on its time, needs the scope
+/// <c>batch</c>, and is counted apart, so that long streams take no turn from short requests.
+/// </summary>
 internal sealed class StreamedBody;

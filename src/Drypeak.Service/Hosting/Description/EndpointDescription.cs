@@ -3,15 +3,20 @@ namespace Drypeak.Service.Hosting;
 /// <summary>What an endpoint says of itself in the API description, where its signature does not: it reads its body itself.</summary>
 public static class EndpointDescription
 {
+    private const string LinesOfJson = "application/x-ndjson";
+
     /// <summary>
     /// The methods of an address to read from: GET and, as RFC 9110, section 9.1, asks, HEAD. To be given to <c>MapMethods</c>
     /// where the handler is written: the compiler then generates its call, and the start need not.
     /// </summary>
     public static IReadOnlyList<string> Reading { get; } = [HttpMethods.Get, HttpMethods.Head];
 
-    /// <summary>The request's body, with a whole example that the endpoint accepts.</summary>
-    public static RouteHandlerBuilder Takes<T>(this RouteHandlerBuilder endpoint, string mediaType, string example) =>
+    /// <summary>The request's body, with a whole example that the endpoint accepts. Lines of JSON are a stream: see <see cref="StreamedBody"/>.</summary>
+    public static RouteHandlerBuilder Takes<T>(this RouteHandlerBuilder endpoint, string mediaType, string example)
+    {
         endpoint.WithMetadata(new Body(0, mediaType, typeof(T), example));
+        return mediaType == LinesOfJson ? endpoint.WithMetadata(new StreamedBody()).RequireAuthorization(Scopes.Batch) : endpoint;
+    }
 
     /// <summary>A media type in which the endpoint answers with 200; JSON with an example. To be called once for each media type.</summary>
     public static RouteHandlerBuilder Gives<T>(this RouteHandlerBuilder endpoint, string mediaType, string? example = null) =>
