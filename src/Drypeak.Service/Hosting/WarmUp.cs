@@ -10,6 +10,9 @@ namespace Drypeak.Service.Hosting;
 internal sealed partial class WarmUp(
     EndpointDataSource endpoints, IServiceScopeFactory scopes, Readiness readiness, IHostApplicationLifetime lifetime, ILogger<WarmUp> log) : IHostedService
 {
+    /// <summary>Whoever asks at once is answered first: compiling for both at the same time would make both slow.</summary>
+    private static readonly TimeSpan HeadStart = TimeSpan.FromMilliseconds(100);
+
     public Task StartAsync(CancellationToken cancellationToken)
     {
         lifetime.ApplicationStarted.Register(() => _ = Task.Run(RehearseAsync, CancellationToken.None));
@@ -21,6 +24,7 @@ internal sealed partial class WarmUp(
     private async Task RehearseAsync()
     {
         Meters.Rehearse();
+        await Task.Delay(HeadStart);
         foreach (var endpoint in endpoints.Endpoints.OfType<RouteEndpoint>().Where(HasExample))
         {
             foreach (var answer in endpoint.Metadata.OfType<EndpointDescription.Body>().Where(body => body.Status == StatusCodes.Status200OK))

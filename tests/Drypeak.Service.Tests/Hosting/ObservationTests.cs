@@ -18,8 +18,8 @@ public sealed partial class ObservationTests(RunningService service)
         await service.AnswerAsync(Body.With(("/curve", """{"model":"cubic"}"""), ("/specificGravity/determined", "\"assumed\"")));
         await service.RefusalAsync("{}");
         var after = await ScrapeAsync();
-        AssertMore(before, after, "drypeak_jobs_total", "job=\"moisture-density\",outcome=\"answered\"");
-        AssertMore(before, after, "drypeak_jobs_total", "job=\"moisture-density\",outcome=\"refused\"");
+        AssertMore(before, after, "drypeak_jobs_total", "operation=\"moisture-density\",outcome=\"answered\"");
+        AssertMore(before, after, "drypeak_jobs_total", "operation=\"moisture-density\",outcome=\"refused\"");
         AssertMore(before, after, "drypeak_curves_total", "model=\"cubic\",outcome=\"optimum\"");
         AssertMore(before, after, "drypeak_findings_total", "code=\"specific-gravity-assumed\"");
     }

@@ -33,7 +33,7 @@ internal static class Meters
     public static void Finding(string code, string severity) => Count(Findings, new("code", code), new("severity", severity));
 
     public static void Job(string job, int status) =>
-        Count(Jobs, new("job", job), new("outcome", status switch { < 400 => "answered", < 500 => "refused", _ => "failed" }));
+        Count(Jobs, new("operation", job), new("outcome", status switch { < 400 => "answered", < 500 => "refused", _ => "failed" }));
 
     public static void Picture(string mediaType, long bytes) => Pictures.Record(bytes, new KeyValuePair<string, object?>("type", mediaType));
 
