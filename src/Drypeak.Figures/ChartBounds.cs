@@ -4,8 +4,9 @@ namespace Drypeak.Figures;
 internal static class ChartBounds
 {
     /// <summary>The first thing that is out of bounds, as a sentence, or null.</summary>
-    public static string? Refusal(CompactionChart chart, FigureSize size) =>
-        Refusal(size)
+    public static string? Refusal(CompactionChart chart, FigureOptions options) =>
+        Refusal(options.Size)
+        ?? (options.Second == SecondAxis.VoidRatio && chart is not { SpecificGravity: { }, WaterDensity: { } } ? "An axis of void ratio needs the specific gravity, which the chart does not hold." : null)
         ?? Numbers(chart).Where(number => !(Math.Abs(number.Value) <= CompactionChart.LargestNumber))
             .Select(number => $"{number.What} must be a number between −1e9 and 1e9, not {number.Value}.").FirstOrDefault()
         ?? chart.Specimens.SelectMany(Bars).Where(half => half < 0).Select(half => $"Half of an interval must be 0 or more, not {half}.").FirstOrDefault()
@@ -35,6 +36,8 @@ internal static class ChartBounds
     {
         var points = chart.Specimens.Select(specimen => ("A specimen's", specimen.Point))
             .Concat(chart.Curve.Select(point => ("The curve's", point)))
+            .Concat((chart.Models ?? []).SelectMany(model => model.Curve).Select(point => ("A model's", point)))
+            .Concat((chart.Band ?? []).SelectMany(point => (ChartPoint[])[new(point.WaterContent, point.Lower), new(point.WaterContent, point.Upper)]).Select(point => ("The band's", point)))
             .Concat(chart.Optima.Select(optimum => ("An optimum's", optimum.Point)))
             .Concat(chart.FieldTests.Select(test => ("A field test's", test.Point)))
             .Concat((chart.Zone?.Corners ?? []).Select(corner => ("The zone's", corner)));

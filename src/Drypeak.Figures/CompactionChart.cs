@@ -7,7 +7,7 @@ namespace Drypeak.Figures;
 /// <summary>
 /// What a compaction figure shows, in the reader's units: everything needed, and nothing that a fit would have to find. Water contents are
 /// in % of dry mass, densities in <see cref="DensityUnit"/>. Every number is finite and within ±<see cref="LargestNumber"/>;
-/// <see cref="CompactionFigure.Refusal"/> says where one is not. Immutable, safe on any thread.
+/// <see cref="CompactionFigure.Refusal(CompactionChart, FigureOptions)"/> says where one is not. Immutable, safe on any thread.
 /// </summary>
 public sealed record CompactionChart
 {
@@ -29,6 +29,14 @@ public sealed record CompactionChart
 
     /// <summary>The fitted curve, in order of water content; empty where there is none.</summary>
     public IReadOnlyList<ChartPoint> Curve { get; init; } = [];
+
+    /// <summary>The curve's pointwise 95 % interval, in order of water content; null where there is none.</summary>
+    [JsonIgnore(Condition = JsonIgnoreCondition.WhenWritingNull)]
+    public IReadOnlyList<ChartBandPoint>? Band { get; init; }
+
+    /// <summary>Curves of other models, drawn where they are asked for; null where the chart carries none.</summary>
+    [JsonIgnore(Condition = JsonIgnoreCondition.WhenWritingNull)]
+    public IReadOnlyList<ChartModel>? Models { get; init; }
 
     /// <summary>The fitted optimum, or null where the tested range holds none.</summary>
     public ChartOptimum? Optimum { get; init; }
@@ -73,6 +81,17 @@ public readonly record struct ChartPoint(double WaterContent, double DryDensity)
     /// <summary>As numbers along the axes.</summary>
     internal DataPoint Data => new(WaterContent, DryDensity);
 }
+
+/// <summary>How far the curve is known at a water content.</summary>
+/// <param name="WaterContent">%.</param>
+/// <param name="Lower">In the chart's unit.</param>
+/// <param name="Upper">In the chart's unit.</param>
+public readonly record struct ChartBandPoint(double WaterContent, double Lower, double Upper);
+
+/// <summary>The curve of another model.</summary>
+/// <param name="Name">Its name, as in an answer.</param>
+/// <param name="Curve">In order of water content.</param>
+public sealed record ChartModel(string Name, IReadOnlyList<ChartPoint> Curve);
 
 /// <summary>A specimen's mark.</summary>
 /// <param name="WaterContent">%.</param>

@@ -20,8 +20,14 @@ public sealed record FigureOptions
     /// <summary>A title in place of the result, which then stands under it; null or blank: the result is the title.</summary>
     public string? Title { get; init; }
 
-    /// <summary>A unit for a second axis of density at the right, or null.</summary>
-    public DensityUnit? SecondUnit { get; init; }
+    /// <summary>Whether the figure says its result itself; false where it stands under a text that does, as in a report.</summary>
+    public bool SaysResult { get; init; } = true;
+
+    /// <summary>What a second axis at the right shows, or null where there is none.</summary>
+    public SecondAxis? Second { get; init; }
+
+    /// <summary>Names of the other models whose curves are drawn, of those that the chart carries.</summary>
+    public IReadOnlyList<string> Models { get; init; } = [];
 
     /// <summary>Which kinds of the chart's lines are drawn.</summary>
     public IReadOnlyList<PhaseLineKind> Lines { get; init; } = PhaseLineKindNames.All;

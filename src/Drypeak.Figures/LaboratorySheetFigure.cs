@@ -8,9 +8,6 @@ namespace Drypeak.Figures;
 /// </summary>
 public static class LaboratorySheetFigure
 {
-    /// <summary>A4 upright at 96 px to the inch.</summary>
-    public static FigureSize A4 { get; } = new(794, 1123);
-
     /// <summary>Lays the sheet out. Equal sheets give equal figures.</summary>
     /// <exception cref="ArgumentOutOfRangeException">There is no specimen, or more than a page has columns for.</exception>
     public static Figure Draw(LaboratorySheet sheet)
@@ -19,7 +16,7 @@ public static class LaboratorySheetFigure
         ArgumentOutOfRangeException.ThrowIfGreaterThan(sheet.WaterContents.Count, LaboratorySheet.MostSpecimens, nameof(sheet));
 
         var wording = new SheetWording(sheet);
-        var page = new SheetPage(A4);
+        var page = new SheetPage(Paper.A4.Size);
         page.Heading(SheetWording.Heading, wording.Method, wording.Summary);
         page.Blanks(2, [("Reference", PlainText.Clean(sheet.Reference ?? "")), ("Sampled at", ""), ("Soil", ""), ("Prepared how", ""), ("Tested by", ""), ("Date", "")]);
         page.Section("Apparatus");
@@ -31,6 +28,6 @@ public static class LaboratorySheetFigure
         page.Blanks(3, [.. wording.SoilBlanks.Select(label => (label, ""))]);
         page.Notes(wording.Notes);
         page.Foot(SheetWording.Foot);
-        return new Figure(A4, wording.Title, wording.Description, Palette.Light, page.Parts);
+        return new Figure(Paper.A4.Size, wording.Title, wording.Description, Palette.Light, page.Parts);
     }
 }

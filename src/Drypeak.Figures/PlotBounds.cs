@@ -4,8 +4,8 @@ namespace Drypeak.Figures;
 internal static class PlotBounds
 {
     /// <summary>The first thing that is out of bounds, as a sentence, or null.</summary>
-    public static string? Refusal(PlotChart chart, FigureSize size) =>
-        ChartBounds.Refusal(size)
+    public static string? Refusal(PlotChart chart, FigureOptions options) =>
+        ChartBounds.Refusal(options.Size)
         ?? (string.IsNullOrWhiteSpace(chart.Title) ? "The title must not be blank." : null)
         ?? (string.IsNullOrWhiteSpace(chart.Description) ? "The description must not be blank." : null)
         ?? TooMany("marks", chart.Marks.Count, PlotChart.MostMarks)

@@ -4,7 +4,7 @@ namespace Drypeak.Figures;
 
 /// <summary>
 /// What a figure of any two quantities shows, in the reader's units and words: curves, areas, limits, marks. Every number is finite and
-/// within ±<see cref="CompactionChart.LargestNumber"/>; <see cref="PlotFigure.Refusal"/> says where one is not. Immutable, safe on any thread.
+/// within ±<see cref="CompactionChart.LargestNumber"/>; <see cref="PlotFigure.Refusal(PlotChart, FigureOptions)"/> says where one is not. Immutable, safe on any thread.
 /// </summary>
 public sealed record PlotChart
 {

@@ -11,23 +11,37 @@ public static class PlotFigure
 {
     /// <summary>Why a figure cannot be drawn, as a sentence that gives the bound and the value; null where it can.</summary>
     /// <param name="chart">What to show.</param>
+    /// <param name="options">How to draw it.</param>
+    public static string? Refusal(PlotChart chart, FigureOptions options) => PlotBounds.Refusal(chart, options);
+
+    /// <summary>The same for a figure drawn in the usual manner.</summary>
+    /// <param name="chart">What to show.</param>
     /// <param name="size">px.</param>
-    public static string? Refusal(PlotChart chart, FigureSize size) => PlotBounds.Refusal(chart, size);
+    public static string? Refusal(PlotChart chart, FigureSize size) => Refusal(chart, new FigureOptions { Size = size });
 
     /// <summary>Lays the figure out. Equal charts and options give equal figures.</summary>
     /// <param name="chart">What to show.</param>
     /// <param name="options">How to draw it; of these size, theme and title count, for a plot's words are its own.</param>
-    /// <exception cref="ArgumentException">The chart or the size is outside its bounds; the message is that of <see cref="Refusal"/>.</exception>
+    /// <exception cref="ArgumentException">The chart or an option is outside its bounds; the message is that of <see cref="Refusal(PlotChart, FigureOptions)"/>.</exception>
     public static Figure Draw(PlotChart chart, FigureOptions options)
     {
-        if (Refusal(chart, options.Size) is { } refusal)
+        if (Refusal(chart, options) is { } refusal)
         {
             throw new ArgumentException(refusal);
         }
 
-        // What finds no room for its name stands in the key, which takes room itself: hence a second time.
-        var (figure, nameless) = Lay(chart, options, new HashSet<object>());
-        return nameless.Count == 0 ? figure : Lay(chart, options, nameless).Figure;
+        // What finds no room for its name stands in the key, which takes room itself: hence again, until all have theirs.
+        var keyed = new HashSet<object>(ReferenceEqualityComparer.Instance);
+        while (true)
+        {
+            var (figure, nameless) = Lay(chart, options, keyed);
+            if (nameless.IsSubsetOf(keyed))
+            {
+                return figure;
+            }
+
+            keyed.UnionWith(nameless);
+        }
     }
 
     private static (Figure Figure, IReadOnlySet<object> Nameless) Lay(PlotChart chart, FigureOptions options, IReadOnlySet<object> keyed)

@@ -93,23 +93,76 @@ internal sealed class SkiaCanvas : ICanvas, IDisposable
 
     public void Draw(TextRun text)
     {
-        var font = FontFor(text);
-        font.Size = (float)text.Size;
         var offset = text.Anchor switch { TextAnchor.Start => 0, TextAnchor.Middle => -text.Width / 2, _ => -text.Width };
 
         _canvas.Save();
         _canvas.Translate(PointOf(text.At));
         _canvas.RotateDegrees((float)text.Angle);
+        if (_holdsFonts && text.Link is { } link)
+        {
+            using var address = SKData.CreateCopy(System.Text.Encoding.ASCII.GetBytes(link + "\0"));
+            _canvas.DrawUrlAnnotation(new SKRect((float)offset, (float)-text.Size, (float)(offset + text.Width), (float)(0.3 * text.Size)), address);
+        }
+
+        if (text.Face.Covers(text.Text))
+        {
+            DrawOwn(text, text.Text, (float)offset);
+        }
+        else
+        {
+            foreach (var piece in SetText.Of(text.Text, text.Face))
+            {
+                if (piece is { Face: { } face, Shaped: { } shaped })
+                {
+                    DrawShaped(text, face, shaped, (float)offset);
+                }
+                else
+                {
+                    DrawOwn(text, piece.Text, (float)offset);
+                }
+
+                offset += piece.Width * text.Size;
+            }
+        }
+
+        _canvas.Restore();
+    }
+
+    private void DrawOwn(TextRun text, string letters, float offset)
+    {
+        var font = FontFor(text.Face, letters);
+        font.Size = (float)text.Size;
         if (text.Halo)
         {
-            using var outline = CoarseOutline(text.Text, font, (float)offset);
+            using var outline = CoarseOutline(letters, font, offset);
             UseStroke(new Stroke(ColorRole.Paper, text.HaloWidth));
             _canvas.DrawPath(outline, _paint);
         }
 
         UseFill(text.Color);
-        _canvas.DrawText(text.Text, (float)offset, 0, SKTextAlign.Left, font, _paint);
-        _canvas.Restore();
+        _canvas.DrawText(letters, offset, 0, SKTextAlign.Left, font, _paint);
+    }
+
+    private void DrawShaped(TextRun text, FallbackFace face, ShapedText shaped, float offset)
+    {
+        using var font = FontOf(face.Typeface);
+        font.Size = (float)text.Size;
+        using var builder = new SKTextBlobBuilder();
+        builder.AddPositionedRun(shaped.Glyphs, font, Array.ConvertAll(shaped.Places, place => new SKPoint(place.X * font.Size, place.Y * font.Size)));
+        using var blob = builder.Build();
+        if (blob is null)
+        {
+            return;
+        }
+
+        if (text.Halo)
+        {
+            UseStroke(new Stroke(ColorRole.Paper, text.HaloWidth));
+            _canvas.DrawText(blob, offset, 0, _paint);
+        }
+
+        UseFill(text.Color);
+        _canvas.DrawText(blob, offset, 0, _paint);
     }
 
     public void Dispose()
@@ -178,15 +231,18 @@ internal sealed class SkiaCanvas : ICanvas, IDisposable
 
     private static float Rounded(float coordinate) => MathF.Round(coordinate * 4) / 4;
 
-    private SKFont FontFor(TextRun text)
+    private SKFont FontFor(FontFace whole, string letters)
     {
-        var face = _holdsFonts && text.Face.Cut is { } cut && cut.Covers(text.Text) ? cut : text.Face;
+        var face = _holdsFonts && whole.Cut is { } cut && cut.Covers(letters) ? cut : whole;
         if (!_fonts.TryGetValue(face, out var font))
         {
-            font = new SKFont(face.Typeface) { Hinting = SKFontHinting.None, LinearMetrics = true, Subpixel = true, Edging = SKFontEdging.Antialias };
+            font = FontOf(face.Typeface);
             _fonts.Add(face, font);
         }
 
         return font;
     }
+
+    private static SKFont FontOf(SKTypeface typeface) =>
+        new(typeface) { Hinting = SKFontHinting.None, LinearMetrics = true, Subpixel = true, Edging = SKFontEdging.Antialias };
 }

@@ -120,7 +120,7 @@ public static class SvgWriter
             }
 
             // Where the reader lacks the font, another takes the same room, so that nothing comes to overlap.
-            if (text.Face.Covers(text.Text))
+            if (text.Face.Covers(text.Text) || SetText.IsCovered(text.Text, text.Face))
             {
                 Append("textLength", text.Width);
                 _svg.Append(" lengthAdjust=\"spacingAndGlyphs\"");

@@ -9,6 +9,12 @@ namespace Drypeak.Service;
 internal readonly record struct Charted<TAnswer, TChart>(TAnswer Answer, TChart? Chart)
     where TChart : class;
 
+/// <summary>An answer as another text than JSON, such as a table.</summary>
+/// <param name="MediaType">As in Accept.</param>
+/// <param name="Parameters">Of the media type, each after a semicolon.</param>
+/// <param name="Write">The text.</param>
+internal sealed record TextForm<TAnswer>(string MediaType, string Parameters, Func<TAnswer, string> Write);
+
 /// <summary>A job that takes JSON and gives JSON, or its picture: negotiate, read, check, compute, answer.</summary>
 internal static class JsonJob
 {
@@ -16,22 +22,16 @@ internal static class JsonJob
 
     private static readonly string[] JsonOrPicture = [Json, .. ChartFormat.All.Select(format => format.MediaType)];
 
-    /// <summary>Maps a job whose rules need nothing of the service.</summary>
-    public static RouteHandlerBuilder MapJob<TRequest, TAnswer>(
-        this IEndpointRouteBuilder app, string path, Func<TRequest, IReadOnlyList<Fault>> check, Func<TRequest, TAnswer> compute, string example)
-        where TRequest : class => app.MapJob(path, _ => check, compute, example);
-
     /// <summary>Maps a job that gives JSON.</summary>
     /// <param name="app">Where.</param>
     /// <param name="path">Its address.</param>
-    /// <param name="rules">Makes what finds every broken rule of a request. It is called at the first request: rules are slow to make, and the start waits for none.</param>
+    /// <param name="check">Every broken rule of a request.</param>
     /// <param name="compute">The answer to a request without broken rules.</param>
     /// <param name="example">A whole request that is accepted.</param>
     public static RouteHandlerBuilder MapJob<TRequest, TAnswer>(
-        this IEndpointRouteBuilder app, string path, Func<IServiceProvider, Func<TRequest, IReadOnlyList<Fault>>> rules, Func<TRequest, TAnswer> compute, string example)
+        this IEndpointRouteBuilder app, string path, Func<TRequest, IReadOnlyList<Fault>> check, Func<TRequest, TAnswer> compute, string example)
         where TRequest : class
     {
-        var check = new Lazy<Func<TRequest, IReadOnlyList<Fault>>>(() => rules(app.ServiceProvider));
         return app.MapPost(path, AnswerAsync).Takes<TRequest>(Json, example).Gives<TAnswer>(Json).Refuses(400, 406, 413, 415, 422);
 
         async Task<IResult> AnswerAsync(HttpContext context, Limits limits)
@@ -41,7 +41,7 @@ internal static class JsonJob
                 return Problems.NotAcceptable([Json]);
             }
 
-            var request = await RequestReader.ReadAsync(context, ServiceJson.Of<TRequest>(), check.Value, limits.BodyBytes);
+            var request = await RequestReader.ReadAsync(context, ServiceJson.Of<TRequest>(), check, limits.BodyBytes);
             return request.Succeeded ? Results.Json(compute(request.Value), ServiceJson.Of<TAnswer>()) : request.Problem;
         }
     }
@@ -56,11 +56,13 @@ internal static class JsonJob
     /// <param name="compute">The answer to a request without broken rules, and its chart.</param>
     /// <param name="example">A whole request that is accepted.</param>
     /// <param name="kind">The kind of its chart.</param>
+    /// <param name="text">A text that may be asked for as well; null: none.</param>
     public static RouteHandlerBuilder MapJob<TRequest, TAnswer, TChart>(
-        this IEndpointRouteBuilder app, string path, Func<TRequest, IReadOnlyList<Fault>> check, Func<TRequest, Charted<TAnswer, TChart>> compute, string example, ChartKind<TChart> kind)
+        this IEndpointRouteBuilder app, string path, Func<TRequest, IReadOnlyList<Fault>> check, Func<TRequest, Charted<TAnswer, TChart>> compute, string example, ChartKind<TChart> kind, TextForm<TAnswer>? text = null)
         where TRequest : class
         where TChart : class
     {
+        string[] offered = text is null ? JsonOrPicture : [.. JsonOrPicture, text.MediaType];
         app.MapChart(kind);
         var job = app.MapPost(path, AnswerAsync).Takes<TRequest>(Json, example).Gives<TAnswer>(Json).Refuses(400, 406, 413, 415, 422);
         ChartOptions.Describe(job, kind.Parameters, ChartFormat.All);
@@ -69,13 +71,13 @@ internal static class JsonJob
             job.Gives<byte[]>(format.MediaType);
         }
 
-        return job;
+        return text is null ? job : job.Gives<string>(text.MediaType);
 
         async Task<IResult> AnswerAsync(HttpContext context, Limits limits)
         {
-            if (Negotiation.Choose(context.Request, JsonOrPicture) is not { } mediaType)
+            if (Negotiation.Choose(context.Request, offered) is not { } mediaType)
             {
-                return Problems.NotAcceptable(JsonOrPicture);
+                return Problems.NotAcceptable(offered);
             }
 
             var faults = new List<Fault>();
@@ -94,13 +96,13 @@ internal static class JsonJob
 
             var (answer, chart) = compute(request.Value);
             context.Response.Headers.Vary = "Accept";
-            return format is null || options is null
-                ? Results.Json(answer, ServiceJson.Of<TAnswer>())
-                : Picture(chart, format, options);
+            return format is { } && options is { } ? Picture(chart, format, options)
+                : mediaType == text?.MediaType ? Results.Text(text.Write(answer), text.MediaType + text.Parameters)
+                : Results.Json(answer, ServiceJson.Of<TAnswer>());
         }
 
         IResult Picture(TChart? chart, ChartFormat format, ChartOptions options) =>
-            (chart is null ? "The answer leaves nothing to draw." : kind.Refusal(chart, options.Figure.Size)) is { } refusal
+            (chart is null ? "The answer leaves nothing to draw." : kind.Refusal(chart, options.Figure)) is { } refusal
                 ? Problems.InvalidValues([new Fault("", "not-drawable", refusal + " Check the values and their units; with Accept: application/json they are answered.")])
                 : Results.Bytes(kind.Picture(chart!, format, options), format.MediaType);
     }

@@ -1,10 +1,19 @@
+using Drypeak.Service.Earthwork;
+using Drypeak.Service.Exchange;
 using Drypeak.Service.Field;
 using Drypeak.Service.Hosting;
 using Drypeak.Service.Laboratory;
 using Drypeak.Service.Pages;
+using Drypeak.Service.Reports;
+
+if (args is [ComputeCommand.Name, .. var arguments])
+{
+    return await ComputeCommand.RunAsync(arguments);
+}
 
 var builder = WebApplication.CreateBuilder(args).AddDrypeakHosting();
-builder.Services.AddSingleton<MoistureDensityJob>().AddSingleton<ComparisonJob>().AddSingleton<FieldDensityJob>();
+builder.Services.AddSingleton<MoistureDensityJob>().AddSingleton<ComparisonJob>().AddSingleton<FieldDensityJob>()
+    .AddSingleton<RelativeDensityJob>().AddSingleton<OnePointJob>().AddSingleton<RapidMethodJob>().AddEarthworkJobs().AddExchangeJobs();
 
 var app = builder.Build();
 app.UseDrypeakHosting(PageEndpoints.NotFound);
@@ -17,15 +26,19 @@ FieldDensityJob.Map(app);
 RelativeDensityJob.Map(app);
 OnePointJob.Map(app);
 RapidMethodJob.Map(app);
+app.MapEarthwork();
+app.MapExchange();
 app.MapTestMethods();
 app.MapFindingKinds();
 app.MapSpecimenSheet();
+MoistureDensityReport.Map(app);
 app.MapPages();
 
 if (args is ["openapi", var path])
 {
     await app.ExportOpenApiAsync(path);
-    return;
+    return 0;
 }
 
 await app.RunAsync();
+return 0;

@@ -2,6 +2,10 @@ using System.Text.Json;
 using System.Text.Json.Serialization;
 using System.Text.Json.Serialization.Metadata;
 using Drypeak.Figures;
+using Drypeak.Service.Earthwork;
+using Drypeak.Service.Exchange.Ags;
+using Drypeak.Service.Exchange.Batch;
+using Drypeak.Service.Exchange.Csv;
 using Drypeak.Service.Field;
 using Drypeak.Service.Hosting;
 using Drypeak.Service.Laboratory;
@@ -48,6 +52,22 @@ internal static class ServiceJson
 [JsonSerializable(typeof(OnePointAnswer))]
 [JsonSerializable(typeof(RapidMethodRequest))]
 [JsonSerializable(typeof(RapidMethodAnswer))]
+[JsonSerializable(typeof(AgsAnswer))]
+[JsonSerializable(typeof(BatchSummaryLine))]
+[JsonSerializable(typeof(LaboratoryFileAnswer))]
+[JsonSerializable(typeof(FieldFileAnswer))]
+[JsonSerializable(typeof(SpecimenWaterRequest))]
+[JsonSerializable(typeof(SpecimenWaterAnswer))]
+[JsonSerializable(typeof(LiftWaterRequest))]
+[JsonSerializable(typeof(LiftWaterAnswer))]
+[JsonSerializable(typeof(QuantitiesRequest))]
+[JsonSerializable(typeof(QuantitiesAnswer))]
+[JsonSerializable(typeof(TestLocationsRequest))]
+[JsonSerializable(typeof(TestLocationsAnswer))]
+[JsonSerializable(typeof(RollerOutputRequest))]
+[JsonSerializable(typeof(RollerOutputAnswer))]
+[JsonSerializable(typeof(TestStripRequest))]
+[JsonSerializable(typeof(TestStripAnswer))]
 [JsonSerializable(typeof(CompactionChart))]
 [JsonSerializable(typeof(PlotChart))]
 internal sealed partial class ContractsJson : JsonSerializerContext;

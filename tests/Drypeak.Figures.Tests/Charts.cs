@@ -20,6 +20,7 @@ internal static class Charts
             new(17.3, 1.757, "5", false),
         ],
         Curve = Parabola(14.1, 1.826, 0.0063, 9.8, 17.3),
+        Band = [.. Enumerable.Range(0, 17).Select(i => 9.8 + (7.5 * i / 16)).Select(w => new ChartBandPoint(w, Peaked(w) - Half(w), Peaked(w) + Half(w)))],
         Optimum = new(14.1, 1.826, "14.1 %", "1.83 Mg/m³", [13.6, 14.6], [1.813, 1.839]),
         SpecificGravity = 2.68,
         WaterDensity = 998.2,
@@ -48,8 +49,14 @@ internal static class Charts
         Zone = new([new(12.1, 1.735), new(16.1, 1.735), new(16.1, 1.85), new(12.1, 1.95)], "accepted"),
     };
 
+    /// <summary>With curves of other models.</summary>
+    public static CompactionChart WithModels { get; } = Ternmarsh with
+    {
+        Models = [new("parabola", Parabola(14.2, 1.822, 0.0058, 9.8, 17.3)), new("spline", Parabola(13.6, 1.832, 0.0068, 9.8, 17.3))],
+    };
+
     /// <summary>A test without a peak.</summary>
-    public static CompactionChart WithoutOptimum { get; } = Ternmarsh with { Specimens = [.. Ternmarsh.Specimens.Take(3)], Curve = [], Optimum = null };
+    public static CompactionChart WithoutOptimum { get; } = Ternmarsh with { Specimens = [.. Ternmarsh.Specimens.Take(3)], Curve = [], Band = null, Optimum = null };
 
     /// <summary>Sizes, the extremes among them.</summary>
     public static Gen<FigureSize> Size { get; } = Gen.OneOf(
@@ -84,6 +91,10 @@ internal static class Charts
         from fieldTests in Gen.Select(Gen.Double[-3, 3], Gen.Double[0.9, 1.02], Text, Gen.Int[0, 4].Select(i => ((MarkRole[])[MarkRole.Measured, MarkRole.SetAside, MarkRole.Met, MarkRole.NotMet, MarkRole.Undecided])[i])).Array[0, 12]
         from zone in Text.Null()
         select Chart(unit, optimumWater, density, spread, bent, noise, setAside, labels, reference, hasOptimum, hasAdopted, hasCorrected, hasNext, gravity, saturation, airVoids) is var chart && fieldTests.Length == 0 ? chart : InField(chart, optimumWater, new Density(density).In(unit), fieldTests, zone);
+
+    private static double Peaked(double w) => 1.826 - (0.0063 * (w - 14.1) * (w - 14.1));
+
+    private static double Half(double w) => 0.013 + (0.0011 * (w - 13.5) * (w - 13.5));
 
     public static IReadOnlyList<ChartPoint> Parabola(double optimum, double maximum, double bent, double from, double to) =>
         [.. Enumerable.Range(0, 61).Select(i => from + ((to - from) * i / 60)).Select(w => new ChartPoint(w, maximum - (bent * (w - optimum) * (w - optimum))))];

@@ -96,7 +96,7 @@ public sealed class CompactionFigureTests
     {
         Assert.Equal(
             "Dry density against water content of 6 specimens, 1 of them set aside: 9.8 to 17.3 % water, 1.70 to 1.83 Mg/m³. "
-            + "The adopted maximum dry density is 1.84 Mg/m³ at an optimum water content of 13.7 %. "
+            + "The adopted maximum dry density is 1.84 Mg/m³ at an optimum water content of 13.7 %. The band about the curve is its 95 % interval at each water content. "
             + "The fitted curve has its maximum of 1.83 Mg/m³ at 14.1 %. Corrected for oversize: 1.88 Mg/m³ at 12.9 %. "
             + "Lines: zero air voids, saturation 90 %, saturation 80 %, air voids 5 %, air voids 10 %. Suggested next specimen: 14.5 % water.",
             CompactionFigure.Draw(Charts.Full, FigureSize.Default).Description);
@@ -132,7 +132,7 @@ public sealed class CompactionFigureTests
         Assert.Equal(4, places.Count);
         Assert.Equal([12.95, 13.45], places.Take(2).Select(place => Math.Round(Unscaled(marks, "cx", "data-x", place[0]), 3)));
         Assert.Equal([1.806, 1.846], places.Skip(2).Select(place => Math.Round(Unscaled(marks, "cy", "data-y", place[1]), 4)));
-        Assert.Contains(picture.Texts, text => text.EndsWith("bars: 95 % of each measurement", StringComparison.Ordinal));
+        Assert.Contains(picture.Texts, text => text.Contains("bars: 95 % of each measurement", StringComparison.Ordinal));
     }
 
     [Fact]
@@ -150,7 +150,7 @@ public sealed class CompactionFigureTests
     [InlineData(400, 320)]
     public void A_second_axis_marks_round_values_of_its_unit_where_the_first_has_the_same_density(int width, int height)
     {
-        var figure = CompactionFigure.Draw(Charts.Ternmarsh, new FigureOptions { Size = new(width, height), SecondUnit = DensityUnit.PoundPerCubicFoot });
+        var figure = CompactionFigure.Draw(Charts.Ternmarsh, new FigureOptions { Size = new(width, height), Second = new SecondAxis(DensityUnit.PoundPerCubicFoot) });
         var picture = SvgPicture.Read(SvgWriter.Write(figure));
         var marks = picture.OfClass("specimen").ToList();
         var second = picture.TextBoxes.Where(box => box.Left > marks.Max(mark => SvgPicture.Number(mark, "cx"))
@@ -200,6 +200,59 @@ public sealed class CompactionFigureTests
         var picture = SvgPicture.Of(Charts.InTheField with { Specimens = [], Curve = [], Optimum = null }, FigureSize.Default);
         Assert.Equal(4, picture.OfClass("field-test").Count());
         Assert.DoesNotContain(picture.Texts, text => text.Contains("optimum", StringComparison.OrdinalIgnoreCase));
+    }
+
+    [Fact]
+    public void The_band_lies_about_the_curve_as_far_as_its_numbers()
+    {
+        var picture = SvgPicture.Of(Charts.Ternmarsh, FigureSize.Default);
+        var marks = picture.OfClass("specimen").ToList();
+        var outline = Places(Assert.Single(picture.OfClass("band"), shape => shape.Name.LocalName == "path"))
+            .Select(place => (W: Unscaled(marks, "cx", "data-x", place[0]), Density: Unscaled(marks, "cy", "data-y", place[1]))).ToList();
+        var band = Charts.Ternmarsh.Band!;
+        Assert.Equal(band[0].WaterContent, outline.Min(corner => corner.W), 0.01);
+        Assert.Equal(band[^1].WaterContent, outline.Max(corner => corner.W), 0.01);
+        Assert.Equal(band.Max(point => point.Upper), outline.Max(corner => corner.Density), 1e-3);
+        Assert.Contains(picture.Texts, text => text.Contains("band: 95 % of the curve", StringComparison.Ordinal));
+        Assert.Empty(SvgPicture.Of(Charts.Ternmarsh with { Band = null }, FigureSize.Default).OfClass("band"));
+    }
+
+    [Fact]
+    public void Other_models_are_drawn_where_they_are_asked_for_each_with_its_name()
+    {
+        SvgPicture Asked(params string[] models) => SvgPicture.Read(SvgWriter.Write(CompactionFigure.Draw(Charts.WithModels, new FigureOptions { Models = models })));
+        Assert.Empty(Asked().OfClass("model"));
+        Assert.Single(Asked("spline", "cubic").OfClass("model"));
+        Assert.Contains("spline", Asked("spline").Texts);
+        Assert.Equal(2, Asked("spline", "parabola").OfClass("model").Count());
+    }
+
+    /// <summary>e = Gs·ρw/ρd − 1.</summary>
+    [Fact]
+    public void An_axis_of_void_ratio_marks_round_values_where_the_density_has_them_and_needs_the_solids()
+    {
+        var options = new FigureOptions { Second = SecondAxis.VoidRatio };
+        var picture = SvgPicture.Read(SvgWriter.Write(CompactionFigure.Draw(Charts.Ternmarsh, options)));
+        var marks = picture.OfClass("specimen").ToList();
+        Assert.Contains("Void ratio", picture.Texts);
+        var values = picture.TextBoxes.Where(box => box.Left > marks.Max(mark => SvgPicture.Number(mark, "cx")) && box.Text.StartsWith("0.", StringComparison.Ordinal)).ToList();
+        Assert.True(values.Count >= 3);
+        Assert.All(values, box => Assert.Equal(
+            2.68 * 0.9982 / (1 + double.Parse(box.Text, System.Globalization.CultureInfo.InvariantCulture)), Unscaled(marks, "cy", "data-y", (box.Top + box.Bottom) / 2), 0.004));
+        Assert.Equal("An axis of void ratio needs the specific gravity, which the chart does not hold.", CompactionFigure.Refusal(Charts.Ternmarsh with { SpecificGravity = null }, options));
+    }
+
+    [Fact]
+    public void A_line_that_finds_no_room_for_its_name_stands_in_the_key()
+    {
+        foreach (var size in (FigureSize[])[new(320, 280), new(240, 240), new(480, 320)])
+        {
+            var texts = SvgPicture.Of(Charts.Ternmarsh with { AirVoids = [5] }, size).Texts.ToList();
+            foreach (var (full, brief) in ((string, string)[])[("zero air voids", "S 100 %"), ("saturation 90 %", "S 90 %"), ("saturation 80 %", "S 80 %"), ("air voids 5 %", "A 5 %")])
+            {
+                Assert.Contains(texts, text => text == full || text == brief);
+            }
+        }
     }
 
     [Theory]

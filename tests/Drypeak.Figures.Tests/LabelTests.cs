@@ -56,7 +56,7 @@ public sealed class LabelTests
     public void Texts_keep_apart_in_every_language_and_under_any_title()
     {
         Gen.Select(Charts.Any, Charts.Size, Gen.Int[0, Language.All.Count - 1], Gen.OneOf("", "Ternmarsh", new string('M', 200), "\u202E<&\">\n中")).Sample(
-            (chart, size, language, title) => AssertReadable(chart, new FigureOptions { Size = size, Language = Language.All[language], Title = title, SecondUnit = title.Length == 0 ? null : (DensityUnit)language }), iter: 200);
+            (chart, size, language, title) => AssertReadable(chart, new FigureOptions { Size = size, Language = Language.All[language], Title = title, Second = title.Length == 0 ? null : language == 0 && chart.SpecificGravity is { } ? SecondAxis.VoidRatio : new SecondAxis((DensityUnit)language) }), iter: 200);
     }
 
     private static void AssertReadable(CompactionChart chart, FigureSize size) => AssertReadable(chart, new FigureOptions { Size = size });

@@ -25,7 +25,7 @@ public sealed class LaboratorySheetTests
             MassUnit = MassUnit.Kilogram,
         };
         var boxes = Picture(sheet).TextBoxes.ToList();
-        var (width, height) = (LaboratorySheetFigure.A4.Width, LaboratorySheetFigure.A4.Height);
+        var (width, height) = (Paper.A4.Size.Width, Paper.A4.Size.Height);
         for (var i = 0; i < boxes.Count; i++)
         {
             Assert.True(boxes[i].Size >= 10, $"{boxes[i]} is too small to print.");

@@ -52,7 +52,10 @@ internal sealed class SvgPicture
     {
         var font = (string?)text.Attribute("font-weight") == "600" ? SemiBold : Regular;
         var size = Number(text, "font-size");
-        var width = font.MeasureText(text.Value) / font.Size * size;
+
+        // Letters that the font lacks come from others, and the reader's own take the room that the text asks for.
+        var isOwn = text.Value.EnumerateRunes().All(rune => font.ContainsGlyph(rune.Value));
+        var width = !isOwn && text.Attribute("textLength") is { } ? Number(text, "textLength") : font.MeasureText(text.Value) / font.Size * size;
         var left = (string?)text.Attribute("text-anchor") switch { "middle" => -width / 2, "end" => -width, _ => 0 };
         var (top, bottom) = (font.Metrics.Ascent / font.Size * size, font.Metrics.Descent / font.Size * size);
         var angle = Angle(text) * Math.PI / 180;

@@ -79,10 +79,11 @@ public sealed partial class SvgWriterTests
     {
         ["full"] = (Charts.Full, new FigureOptions()),
         ["small"] = (Charts.Full, new FigureOptions { Size = new(320, 280) }),
-        ["dark-second-unit"] = (Charts.Ternmarsh, new FigureOptions { Theme = Theme.Dark, SecondUnit = DensityUnit.PoundPerCubicFoot }),
+        ["dark-second-unit"] = (Charts.Ternmarsh, new FigureOptions { Theme = Theme.Dark, Second = new SecondAxis(DensityUnit.PoundPerCubicFoot) }),
         ["print-french-error-bars"] = (
             Charts.Ternmarsh with { Specimens = [.. Charts.Ternmarsh.Specimens.Select(specimen => specimen with { WaterContentPlusMinus = 0.2, DryDensityPlusMinus = 0.012 })] },
             new FigureOptions { Theme = Theme.Print, Language = Language.All.Single(language => language.Code == "fr") }),
+        ["models-void-ratio"] = (Charts.WithModels, new FigureOptions { Second = SecondAxis.VoidRatio, Models = ["parabola", "spline"] }),
         ["field-tests"] = (Charts.InTheField, new FigureOptions()),
         ["without-optimum-own-title-no-lines"] = (Charts.WithoutOptimum, new FigureOptions { Title = "Ternmarsh, borrow area 7", Lines = [] }),
     };

@@ -12,9 +12,6 @@ public sealed class FontFace
     /// <summary>Code points below this are in the table: Latin, Greek, Cyrillic, punctuation, super- and subscripts, arrows, operators.</summary>
     private const int TableLength = 0x2300;
 
-    /// <summary>Taken for a letter that the font lacks, in em: the reader's own font draws it, and few letters are wider.</summary>
-    private const double UnknownAdvance = 1.3;
-
     private readonly float[] _advances;
 
     internal FontFace(int weight, byte[] file)
@@ -49,16 +46,20 @@ public sealed class FontFace
 
     internal SKTypeface Typeface { get; }
 
-    /// <summary>Width of a line of text at a size in px; letters that the font lacks count as wide ones.</summary>
-    internal double Measure(string text, double size)
+    /// <summary>Width of a line of text at a size in px; letters that the font lacks are set by others (<see cref="SetText"/>).</summary>
+    internal double Measure(string text, double size) =>
+        size * (Covers(text) ? MeasureOwn(text) : SetText.Of(text, this).Sum(piece => piece.Width));
+
+    /// <summary>Width in em of a text of which the font has every letter.</summary>
+    internal double MeasureOwn(string text)
     {
         var em = 0.0;
         foreach (var rune in text.EnumerateRunes())
         {
-            em += Has(rune) ? _advances[rune.Value] : UnknownAdvance;
+            em += _advances[rune.Value];
         }
 
-        return em * size;
+        return em;
     }
 
     /// <summary>Whether the font has every letter of the text.</summary>
@@ -75,7 +76,7 @@ public sealed class FontFace
         return true;
     }
 
-    private bool Has(Rune rune) => rune.Value < TableLength && !float.IsNaN(_advances[rune.Value]);
+    internal bool Has(Rune rune) => rune.Value < TableLength && !float.IsNaN(_advances[rune.Value]);
 
     private static float[] ReadAdvances(SKFont font)
     {

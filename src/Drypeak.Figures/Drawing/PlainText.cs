@@ -49,16 +49,64 @@ internal static class PlainText
         }
 
         var starts = StringInfo.ParseCombiningCharacters(text);
-        for (var kept = starts.Length - 1; kept > 0; kept--)
+        string Shortened(int kept) => string.Concat(text.AsSpan(0, starts[kept]).TrimEnd(), Ellipsis);
+        var (fits, fails) = (0, starts.Length);
+        while (fails - fits > 1)
         {
-            var shortened = string.Concat(text.AsSpan(0, starts[kept]).TrimEnd(), Ellipsis);
-            if (face.Measure(shortened, size) <= width)
+            var middle = (fits + fails) / 2;
+            (fits, fails) = face.Measure(Shortened(middle), size) <= width ? (middle, fails) : (fits, middle);
+        }
+
+        return fits > 0 ? Shortened(fits) : "";
+    }
+
+    /// <summary>The text in lines no wider than <paramref name="width"/> px: broken at spaces, and within a word only where it is wider than a line. Nothing is left out but the spaces at the breaks.</summary>
+    public static IReadOnlyList<string> Wrap(string text, FontFace face, double size, double width)
+    {
+        var lines = new List<string>();
+        var line = "";
+        foreach (var word in text.Split(' ', StringSplitOptions.RemoveEmptyEntries))
+        {
+            var longer = line.Length == 0 ? word : $"{line} {word}";
+            if (face.Measure(longer, size) <= width)
             {
-                return shortened;
+                line = longer;
+                continue;
+            }
+
+            if (line.Length > 0)
+            {
+                lines.Add(line);
+            }
+
+            line = word;
+            while (face.Measure(line, size) > width && Fitting(line, face, size, width) is var fitting && fitting < line.Length)
+            {
+                lines.Add(line[..fitting]);
+                line = line[fitting..];
             }
         }
 
-        return "";
+        if (line.Length > 0)
+        {
+            lines.Add(line);
+        }
+
+        return lines;
+    }
+
+    /// <summary>How much of a word fits into a line: at least one letter with its accents.</summary>
+    private static int Fitting(string word, FontFace face, double size, double width)
+    {
+        var starts = StringInfo.ParseCombiningCharacters(word);
+        var (low, high) = (1, starts.Length);
+        while (low < high)
+        {
+            var middle = (low + high + 1) / 2;
+            (low, high) = face.Measure(word[..(middle == starts.Length ? word.Length : starts[middle])], size) <= width ? (middle, high) : (low, middle - 1);
+        }
+
+        return low == starts.Length ? word.Length : starts[low];
     }
 
     private static bool IsDirection(int value) => value is 0x200E or 0x200F or (>= 0x202A and <= 0x202E) or (>= 0x2066 and <= 0x2069);

@@ -8,6 +8,9 @@ public readonly record struct Place(double X, double Y)
     /// <summary>The place at a fraction of the way to <paramref name="other"/>.</summary>
     internal Place Toward(Place other, double fraction) => new(X + ((other.X - X) * fraction), Y + ((other.Y - Y) * fraction));
 
+    /// <summary>The place so far to the right and downward.</summary>
+    internal Place Moved(double x, double y) => new(X + x, Y + y);
+
     /// <summary>The distance to another place, px.</summary>
     internal double To(Place other) => Math.Sqrt(((other.X - X) * (other.X - X)) + ((other.Y - Y) * (other.Y - Y)));
 }
@@ -49,6 +52,11 @@ public abstract record Shape
 
     /// <summary>Draws the shape by the canvas's primitive for it.</summary>
     internal abstract void DrawOn(ICanvas canvas);
+
+    /// <summary>The same shape elsewhere.</summary>
+    /// <param name="x">px to the right.</param>
+    /// <param name="y">px downward.</param>
+    internal abstract Shape Moved(double x, double y);
 }
 
 /// <summary>Lines that are drawn alike: each run is a sequence of places joined in turn.</summary>
@@ -57,6 +65,8 @@ public abstract record Shape
 public sealed record Lines(IReadOnlyList<IReadOnlyList<Place>> Runs, Stroke Stroke) : Shape
 {
     internal override void DrawOn(ICanvas canvas) => canvas.Draw(this);
+
+    internal override Shape Moved(double x, double y) => this with { Runs = [.. Runs.Select(run => (IReadOnlyList<Place>)[.. run.Select(place => place.Moved(x, y))])] };
 }
 
 /// <summary>A disc, or a ring where it has no fill.</summary>
@@ -67,6 +77,8 @@ public sealed record Lines(IReadOnlyList<IReadOnlyList<Place>> Runs, Stroke Stro
 public sealed record Disc(Place Center, double Radius, ColorRole? Fill, Stroke? Stroke) : Shape
 {
     internal override void DrawOn(ICanvas canvas) => canvas.Draw(this);
+
+    internal override Shape Moved(double x, double y) => this with { Center = Center.Moved(x, y) };
 }
 
 /// <summary>A closed area.</summary>
@@ -77,6 +89,8 @@ public sealed record Disc(Place Center, double Radius, ColorRole? Fill, Stroke? 
 public sealed record Polygon(IReadOnlyList<Place> Corners, ColorRole? Fill, double Opacity, Stroke? Edge) : Shape
 {
     internal override void DrawOn(ICanvas canvas) => canvas.Draw(this);
+
+    internal override Shape Moved(double x, double y) => this with { Corners = [.. Corners.Select(corner => corner.Moved(x, y))] };
 }
 
 /// <summary>A line of text in the embedded font.</summary>
@@ -95,6 +109,9 @@ public sealed record TextRun(string Text, Place At, double Size, FontFace Face, 
     /// <summary>Whether the letters have an edge of paper about them, which hides the lines behind.</summary>
     public bool Halo { get; init; }
 
+    /// <summary>An address that the text leads to, in a format that has such; null: none.</summary>
+    public string? Link { get; init; }
+
     /// <summary>Width of the halo's stroke, half of which shows, px.</summary>
     internal double HaloWidth => Size * 0.3;
 
@@ -108,6 +125,8 @@ public sealed record TextRun(string Text, Place At, double Size, FontFace Face, 
     internal OrientedBox InkBox => Box(InkAscent * Size, InkDescent * Size);
 
     internal override void DrawOn(ICanvas canvas) => canvas.Draw(this);
+
+    internal override Shape Moved(double x, double y) => this with { At = At.Moved(x, y) };
 
     private OrientedBox Box(double ascent, double descent)
     {

@@ -11,12 +11,13 @@ internal sealed class AcceptanceZone(CompactionChart chart, Plot plot, TypeScale
 
     public FigurePart Draw() => new("zone", _shape is null ? [] : [PlotStyles.Of(PlotAreaRole.Accepted, _shape.Corners, type)]);
 
-    public void Label(LabelSpace space)
+    public void Label(LabelSpace space, IReadOnlySet<object> keyed, ISet<object> nameless)
     {
         var text = PlainText.Clean(chart.Zone?.Label ?? "");
-        if (_shape is not null && text.Length > 0)
+        if (_shape is not null && text.Length > 0 && !keyed.Contains(chart.Zone!)
+            && space.Place(_shape.LabelsWithin(text, type.Label, ColorRole.Moss).Select(label => label with { Name = "zone-label" }), Barriers.All) is null)
         {
-            space.Place(_shape.LabelsWithin(text, type.Label, ColorRole.Moss).Select(label => label with { Name = "zone-label" }), Barriers.All);
+            nameless.Add(chart.Zone!);
         }
     }
 }

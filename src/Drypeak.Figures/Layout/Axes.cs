@@ -58,7 +58,7 @@ internal sealed class Axes(Plot plot, AxisWords words, FigureSize size, TypeScal
 
         var right = plot.Area.Right;
         IEnumerable<Place[]> Marks(IEnumerable<double> values, double length) =>
-            values.Select(second.InFirst).Select(plot.Y.At).Select(Crisp).Select(y => Segment(right, y, right + length, y));
+            values.Select(second.ToFirst).Select(plot.Y.At).Select(Crisp).Select(y => Segment(right, y, right + length, y));
         return [Segment(right, plot.Area.Bottom, right, plot.Area.Top), .. Marks(second.Ticks.Values, type.TickLength), .. Marks(second.Ticks.Halves, type.TickLength / 2)];
     }
 
@@ -80,7 +80,7 @@ internal sealed class Axes(Plot plot, AxisWords words, FigureSize size, TypeScal
         yield return Title(words.Y, new Place(type.Margin, plot.Area.Top - (TitleAboveAxis * type.AxisTitle)), TextAnchor.Start);
         if (words.Second is { } second)
         {
-            yield return Title(second, new Place(size.Width - type.Margin, plot.Area.Top - (TitleAboveAxis * type.AxisTitle)), TextAnchor.End);
+            yield return Title(second.Title, new Place(size.Width - type.Margin, plot.Area.Top - (TitleAboveAxis * type.AxisTitle)), TextAnchor.End);
         }
 
         yield return Title(words.X, new Place(plot.Area.Right, size.Height - plot.Below - XTitleDepth(type)), TextAnchor.End);
@@ -122,7 +122,7 @@ internal sealed class Axes(Plot plot, AxisWords words, FigureSize size, TypeScal
     {
         foreach (var value in plot.Second?.Ticks.Values ?? [])
         {
-            var place = new Place(plot.Area.Right + LabelGap(type), plot.Y.At(plot.Second!.InFirst(value)) + (0.33 * type.Label));
+            var place = new Place(plot.Area.Right + LabelGap(type), plot.Y.At(plot.Second!.ToFirst(value)) + (0.33 * type.Label));
             yield return TickLabel(words.Number(plot.Second.Ticks.Label(value)), place, TextAnchor.Start);
         }
     }

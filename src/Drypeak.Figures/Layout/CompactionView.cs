@@ -9,6 +9,9 @@ internal static class CompactionView
     private const double RoomBelow = 0.09;
     private const double RoomAbove = 0.14;
 
+    /// <summary>By how much of the range of density the view grows for the band at most, on either side.</summary>
+    private const double BandReach = 0.1;
+
     /// <summary>Where the zero-air-voids line should have come into view, as a share of the range of water content.</summary>
     private const double WetPartWithLine = 0.85;
 
@@ -32,6 +35,13 @@ internal static class CompactionView
         {
             water = water.With(point.WaterContent);
             density = density.With(reach.Clamp(point.DryDensity));
+        }
+
+        // The band where it is narrow; where it widens it may be cut.
+        var reachOfBand = new Interval(density.From - (density.Span * BandReach), density.To + (density.Span * BandReach));
+        foreach (var point in chart.Band ?? [])
+        {
+            density = density.With(reachOfBand.Clamp(point.Lower)).With(reachOfBand.Clamp(point.Upper));
         }
 
         // As much of the zone as its tests and the curve are near to.

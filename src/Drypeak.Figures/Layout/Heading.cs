@@ -20,7 +20,7 @@ internal sealed record Heading(IReadOnlyList<TextRun> Runs, double Bottom)
         var top = type.Margin * 0.6;
 
         var (lines, titleSize) = Title(words, width, type);
-        foreach (var line in lines)
+        foreach (var line in lines.Where(line => line.Length > 0))
         {
             Add(line, titleSize, EmbeddedFont.SemiBold, ColorRole.Ink);
         }

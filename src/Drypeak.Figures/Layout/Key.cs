@@ -1,4 +1,5 @@
 using Drypeak.Figures.Drawing;
+using Drypeak.Figures.Layout.Plots;
 
 namespace Drypeak.Figures.Layout;
 
@@ -6,7 +7,28 @@ namespace Drypeak.Figures.Layout;
 /// <param name="Text">What the sample is.</param>
 /// <param name="Sample">The sample about its middle.</param>
 /// <param name="SampleWidth">px.</param>
-internal sealed record KeyEntry(string Text, Func<Place, IEnumerable<Shape>> Sample, double SampleWidth);
+internal sealed record KeyEntry(string Text, Func<Place, IEnumerable<Shape>> Sample, double SampleWidth)
+{
+    private const double Length = 26;
+
+    /// <summary>A piece of a line.</summary>
+    public static KeyEntry Line(string text, Stroke stroke, TypeScale type)
+    {
+        var half = Length * type.Unit / 2;
+        return new KeyEntry(PlainText.Clean(text), at => [new Lines([[at with { X = at.X - half }, at with { X = at.X + half }]], stroke) { Name = "key-line" }], 2 * half);
+    }
+
+    /// <summary>A piece of an area.</summary>
+    public static KeyEntry Zone(string text, PlotAreaRole role, TypeScale type)
+    {
+        var (halfWidth, halfHeight) = (Length * type.Unit / 2, 0.35 * type.Label);
+        return new KeyEntry(PlainText.Clean(text), at =>
+        {
+            var (left, right, top, bottom) = (at.X - halfWidth, at.X + halfWidth, at.Y - halfHeight, at.Y + halfHeight);
+            return [PlotStyles.Of(role, [new(left, top), new(right, top), new(right, bottom), new(left, bottom)], type) with { Name = "key-area" }];
+        }, 2 * halfWidth);
+    }
+}
 
 /// <summary>What could not be written at its place in the plot, in rows under it; beside the title of the axis if one row is enough.</summary>
 internal sealed class Key

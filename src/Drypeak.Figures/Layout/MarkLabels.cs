@@ -8,11 +8,18 @@ internal static class MarkLabels
     private static readonly (double X, double Y)[] Directions =
         [(1, 0), (-1, 0), (0, -1), (0, 1), (0.75, -0.75), (-0.75, -0.75), (0.75, 0.75), (-0.75, 0.75)];
 
-    /// <summary>Around a mark, at every side.</summary>
-    public static IEnumerable<TextRun> Around(Place center, double radius, string text, double size, ColorRole color, double widest)
+    /// <summary>Around a mark, at every side: touching it or nearly so.</summary>
+    public static IEnumerable<TextRun> Around(Place center, double radius, string text, double size, ColorRole color, double widest) =>
+        At([radius + 3, radius + (0.8 * size)], center, text, size, color, widest);
+
+    /// <summary>The same a line further off, for a label whose color says whose it is.</summary>
+    public static IEnumerable<TextRun> FurtherAround(Place center, double radius, string text, double size, ColorRole color, double widest) =>
+        At([radius + (1.7 * size)], center, text, size, color, widest);
+
+    private static IEnumerable<TextRun> At(double[] reaches, Place center, string text, double size, ColorRole color, double widest)
     {
         var shown = PlainText.Elide(text, EmbeddedFont.Regular, size, widest);
-        foreach (var reach in (double[])[radius + 3, radius + (0.8 * size)])
+        foreach (var reach in reaches)
         {
             foreach (var (x, y) in Directions)
             {

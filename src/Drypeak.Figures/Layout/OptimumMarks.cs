@@ -76,9 +76,14 @@ internal sealed class OptimumMarks(CompactionChart chart, Wording wording, Plot 
                 return;
             }
 
-            space.PlaceFullest(words(optimum).Select(text => MarkLabels
-                .Around(plot.At(optimum.Point), Arm * 1.4 * type.Unit, text, type.Label, ColorRole.Clay, plot.Area.Width)
-                .Select(candidate => candidate with { Name = "optimum-label" })));
+            var (at, radius) = (plot.At(optimum.Point), Arm * 1.4 * type.Unit);
+            space.PlaceFullest(words(optimum)
+                .SelectMany(text => (IEnumerable<TextRun>[])
+                [
+                    MarkLabels.Around(at, radius, text, type.Label, ColorRole.Clay, plot.Area.Width),
+                    MarkLabels.FurtherAround(at, radius, text, type.Label, ColorRole.Clay, plot.Area.Width),
+                ])
+                .Select(candidates => candidates.Select(candidate => candidate with { Name = "optimum-label" })));
         }
     }
 

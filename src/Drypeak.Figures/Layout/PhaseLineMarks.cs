@@ -12,12 +12,22 @@ internal sealed class PhaseLineMarks(PhaseLines lines, Plot plot, TypeScale type
     public void Block(LabelSpace space) => _drawn.ForEach(drawn => space.Block(Barriers.PhaseLines, drawn.Course.Whole(), drawn.Line));
 
     /// <summary>Places the labels and draws the lines with gaps for them.</summary>
-    public FigurePart DrawLabeled(LabelSpace space) => new("lines", _drawn.ConvertAll(drawn => DrawLabeled(drawn.Line, drawn.Course, space)));
+    /// <param name="space">The room that is left.</param>
+    /// <param name="keyed">Lines whose names stand in the key.</param>
+    /// <param name="nameless">Receives the lines whose names found no room.</param>
+    public FigurePart DrawLabeled(LabelSpace space, IReadOnlySet<object> keyed, ISet<object> nameless) =>
+        new("lines", _drawn.ConvertAll(drawn => DrawLabeled(drawn.Line, drawn.Course, space, keyed, nameless)));
 
-    private Lines DrawLabeled(PhaseLine line, Course course, LabelSpace space)
+    private Lines DrawLabeled(PhaseLine line, Course course, LabelSpace space, IReadOnlySet<object> keyed, ISet<object> nameless)
     {
         var stroke = line.Stroke(type, theme);
-        return new Lines(LineLabels.Place(line.Labels, line, course, type.Label, stroke.Color, space) ?? [course.Whole()], stroke) { Name = line.Name };
+        var parted = keyed.Contains(line) ? null : LineLabels.Place(line.Labels, line, course, type.Label, stroke.Color, space);
+        if (parted is null)
+        {
+            nameless.Add(line);
+        }
+
+        return new Lines(parted ?? [course.Whole()], stroke) { Name = line.Name };
     }
 
     /// <summary>Over the axis of water content, from 0 on. Density falls as water rises, so a line comes into the plot once or not at all.</summary>

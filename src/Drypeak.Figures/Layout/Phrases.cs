@@ -38,6 +38,15 @@ internal sealed record Phrases
     /// <summary>What the bars on the marks are.</summary>
     public required string Bars { get; init; }
 
+    /// <summary>What the band about the curve is.</summary>
+    public required string Band { get; init; }
+
+    /// <summary>Void ratio.</summary>
+    public required string VoidRatio { get; init; }
+
+    /// <summary>The models of curves, by their names in an answer.</summary>
+    public required IReadOnlyDictionary<string, string> Models { get; init; }
+
     /// <summary>{0} a density, {1} a water content.</summary>
     public required string DensityAtWater { get; init; }
 
@@ -93,8 +102,9 @@ internal sealed record Phrases
     /// <param name="Bars">What the bars are.</param>
     /// <param name="Lines">{0} the lines' names.</param>
     /// <param name="Next">{0} a water content.</param>
+    /// <param name="Band">What the band is.</param>
     /// <param name="FieldTests">{0} how many, {1} each outcome with how many have it; empty where none was judged.</param>
     /// <param name="Zone">{0} the zone's name.</param>
     public sealed record Description(
-        string NoSpecimens, string Specimens, string One, string Many, string ManySetAside, string NoResult, string Result, string Fitted, string Corrected, string Bars, string Lines, string Next, string FieldTests, string Zone);
+        string NoSpecimens, string Specimens, string One, string Many, string ManySetAside, string NoResult, string Result, string Fitted, string Corrected, string Bars, string Lines, string Next, string Band, string FieldTests, string Zone);
 }

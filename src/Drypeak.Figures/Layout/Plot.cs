@@ -71,7 +71,7 @@ internal sealed class Plot
         var bottom = size.Height - Axes.HeightBelow(type) - below;
         var mostTicks = MostUpward(bottom - top, type);
         var yTicks = YTicksOf(view, mostTicks);
-        var second = words.SecondRatio is { } ratio ? SecondScale.Of(view.Y, ratio, mostTicks) : null;
+        var second = words.Second is { } axis ? SecondScale.Of(view.Y, axis, mostTicks) : null;
 
         var labelWidth = LabelWidths(yTicks, words, type)
             .Append(words.YValue is { } value ? EmbeddedFont.SemiBold.Measure(value.Text, type.Value) : 0)

@@ -1,14 +1,14 @@
 namespace Drypeak.Figures.Layout;
 
-/// <summary>The axis of density once more, marked at round values of another unit.</summary>
-/// <param name="Ratio">What 1 of the first unit is in the second.</param>
-/// <param name="Ticks">In the second unit.</param>
-internal sealed record SecondScale(double Ratio, Ticks Ticks)
+/// <summary>The axis upward once more, marked at round values of another quantity.</summary>
+/// <param name="ToFirst">A value of the second axis on the first.</param>
+/// <param name="Ticks">On the second axis.</param>
+internal sealed record SecondScale(Func<double, double> ToFirst, Ticks Ticks)
 {
     /// <summary>Over the same range.</summary>
-    public static SecondScale Of(Interval density, double ratio, double mostTicks) =>
-        new(ratio, Ticks.Within(new Interval(density.From * ratio, density.To * ratio), mostTicks));
-
-    /// <summary>A value of the second unit in the first.</summary>
-    public double InFirst(double value) => value / Ratio;
+    public static SecondScale Of(Interval range, SecondAxisWords axis, double mostTicks)
+    {
+        var (one, other) = (axis.FromFirst(range.From), axis.FromFirst(range.To));
+        return new SecondScale(axis.ToFirst, Ticks.Within(Interval.Of(one).With(other), mostTicks));
+    }
 }

@@ -53,6 +53,9 @@ internal sealed class Wording
     /// <summary>What the bars on the marks are, or empty where there is none.</summary>
     public string Bars => HasBars ? _phrases.Bars : "";
 
+    /// <summary>What the band about the curve is, or empty where there is none.</summary>
+    public string Band => HasBand ? _phrases.Band : "";
+
     /// <summary>The 95 % intervals of the result, or empty.</summary>
     public string Intervals
     {
@@ -73,18 +76,17 @@ internal sealed class Wording
     /// <summary>What is written along the axes.</summary>
     public AxisWords Axes => new($"{Capitalized(_phrases.WaterContent)} (%)", $"{Capitalized(DensityName)} ({Unit})")
     {
-        Second = _options.SecondUnit?.Symbol(),
-        SecondRatio = _options.SecondUnit is { } second ? Soil.Quantities.Density.From(1, _chart.DensityUnit).In(second) : null,
+        Second = Second(),
         XValue = Result is null ? null : new AxisValue(Result.WaterContent, Bare(Water(Result), "%")),
         YValue = Result is null ? null : new AxisValue(Result.MaximumDryDensity, Bare(Density(Result), Unit)),
         Number = Number,
     };
 
     /// <summary>What is written over the plot.</summary>
-    public HeadingWords Heading => new(
+    public HeadingWords Heading => !_options.SaysResult ? new("", null, [[Bars, Band]]) : new(
         Title,
         OwnTitle is null ? Headline : null,
-        [[OwnTitle == Statement ? "" : Statement ?? "", OwnTitle is null || IsWithoutLaboratory ? "" : ResultLine, Reference], [Intervals, Bars]]);
+        [[OwnTitle == Statement ? "" : Statement ?? "", OwnTitle is null || IsWithoutLaboratory ? "" : ResultLine, Reference], [Intervals, Bars, Band]]);
 
     /// <summary>What the picture says, for who cannot see it.</summary>
     public string Description
@@ -128,6 +130,11 @@ internal sealed class Wording
                 sentences.Add(describe.Bars);
             }
 
+            if (HasBand)
+            {
+                sentences.Add(describe.Band);
+            }
+
             if (_chart is { Adopted: not null, Optimum: { } fitted })
             {
                 sentences.Add(Fill(describe.Fitted, Density(fitted), Water(fitted)));
@@ -152,6 +159,9 @@ internal sealed class Wording
             return string.Join(" ", sentences);
         }
     }
+
+    /// <summary>The name of another model's curve.</summary>
+    public string Model(string name) => _phrases.Models.GetValueOrDefault(name, PlainText.Clean(name));
 
     /// <summary>What stands beside the mark of the adopted optimum.</summary>
     public string Adopted => _phrases.Adopted;
@@ -216,6 +226,8 @@ internal sealed class Wording
         _ => "",
     };
 
+    private bool HasBand => _chart.Band is { Count: > 1 };
+
     private bool HasBars => _chart.Specimens.Any(specimen => specimen.IsUncertain);
 
     private int DensityDecimals => _chart.DensityUnit switch
@@ -242,6 +254,23 @@ internal sealed class Wording
             var water = Between(specimens.Min(s => s.WaterContent), specimens.Max(s => s.WaterContent), 1, "%");
             var density = Between(specimens.Min(s => s.DryDensity), specimens.Max(s => s.DryDensity), DensityDecimals, Unit);
             return Fill(describe.Specimens, quantity, count, water, density);
+        }
+    }
+
+    private SecondAxisWords? Second()
+    {
+        switch (_options.Second)
+        {
+            case null:
+                return null;
+            case { Unit: { } unit }:
+                var ratio = Soil.Quantities.Density.From(1, _chart.DensityUnit).In(unit);
+                return new SecondAxisWords(unit.Symbol(), density => density * ratio, value => value / ratio);
+            default:
+                // e = Gs·ρw/ρd − 1. Below the least density that is drawn for it there is no void ratio that a reader could want.
+                var solids = _chart.SpecificGravity!.Value * new Density(_chart.WaterDensity!.Value).In(_chart.DensityUnit);
+                var least = solids * 1e-3;
+                return new SecondAxisWords(Capitalized(_phrases.VoidRatio), density => (solids / Math.Max(density, least)) - 1, voidRatio => solids / (1 + voidRatio));
         }
     }
 

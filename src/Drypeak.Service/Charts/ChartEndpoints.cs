@@ -40,6 +40,11 @@ internal static class ChartEndpoints
         }
 
         faults.AddRange(ChartAddress.Decode(data, kind, limits.UnpackedAddressBytes, out var chart));
+        if (faults.Count == 0 && kind.Refusal(chart!, options.Figure) is { } refusal)
+        {
+            faults.Add(new Fault("", "not-drawable", refusal));
+        }
+
         return faults.Count > 0
             ? Problems.InvalidQuery(faults)
             : new CachedBytes(kind.Picture(chart!, format, options), format.MediaType);

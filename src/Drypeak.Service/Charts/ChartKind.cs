@@ -22,8 +22,8 @@ internal sealed record ChartKind<TChart>(string Job, string Shows, TChart Exampl
     /// <summary>Every broken rule of a chart that stands in an address, at the places of the chart.</summary>
     public required Func<TChart, IReadOnlyList<Fault>> Check { get; init; }
 
-    /// <summary>Why a chart cannot be drawn in a size, or null.</summary>
-    public required Func<TChart, FigureSize, string?> Refusal { get; init; }
+    /// <summary>Why a chart cannot be drawn so, or null.</summary>
+    public required Func<TChart, FigureOptions, string?> Refusal { get; init; }
 
     /// <summary>The figure of a chart that can be drawn.</summary>
     public required Func<TChart, FigureOptions, Figure> Draw { get; init; }
@@ -36,7 +36,7 @@ internal sealed record ChartKind<TChart>(string Job, string Shows, TChart Exampl
     {
         var faults = Check(chart);
         return faults.Count > 0 ? [.. faults.Select(fault => fault with { Place = "/d", Message = $"At {fault.Place} of the chart: {fault.Message}" })]
-            : Refusal(chart, FigureSize.Default) is { } refusal ? [new Fault("/d", "not-drawable", refusal)]
+            : Refusal(chart, new FigureOptions()) is { } refusal ? [new Fault("/d", "not-drawable", refusal)]
             : [];
     }
 

@@ -1,5 +1,7 @@
 using System.Globalization;
 using Drypeak.Figures;
+using Drypeak.Service.Laboratory;
+using Drypeak.Soil.Curves;
 using Drypeak.Soil.Quantities;
 
 namespace Drypeak.Service.Charts;
@@ -27,6 +29,8 @@ internal static class ChartParameters
 
     private static readonly string[] LineKinds = [.. PhaseLineKindNames.All.Select(kind => kind.Name())];
 
+    private static readonly string[] ModelNames = [.. Enum.GetValues<CurveModel>().Select(model => model.Name())];
+
     private static readonly ChartParameter Width = Whole("width", "Width", FigureSize.Smallest, FigureSize.Largest, "960",
         (figure, value) => figure with { Size = figure.Size with { Width = value } });
 
@@ -39,8 +43,11 @@ internal static class ChartParameters
     private static readonly ChartParameter Locale = Choice("locale", Language.All, language => language.Code, "Language and decimal mark.",
         Language.English, (figure, language) => figure with { Language = language });
 
-    private static readonly ChartParameter SecondUnit = Choice("secondUnit", Enum.GetValues<DensityUnit>(), unit => unit.Code(), "A unit for a second axis of density at the right.",
-        DensityUnit.PoundPerCubicFoot, (figure, unit) => figure with { SecondUnit = unit });
+    private static readonly ChartParameter SecondUnit = Choice("secondUnit", SecondAxis.All, axis => axis.Name, "A unit for a second axis of density at the right, or the void ratio there.",
+        new SecondAxis(DensityUnit.PoundPerCubicFoot), (figure, axis) => figure with { Second = axis });
+
+    private static readonly ChartParameter Models = new("models", typeof(string),
+        $"Other models whose curves are drawn thin, of those that the chart carries, parted by commas: {string.Join(", ", ModelNames)}.", "parabola,spline", ReadModels);
 
     private static readonly ChartParameter Title = new("title", typeof(string),
         $"A title in place of the result, which then stands under it: up to {FigureOptions.LongestTitle} characters.", "Borrow area 7", ReadTitle);
@@ -56,7 +63,7 @@ internal static class ChartParameters
     public static IReadOnlyList<ChartParameter> OfAny { get; } = [Width, Height, Looks, Title];
 
     /// <summary>Of a picture of dry density against water content.</summary>
-    public static IReadOnlyList<ChartParameter> OfCompaction { get; } = [.. OfAny, Locale, SecondUnit, Lines];
+    public static IReadOnlyList<ChartParameter> OfCompaction { get; } = [.. OfAny, Locale, SecondUnit, Lines, Models];
 
     private static ChartParameter Whole(string name, string what, int least, int greatest, string example, Func<FigureOptions, int, FigureOptions> set) =>
         new(name, typeof(int), $"{what}, px: {least} to {greatest}.", example, (options, text) =>
@@ -97,6 +104,14 @@ internal static class ChartParameters
         return names.Distinct().Count() < names.Length || names.Except(LineKinds).Any()
             ? ReadParameter.Fault("unknown-choice", $"It must be {NoLines}, or some of {string.Join(", ", LineKinds)}, each once, parted by commas; \"{ChartOptions.Shortened(text)}\" was received.")
             : ReadParameter.Of(options with { Figure = options.Figure with { Lines = [.. PhaseLineKindNames.All.Where(kind => names.Contains(kind.Name()))] } });
+    }
+
+    private static ReadParameter ReadModels(ChartOptions options, string text)
+    {
+        var names = text.Split(',');
+        return names.Distinct().Count() < names.Length || names.Except(ModelNames).Any()
+            ? ReadParameter.Fault("unknown-choice", $"It must be some of {string.Join(", ", ModelNames)}, each once, parted by commas; \"{ChartOptions.Shortened(text)}\" was received.")
+            : ReadParameter.Of(options with { Figure = options.Figure with { Models = names } });
     }
 
     private static ReadParameter OutOfRange(string kind, double least, double greatest, string text) =>

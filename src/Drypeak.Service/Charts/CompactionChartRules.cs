@@ -24,6 +24,12 @@ internal sealed class CompactionChartRules : AbstractValidator<CompactionChart>
             .WithErrorCode("out-of-range").WithMessage($"There must be up to {limits.Specimens} field tests.");
         RuleForEach(chart => chart.FieldTests).Must(test => test is { WaterContent: >= 0 and <= RuleWords.Greatest, DryDensity: >= RuleWords.Least and <= RuleWords.Greatest } && Enum.IsDefined(test.Outcome))
             .WithErrorCode("out-of-range").WithMessage("A field test's water content, dry density and outcome must be possible.");
+        RuleFor(chart => chart.Band).Must(band => band is null or { Count: <= MostCorners })
+            .WithErrorCode("out-of-range").WithMessage($"A band must have up to {MostCorners} points.");
+        RuleForEach(chart => chart.Models).Must(model => model is { Name.Length: <= LongestModelName, Curve.Count: <= MostCorners })
+            .WithErrorCode("out-of-range").WithMessage($"A model must have a name and up to {MostCorners} points.");
+        RuleFor(chart => chart.Models).Must(models => models is null or { Count: <= MostModels })
+            .WithErrorCode("out-of-range").WithMessage($"There must be up to {MostModels} other models.");
         RuleFor(chart => chart.Zone).Must(zone => zone is null or { Corners.Count: <= MostCorners })
             .WithErrorCode("out-of-range").WithMessage($"A zone must have up to {MostCorners} corners.");
         RuleFor(chart => chart.SpecificGravity).Within(0.1, SpecificGravityRules.Greatest);
@@ -35,4 +41,6 @@ internal sealed class CompactionChartRules : AbstractValidator<CompactionChart>
     }
 
     private const int MostCorners = 1000;
+    private const int MostModels = 10;
+    private const int LongestModelName = 40;
 }

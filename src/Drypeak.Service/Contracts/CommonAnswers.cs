@@ -48,4 +48,8 @@ public sealed record LinksContract
     /// <summary>The chart as PDF.</summary>
     /// <example>/v1/charts/moisture-density.pdf?d=…</example>
     public string? Pdf { get; init; }
+
+    /// <summary>The report as PDF, of a job that has one. It holds the request, and gives the numbers again.</summary>
+    /// <example>/v1/reports/moisture-density.pdf?d=…</example>
+    public string? Report { get; init; }
 }

@@ -5,10 +5,19 @@ namespace Drypeak.Service.Contracts;
 /// <summary>The unit names of the interface, and what they mean.</summary>
 internal static class UnitNames
 {
-    public static readonly IReadOnlyDictionary<string, MassUnit> Mass = Enum.GetValues<MassUnit>().ToDictionary(unit => unit.Code());
-    public static readonly IReadOnlyDictionary<string, VolumeUnit> Volume = Enum.GetValues<VolumeUnit>().ToDictionary(unit => unit.Code());
+    /// <summary>What a balance weighs in; what trucks carry is weighed in the earthwork's own units.</summary>
+    public static readonly IReadOnlyDictionary<string, MassUnit> Mass =
+        new[] { MassUnit.Gram, MassUnit.Kilogram, MassUnit.Pound }.ToDictionary(unit => unit.Code());
+
+    /// <summary>Volumes of molds and holes.</summary>
+    public static readonly IReadOnlyDictionary<string, VolumeUnit> Volume =
+        new[] { VolumeUnit.CubicCentimeter, VolumeUnit.Liter, VolumeUnit.CubicMeter, VolumeUnit.CubicInch, VolumeUnit.CubicFoot, VolumeUnit.CubicYard }.ToDictionary(unit => unit.Code());
+
     public static readonly IReadOnlyDictionary<string, DensityUnit> Density = Enum.GetValues<DensityUnit>().ToDictionary(unit => unit.Code());
-    public static readonly IReadOnlyDictionary<string, LengthUnit> Length = Enum.GetValues<LengthUnit>().ToDictionary(unit => unit.Code());
+
+    /// <summary>Lengths that are measured by hand.</summary>
+    public static readonly IReadOnlyDictionary<string, LengthUnit> Length =
+        new[] { LengthUnit.Millimeter, LengthUnit.Centimeter, LengthUnit.Meter, LengthUnit.Inch, LengthUnit.Foot }.ToDictionary(unit => unit.Code());
 
     private static readonly UnitSet Default = new();
 

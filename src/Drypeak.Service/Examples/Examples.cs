@@ -34,6 +34,30 @@ internal static class Examples
     /// <summary>The rapid method on a lift, as JSON.</summary>
     public static string RapidMethodRequest { get; } = Text("rapid-method.json");
 
+    /// <summary>Two laboratory tests, a row a specimen, as CSV.</summary>
+    public static string LaboratoryCsv { get; } = Text("moisture-density.csv");
+
+    /// <summary>A compaction test and two field densities, as AGS4.</summary>
+    public static string Ags4 { get; } = Text("ternmarsh.ags");
+
+    /// <summary>Water for five portions of the borrow area's soil, as JSON.</summary>
+    public static string SpecimenWaterRequest { get; } = Text("specimen-water.json");
+
+    /// <summary>Water for a lift on a dry day, as JSON.</summary>
+    public static string LiftWaterRequest { get; } = Text("lift-water.json");
+
+    /// <summary>A reach of the embankment from two borrow areas, as JSON.</summary>
+    public static string QuantitiesRequest { get; } = Text("quantities.json");
+
+    /// <summary>A test programme around a culvert, as JSON.</summary>
+    public static string TestLocationsRequest { get; } = Text("test-locations.json");
+
+    /// <summary>A padfoot roller, as JSON.</summary>
+    public static string RollerOutputRequest { get; } = Text("roller-output.json");
+
+    /// <summary>A trial strip of four, six, eight and ten passes, as JSON.</summary>
+    public static string TestStripRequest { get; } = Text("test-strip.json");
+
     private static string Text(string name)
     {
         using var stream = typeof(Examples).Assembly.GetManifestResourceStream($"Drypeak.Service.Examples.{name}")

@@ -127,12 +127,12 @@ public sealed record FinesAnswer(double WetDensity, double WaterContent, double 
 /// <param name="Count" example="2">How many.</param>
 /// <param name="Mean" example="2.032">In the unit of the readings.</param>
 /// <param name="StandardDeviation" example="0.0057">About the mean; null for one reading.</param>
-/// <param name="StandardUncertainty" example="0.004">Of the mean; null for one reading.</param>
+/// <param name="StandardUncertainty" example="0.004">Of the mean, s/√n; null for one reading. Where the request gives no uncertainty of dry density or water content, it is carried into theirs.</param>
 public sealed record ReadingsAnswer(string Quantity, int Count, double Mean, double? StandardDeviation, double? StandardUncertainty);
 
 /// <summary>A gauge's moisture offset: w = w_gauge + k(100 + w_gauge)/1000, in %.</summary>
 /// <param name="K" example="-5.3">Mean over the pairs of 1000(w_oven − w_gauge)/(100 + w_gauge).</param>
-/// <param name="StandardUncertainty" example="0.9">Of the mean; null for one pair. It is reported, and not part of the test's uncertainty unless the request's says so.</param>
+/// <param name="StandardUncertainty" example="0.9">Of the mean; null for one pair. Where the request gives no uncertainty of the water content, it is part of it.</param>
 /// <param name="Pairs" example="3">How many.</param>
 public sealed record MoistureOffsetAnswer(double K, double? StandardUncertainty, int Pairs);
 

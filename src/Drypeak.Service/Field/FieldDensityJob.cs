@@ -1,3 +1,5 @@
+using Drypeak.Figures;
+using Drypeak.Service.Charts;
 using Drypeak.Service.Contracts;
 using Drypeak.Service.Hosting;
 using Drypeak.Service.Laboratory;
@@ -14,26 +16,49 @@ internal sealed class FieldDensityJob(MoistureDensityJob laboratory, Limits limi
 {
     private readonly Lazy<FieldDensityRules> _rules = new(() => new(laboratory, limits));
 
-    public static void Map(IEndpointRouteBuilder app) =>
-        app.MapJob<FieldDensityRequest, FieldDensityAnswer>(
-                "/v1/field-density", services => services.GetRequiredService<FieldDensityJob>().Check, Compute, Examples.FieldDensityRequest)
+    /// <summary>The kind of its chart.</summary>
+    public ChartKind<CompactionChart> Chart { get; } = ChartKind.Compaction("field-density", "The chart of a field test on its laboratory's curve, with the zone in which it is accepted", limits);
+
+    public static void Map(IEndpointRouteBuilder app)
+    {
+        var job = app.ServiceProvider.GetRequiredService<FieldDensityJob>();
+        app.MapJob<FieldDensityRequest, FieldDensityAnswer, CompactionChart>(
+                "/v1/field-density", job.Check, job.ComputeWithChart, Examples.FieldDensityRequest, job.Chart)
             .WithTags("Field")
             .WithName("field-density")
             .WithSummary("Reduce a field density test and decide on it")
-            .WithDescription("From the readings of six methods to the soil in place, its relative compaction, and each requirement met, missed or undecided, with the probability of conformance where an uncertainty is known.");
+            .WithDescription("From the readings of six methods to the soil in place, its relative compaction, and each requirement met, missed or undecided, with the probability of conformance where an uncertainty is known. With Accept: image/svg+xml, image/png or application/pdf the chart is the answer: the test on its laboratory's curve, and the zone in which it is accepted.");
+    }
 
     /// <summary>Every broken rule; empty where the request can be computed.</summary>
     public IReadOnlyList<Fault> Check(FieldDensityRequest request) => _rules.Value.Check(request);
 
-    /// <summary>Computes a request that passed <see cref="Check"/>.</summary>
-    public static FieldDensityAnswer Compute(FieldDensityRequest request)
+    /// <summary>Computes a request that passed <see cref="Check"/>, with its chart and the chart's addresses.</summary>
+    public Charted<FieldDensityAnswer, CompactionChart> ComputeWithChart(FieldDensityRequest request)
+    {
+        var (answer, chart) = Answer(request);
+        if (chart is null)
+        {
+            return new(answer, null);
+        }
+
+        var links = Chart.LinksOf(chart, limits, out var whyNot);
+        return new(answer with { Links = links, Findings = whyNot is null ? answer.Findings : [.. answer.Findings, FindingContract.Of(whyNot)] }, chart);
+    }
+
+    /// <summary>Computes a request that passed <see cref="Check"/>, where only its numbers are wanted.</summary>
+    public static FieldDensityAnswer Compute(FieldDensityRequest request) => Answer(request).Answer;
+
+    private static Charted<FieldDensityAnswer, CompactionChart> Answer(FieldDensityRequest request)
     {
         var test = request.ToTest();
+        CompactionChart? curve = null;
         var ofLaboratory = new List<Finding>();
         if (request.Laboratory?.Test is { } embedded)
         {
             var (laboratoryTest, laboratoryResult) = MoistureDensityJob.Analyze(embedded);
             test = test.Against(laboratoryTest, laboratoryResult);
+            curve = MoistureDensityChart.Of(embedded, laboratoryTest with { Units = test.Units }, laboratoryResult);
             ofLaboratory.AddRange(laboratoryResult.Findings.Select(finding => finding with { Place = "/laboratory/test" + finding.Place }));
             if (test.Reference.MaximumDryDensity is null)
             {
@@ -45,7 +70,7 @@ internal sealed class FieldDensityJob(MoistureDensityJob laboratory, Limits limi
         var result = FieldAnalysis.Analyze(test, faults)
             ?? throw new ArgumentException("The request does not keep the rules: " + faults[0].Message, nameof(request));
         var judged = result.Judged;
-        return new FieldDensityAnswer
+        var answer = new FieldDensityAnswer
         {
             Reference = request.Reference,
             Identification = request.Identification,
@@ -70,6 +95,7 @@ internal sealed class FieldDensityJob(MoistureDensityJob laboratory, Limits limi
             Links = new LinksContract(),
             Provenance = ProvenanceContract.Of(request),
         };
+        return new(answer, FieldDensityChart.Of(request, test, result, curve));
     }
 
     private static SoilInPlaceAnswer ToAnswer(FieldResult result, UnitSet units)

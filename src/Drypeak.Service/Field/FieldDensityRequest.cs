@@ -151,7 +151,7 @@ public sealed record LaboratoryUncertaintyContract
     public double? OptimumWaterContent { get; init; }
 }
 
-/// <summary>Standard uncertainties of the field's values, each of the value as a whole and independent of the others.</summary>
+/// <summary>Standard uncertainties of the field's values, each of the value as a whole and independent of the others. Where dry density or water content has none, the spread of a gauge's readings and pairs stands for it.</summary>
 public sealed record FieldUncertaintyContract
 {
     /// <summary>Of the dry density, in units.density.</summary>

@@ -21,6 +21,10 @@ public sealed record OnePointRequest
     /// <summary>The point.</summary>
     [JsonRequired]
     public OnePointContract? Point { get; init; }
+
+    /// <summary>Whether the working is wanted: each step of the arithmetic with its numbers.</summary>
+    /// <example>false</example>
+    public bool? Trace { get; init; }
 }
 
 /// <summary>A curve of the family: by its optimum, by its points, by both, or as a whole laboratory test.</summary>
@@ -112,6 +116,10 @@ public sealed record OnePointAnswer
 
     /// <summary>The curve through the point as [water content, dry density]; empty where it may not be used.</summary>
     public required IReadOnlyList<double[]> Curve { get; init; }
+
+    /// <summary>The working, where it was asked for.</summary>
+    [JsonIgnore(Condition = JsonIgnoreCondition.WhenWritingNull)]
+    public IReadOnlyList<TraceStep>? Trace { get; init; }
 
     /// <summary>What a careful reviewer says, worst first.</summary>
     public required IReadOnlyList<FindingContract> Findings { get; init; }

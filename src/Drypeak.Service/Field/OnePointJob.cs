@@ -1,4 +1,6 @@
 using System.Globalization;
+using Drypeak.Figures;
+using Drypeak.Service.Charts;
 using Drypeak.Service.Contracts;
 using Drypeak.Service.Hosting;
 using Drypeak.Service.Laboratory;
@@ -14,21 +16,25 @@ internal sealed class OnePointJob(MoistureDensityJob laboratory, Limits limits)
 {
     private const string PointPlace = "/point";
 
-    private readonly OnePointRules _rules = new(limits);
+    private readonly Lazy<OnePointRules> _rules = new(() => new(limits));
 
-    public static void Map(IEndpointRouteBuilder app) =>
-        app.MapJob<OnePointRequest, OnePointAnswer>(
-                "/v1/one-point",
-                services => new OnePointJob(services.GetRequiredService<MoistureDensityJob>(), services.GetRequiredService<Limits>()).Check,
-                Compute, Examples.OnePointRequest)
+    /// <summary>The kind of its chart.</summary>
+    public ChartKind<PlotChart> Chart { get; } = ChartKind.Plot("one-point", "A family of curves with the point and the curve that it chose", limits);
+
+    public static void Map(IEndpointRouteBuilder app)
+    {
+        var job = app.ServiceProvider.GetRequiredService<OnePointJob>();
+        app.MapJob<OnePointRequest, OnePointAnswer, PlotChart>("/v1/one-point", job.Check, job.Compute, Examples.OnePointRequest, job.Chart)
             .WithTags("Field")
             .WithName("one-point")
             .WithSummary("One point on a family of curves")
-            .WithDescription("The curve through the point, shaped like its two neighbours in the family (AASHTO T 272, R 75); it may be used where the point lies at 80 to 100 % of its optimum.");
+            .WithDescription("The curve through the point, shaped like its two neighbours in the family (AASHTO T 272, R 75); it may be used where the point lies at 80 to 100 % of its optimum. With Accept: image/svg+xml, image/png or application/pdf the chart is the answer.");
+    }
 
-    private List<Fault> Check(OnePointRequest request)
+    /// <summary>Every broken rule; empty where the request can be computed.</summary>
+    public IReadOnlyList<Fault> Check(OnePointRequest request)
     {
-        var faults = _rules.Validate(request).ToFaults().ToList();
+        var faults = _rules.Value.Validate(request).ToFaults().ToList();
         for (var i = 0; i < request.Family?.Count; i++)
         {
             if (request.Family[i]?.Test is { } test)
@@ -39,20 +45,26 @@ internal sealed class OnePointJob(MoistureDensityJob laboratory, Limits limits)
 
         if (faults.Count == 0)
         {
-            Reduce(request, faults);
+            var units = request.Units.ToUnitSet();
+            SpecimenReduction.Reduce(Measured(request, units), null, PointPlace, units, faults);
         }
 
         return faults;
     }
 
-    private static OnePointAnswer Compute(OnePointRequest request)
+    /// <summary>Computes a request that passed <see cref="Check"/>.</summary>
+    public Charted<OnePointAnswer, PlotChart> Compute(OnePointRequest request)
     {
         var units = request.Units.ToUnitSet();
-        var point = Reduce(request, []) ?? throw new ArgumentException("The request does not keep the rules.", nameof(request));
+        var measured = Measured(request, units);
+        var point = SpecimenReduction.Reduce(measured, null, PointPlace, units, new List<Fault>()) ?? throw new ArgumentException("The request does not keep the rules.", nameof(request));
         var findings = new List<Finding>();
         var family = request.Family!.Select((member, i) => ToCurve(member, i, units, findings)).OfType<FamilyCurve>().ToList();
-        var result = OnePoint.Select(family, new CompactionPoint(point.WaterContent.Fraction, point.DryDensity.KilogramsPerCubicMeter), units.Density);
-        return new OnePointAnswer
+        var at = new CompactionPoint(point.WaterContent.Fraction, point.DryDensity.KilogramsPerCubicMeter);
+        var result = OnePoint.Select(family, at, units.Density);
+        var chart = OnePointChart.Of(request, family, at, result, units.Density);
+        var links = Chart.LinksOf(chart, limits, out var whyNot);
+        var answer = new OnePointAnswer
         {
             Reference = request.Reference,
             Units = units.ToContract(),
@@ -63,19 +75,20 @@ internal sealed class OnePointJob(MoistureDensityJob laboratory, Limits limits)
             PercentOfOptimum = result.ShareOfOptimum * 100,
             Usable = result.Optimum is { },
             Curve = [.. result.Curve.Select(drawn => new[] { drawn.WaterContent * 100, new Density(drawn.DryDensity).In(units.Density) })],
-            Findings = [.. result.Findings.Concat(findings).OrderBy(finding => finding.Severity).Select(FindingContract.Of)],
-            Links = new LinksContract(),
+            Trace = request.Trace is true ? [.. OnePointWorking.Of(measured, point, result, units).Select(TraceStep.Of)] : null,
+            Findings = [.. result.Findings.Concat(findings).Concat(whyNot is null ? [] : [whyNot]).OrderBy(finding => finding.Severity).Select(FindingContract.Of)],
+            Links = links,
             Provenance = ProvenanceContract.Of(request),
             Cautions = request.Point!.Carbide is { } ? [.. Cautions.OfLaboratoryTest, Cautions.OfCarbideTester] : Cautions.OfLaboratoryTest,
         };
+        return new(answer, chart);
     }
 
-    private static Specimen? Reduce(OnePointRequest request, ICollection<Fault> faults)
+    private static SpecimenMeasurement Measured(OnePointRequest request, UnitSet units)
     {
-        var units = request.Units.ToUnitSet();
         var point = request.Point!;
         var water = point.ToMeasuredWater(units);
-        var measured = new SpecimenMeasurement
+        return new SpecimenMeasurement
         {
             Label = "1",
             MoldAndWetSoil = point.MoldAndWetSoil is { } full ? Mass.From(full, units.Mass) : null,
@@ -87,7 +100,6 @@ internal sealed class OnePointJob(MoistureDensityJob laboratory, Limits limits)
             WaterContentFromWetBasis = water.FromWetBasis,
             WaterContentFromCarbide = water.FromCarbide,
         };
-        return SpecimenReduction.Reduce(measured, null, PointPlace, units, faults);
     }
 
     /// <summary>A curve; null, with a finding, where it has no optimum.</summary>

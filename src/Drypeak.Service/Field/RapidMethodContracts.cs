@@ -1,5 +1,6 @@
 using System.Text.Json.Serialization;
 using Drypeak.Service.Contracts;
+using Drypeak.Service.Laboratory;
 
 namespace Drypeak.Service.Field;
 
@@ -20,6 +21,10 @@ public sealed record RapidMethodRequest
     /// <summary>The specimens, in any order; three or more for a peak.</summary>
     [JsonRequired]
     public IReadOnlyList<RapidSpecimenContract>? Specimens { get; init; }
+
+    /// <summary>Whether the working is wanted: each step of the arithmetic with its numbers.</summary>
+    /// <example>false</example>
+    public bool? Trace { get; init; }
 }
 
 /// <summary>The soil in place.</summary>
@@ -82,6 +87,10 @@ public sealed record RapidMethodAnswer
     /// <summary>Field less optimum water content, percentage points; an estimate until the field water content is known; null without a peak.</summary>
     /// <example>-1.6</example>
     public double? WaterContentFromOptimum { get; init; }
+
+    /// <summary>The working, where it was asked for.</summary>
+    [JsonIgnore(Condition = JsonIgnoreCondition.WhenWritingNull)]
+    public IReadOnlyList<TraceStep>? Trace { get; init; }
 
     /// <summary>What a careful reviewer says, worst first.</summary>
     public required IReadOnlyList<FindingContract> Findings { get; init; }

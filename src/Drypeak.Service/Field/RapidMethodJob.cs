@@ -1,5 +1,8 @@
+using Drypeak.Figures;
+using Drypeak.Service.Charts;
 using Drypeak.Service.Contracts;
 using Drypeak.Service.Hosting;
+using Drypeak.Service.Laboratory;
 using Drypeak.Soil.Laboratory;
 using Drypeak.Soil.Quantities;
 using Drypeak.Soil.References;
@@ -10,19 +13,25 @@ namespace Drypeak.Service.Field;
 /// <summary><c>POST /v1/rapid-method</c>: the density ratio of a lift before the oven has spoken.</summary>
 internal sealed class RapidMethodJob(Limits limits)
 {
-    private readonly Rules _rules = new(limits);
+    private readonly Lazy<Rules> _rules = new(() => new(limits));
 
-    public static void Map(IEndpointRouteBuilder app) =>
-        app.MapJob<RapidMethodRequest, RapidMethodAnswer>(
-                "/v1/rapid-method", services => new RapidMethodJob(services.GetRequiredService<Limits>()).Check, Compute, Examples.RapidMethodRequest)
+    /// <summary>The kind of its chart.</summary>
+    public ChartKind<PlotChart> Chart { get; } = ChartKind.Plot("rapid-method", "The converted wet densities of the rapid method with their peak", limits);
+
+    public static void Map(IEndpointRouteBuilder app)
+    {
+        var job = app.ServiceProvider.GetRequiredService<RapidMethodJob>();
+        app.MapJob<RapidMethodRequest, RapidMethodAnswer, PlotChart>("/v1/rapid-method", job.Check, job.Compute, Examples.RapidMethodRequest, job.Chart)
             .WithTags("Field")
             .WithName("rapid-method")
             .WithSummary("The rapid method: density ratio without a water content")
-            .WithDescription("Field soil compacted at fill water content and with water added gives the relative compaction exactly, and the difference from the optimum (Hilf; ASTM D5080, AS 1289.5.7.1).");
+            .WithDescription("Field soil compacted at fill water content and with water added gives the relative compaction exactly, and the difference from the optimum (Hilf; ASTM D5080, AS 1289.5.7.1). With Accept: image/svg+xml, image/png or application/pdf the chart is the answer.");
+    }
 
-    private List<Fault> Check(RapidMethodRequest request)
+    /// <summary>Every broken rule; empty where the request can be computed.</summary>
+    public IReadOnlyList<Fault> Check(RapidMethodRequest request)
     {
-        var faults = _rules.Validate(request).ToFaults().ToList();
+        var faults = _rules.Value.Validate(request).ToFaults().ToList();
         if (faults.Count == 0)
         {
             FieldWater(request, faults);
@@ -31,12 +40,16 @@ internal sealed class RapidMethodJob(Limits limits)
         return faults;
     }
 
-    private static RapidMethodAnswer Compute(RapidMethodRequest request)
+    /// <summary>Computes a request that passed <see cref="Check"/>.</summary>
+    public Charted<RapidMethodAnswer, PlotChart> Compute(RapidMethodRequest request)
     {
         var units = request.Units.ToUnitSet();
         var specimens = request.Specimens!.Select(specimen => new RapidSpecimen(specimen.WaterAdded!.Value / 100, Density.From(specimen.WetDensity!.Value, units.Density))).ToList();
-        var result = RapidMethod.Compute(Density.From(request.Field!.WetDensity!.Value, units.Density), FieldWater(request, []), specimens, units.Density);
-        return new RapidMethodAnswer
+        var field = Density.From(request.Field!.WetDensity!.Value, units.Density);
+        var result = RapidMethod.Compute(field, FieldWater(request, []), specimens, units.Density);
+        var chart = RapidMethodChart.Of(request, field, specimens, result, units.Density);
+        var links = Chart.LinksOf(chart, limits, out var whyNot);
+        var answer = new RapidMethodAnswer
         {
             Reference = request.Reference,
             Units = units.ToContract(),
@@ -45,11 +58,13 @@ internal sealed class RapidMethodJob(Limits limits)
             Peak = result is { PeakWaterAdded: { } z, PeakDensity: { } density } ? new RapidPeakAnswer(z * 100, density.In(units.Density)) : null,
             DensityRatio = result.DensityRatio * 100,
             WaterContentFromOptimum = result.WaterContentFromOptimum * 100,
-            Findings = [.. result.Findings.OrderBy(finding => finding.Severity).Select(FindingContract.Of)],
-            Links = new LinksContract(),
+            Trace = request.Trace is true ? [.. result.Working.Select(TraceStep.Of)] : null,
+            Findings = [.. result.Findings.Concat(whyNot is null ? [] : [whyNot]).OrderBy(finding => finding.Severity).Select(FindingContract.Of)],
+            Links = links,
             Provenance = ProvenanceContract.Of(request),
             Cautions = request.Field.Carbide is { } ? [.. Cautions.OfArithmetic, Cautions.OfCarbideTester] : Cautions.OfArithmetic,
         };
+        return new(answer, chart);
     }
 
     private static WaterContent? FieldWater(RapidMethodRequest request, ICollection<Fault> faults) =>

@@ -12,19 +12,20 @@ namespace Drypeak.Service.Field;
 /// <summary><c>POST /v1/relative-density</c>: a free-draining soil between its loosest and its densest state.</summary>
 internal sealed class RelativeDensityJob(Limits limits)
 {
-    private readonly RelativeDensityRules _rules = new(limits);
+    private readonly Lazy<RelativeDensityRules> _rules = new(() => new(limits));
 
     public static void Map(IEndpointRouteBuilder app) =>
         app.MapJob<RelativeDensityRequest, RelativeDensityAnswer>(
-                "/v1/relative-density", services => new RelativeDensityJob(services.GetRequiredService<Limits>()).Check, Compute, Examples.RelativeDensityRequest)
+                "/v1/relative-density", app.ServiceProvider.GetRequiredService<RelativeDensityJob>().Check, Compute, Examples.RelativeDensityRequest)
             .WithTags("Field")
             .WithName("relative-density")
             .WithSummary("Relative density and relative compaction of a free-draining soil")
             .WithDescription("Any one measure of the soil gives the others: dry density, void ratio, wet density with a water content, relative density, relative compaction.");
 
-    private List<Fault> Check(RelativeDensityRequest request)
+    /// <summary>Every broken rule; empty where the request can be computed.</summary>
+    public IReadOnlyList<Fault> Check(RelativeDensityRequest request)
     {
-        var faults = _rules.Validate(request).ToFaults().ToList();
+        var faults = _rules.Value.Validate(request).ToFaults().ToList();
         if (faults.Count == 0 && StateOf(request, faults) is not { } && faults.Count == 0)
         {
             faults.Add(new Fault("/relativeDensity", "out-of-range", $"At a relative density of {RuleWords.Text(request.RelativeDensity)} % the soil would have no volume. Check it and the limits."));
@@ -33,7 +34,8 @@ internal sealed class RelativeDensityJob(Limits limits)
         return faults;
     }
 
-    private static RelativeDensityAnswer Compute(RelativeDensityRequest request)
+    /// <summary>Computes a request that passed <see cref="Check"/>.</summary>
+    public static RelativeDensityAnswer Compute(RelativeDensityRequest request)
     {
         var unit = request.Units.DensityUnit();
         var state = StateOf(request, []) ?? throw new ArgumentException("The request does not keep the rules.", nameof(request));

@@ -5,7 +5,7 @@ internal static class ComparisonEndpoint
 {
     public static void MapComparison(this IEndpointRouteBuilder app) =>
         app.MapJob<ComparisonRequest, ComparisonAnswer>(
-                "/v1/comparison", services => services.GetRequiredService<ComparisonJob>().Check, ComparisonJob.Compute, Examples.ComparisonRequest)
+                "/v1/comparison", app.ServiceProvider.GetRequiredService<ComparisonJob>().Check, ComparisonJob.Compute, Examples.ComparisonRequest)
             .WithTags("Laboratory")
             .WithName("comparison")
             .WithSummary("Compare two tests of one soil")

@@ -14,13 +14,13 @@ internal sealed class EffortSeriesJob(MoistureDensityJob laboratory)
 
     public static void Map(IEndpointRouteBuilder app) =>
         app.MapJob<EffortSeriesRequest, EffortSeriesAnswer>(
-                "/v1/effort-series", services => new EffortSeriesJob(services.GetRequiredService<MoistureDensityJob>()).Check, Compute, Examples.EffortSeriesRequest)
+                "/v1/effort-series", new EffortSeriesJob(app.ServiceProvider.GetRequiredService<MoistureDensityJob>()).Check, Compute, Examples.EffortSeriesRequest)
             .WithTags("Laboratory")
             .WithName("effort-series")
             .WithSummary("The line of optimums over compactive effort")
             .WithDescription("Two or more tests of one soil at different efforts; the optimum at another effort between them.");
 
-    private List<Fault> Check(EffortSeriesRequest request)
+    private IReadOnlyList<Fault> Check(EffortSeriesRequest request)
     {
         if (request.Tests is not { Count: >= FewestTests and <= MostTests } tests)
         {

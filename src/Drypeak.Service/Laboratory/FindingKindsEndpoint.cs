@@ -1,5 +1,6 @@
 using Drypeak.Service.Charts;
 using Drypeak.Service.Hosting;
+using Drypeak.Soil.Earthwork;
 using Drypeak.Soil.FieldDensity.Review;
 using Drypeak.Soil.Laboratory.Review;
 using Drypeak.Soil.References;
@@ -11,7 +12,7 @@ internal static class FindingKindsEndpoint
 {
     internal static IReadOnlyList<FindingKindAnswer> Kinds { get; } =
     [
-        .. FindingKinds.All.Concat(FieldFindingKinds.All).Concat(ReferenceFindingKinds.All).Append(ChartAddress.NoAddress).Select(kind => new FindingKindAnswer(
+        .. FindingKinds.All.Concat(FieldFindingKinds.All).Concat(ReferenceFindingKinds.All).Concat(EarthworkFindingKinds.All).Append(ChartAddress.NoAddress).Select(kind => new FindingKindAnswer(
             kind.Code, kind.Severity.ToString().ToLowerInvariant(), kind.Meaning, kind.Why, kind.Remedy, kind.Basis)),
     ];
 

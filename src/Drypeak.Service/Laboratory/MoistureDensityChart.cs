@@ -1,4 +1,5 @@
 using Drypeak.Figures;
+using Drypeak.Service.Charts;
 using Drypeak.Soil.Curves;
 using Drypeak.Soil.Laboratory;
 using Drypeak.Soil.Quantities;
@@ -9,8 +10,14 @@ namespace Drypeak.Service.Laboratory;
 /// <summary>What the chart of a laboratory test shows.</summary>
 internal static class MoistureDensityChart
 {
-    /// <summary>Digits of the drawn curve and of intervals: finer than any picture, and short in an address.</summary>
-    private const int DrawnDigits = 6;
+    /// <summary>Digits of a band: its edge is read off less finely than the curve.</summary>
+    private const int BandDigits = 5;
+
+    /// <summary>Every so many points of another model's curve are carried.</summary>
+    private const int ModelStep = 4;
+
+    /// <summary>Above this many specimens other models' curves would make the address too long.</summary>
+    private const int MostWithModels = 20;
 
     /// <summary>Above this many specimens bars hide one another.</summary>
     private const int MostWithErrorBars = 40;
@@ -29,11 +36,20 @@ internal static class MoistureDensityChart
             Specimens = [.. result.Specimens.Select(specimen => new ChartSpecimen(
                 specimen.WaterContent.Percent, specimen.DryDensity.In(unit), specimen.Label, specimen.SetAside is { })
             {
-                WaterContentPlusMinus = uncertain.TryGetValue(specimen.Label, out var its) ? Drawn(HalfOf95Percent * its.WaterContent * 100) : null,
-                DryDensityPlusMinus = uncertain.TryGetValue(specimen.Label, out its) ? Drawn(HalfOf95Percent * new Density(its.DryDensity).In(unit)) : null,
+                WaterContentPlusMinus = uncertain.TryGetValue(specimen.Label, out var its) ? DrawnNumber.Of(HalfOf95Percent * its.WaterContent * 100) : null,
+                DryDensityPlusMinus = uncertain.TryGetValue(specimen.Label, out its) ? DrawnNumber.Of(HalfOf95Percent * new Density(its.DryDensity).In(unit)) : null,
             })],
             Curve = [.. (result.Curve?.Chosen.Curve ?? []).Select(point => new ChartPoint(
-                Drawn(point.WaterContent * 100), Drawn(new Density(point.DryDensity).In(unit))))],
+                DrawnNumber.Of(point.WaterContent * 100), DrawnNumber.Of(new Density(point.DryDensity).In(unit))))],
+            Band = result.Curve is { Chosen: { Curve.Count: > 0 } chosen }
+                && CompactionCurve.BandOf(MoistureDensity.KeptPoints(result.Specimens, test.SpecificGravity?.Value, test.WaterDensity), chosen.Model) is { } band
+                    ? [.. band.Select(point => new ChartBandPoint(
+                        DrawnNumber.Of(point.WaterContent * 100, BandDigits), DrawnNumber.Of(new Density(point.Lower).In(unit), BandDigits), DrawnNumber.Of(new Density(point.Upper).In(unit), BandDigits)))]
+                    : null,
+            Models = result.Curve is { } curves && result.Specimens.Count <= MostWithModels
+                ? [.. curves.Alternatives.Where(model => model.Curve.Count > 0).Select(model => new ChartModel(model.Model.Name(), [.. Thinned(model.Curve).Select(point => new ChartPoint(
+                    DrawnNumber.Of(point.WaterContent * 100, BandDigits), DrawnNumber.Of(new Density(point.DryDensity).In(unit), BandDigits)))]))]
+                : null,
             Optimum = result.Optimum is { } optimum ? Peak(test, optimum) : null,
             Adopted = test.Adopted is { } adopted ? Peak(test, adopted.WaterContent, adopted.MaximumDryDensity) : null,
             Corrected = result.Corrected is { } corrected ? Peak(test, corrected.WaterContent, corrected.DryDensity) : null,
@@ -41,7 +57,7 @@ internal static class MoistureDensityChart
             WaterDensity = test.SpecificGravity is { } ? test.WaterDensity.KilogramsPerCubicMeter : null,
             Saturation = request.Lines?.Saturation ?? [],
             AirVoids = request.Lines?.AirVoids ?? [],
-            NextSpecimen = result.Curve?.Next is { } next ? Drawn(next.WaterContent * 100) : null,
+            NextSpecimen = result.Curve?.Next is { } next ? DrawnNumber.Of(next.WaterContent * 100) : null,
         };
     }
 
@@ -49,10 +65,10 @@ internal static class MoistureDensityChart
         Peak(test, new WaterContent(optimum.WaterContent.Value), new Density(optimum.MaximumDryDensity.Value)) with
         {
             WaterContentInterval = optimum.WaterContent is { Lower: { } driest, Upper: { } wettest }
-                ? [Drawn(driest * 100), Drawn(wettest * 100)]
+                ? [DrawnNumber.Of(driest * 100), DrawnNumber.Of(wettest * 100)]
                 : null,
             MaximumDryDensityInterval = optimum.MaximumDryDensity is { Lower: { } least, Upper: { } greatest }
-                ? [Drawn(new Density(least).In(test.Units.Density)), Drawn(new Density(greatest).In(test.Units.Density))]
+                ? [DrawnNumber.Of(new Density(least).In(test.Units.Density)), DrawnNumber.Of(new Density(greatest).In(test.Units.Density))]
                 : null,
         };
 
@@ -64,6 +80,6 @@ internal static class MoistureDensityChart
         null,
         null);
 
-    private static double Drawn(double value) =>
-        value == 0 ? 0 : Math.Round(value, Math.Clamp(DrawnDigits - 1 - (int)Math.Floor(Math.Log10(Math.Abs(value))), 0, 15));
+    /// <summary>Every few points, and the last one.</summary>
+    private static IEnumerable<CompactionPoint> Thinned(IReadOnlyList<CompactionPoint> curve) => curve.Where((_, i) => i % ModelStep == 0 || i == curve.Count - 1);
 }

@@ -2,6 +2,7 @@ using Drypeak.Figures;
 using Drypeak.Service.Charts;
 using Drypeak.Service.Contracts;
 using Drypeak.Service.Hosting;
+using Drypeak.Service.Reports;
 using Drypeak.Soil.Curves;
 using Drypeak.Soil.Laboratory;
 using Drypeak.Soil.Laboratory.Workings;
@@ -57,7 +58,7 @@ internal sealed class MoistureDensityJob(Limits limits)
                     : null,
                 Trace = request.Trace is true ? [.. Working.Of(test, result).Select(TraceStep.Of)] : null,
                 Findings = [.. findings],
-                Links = links,
+                Links = links with { Report = ReportAddress.Of(MoistureDensityReport.Job, request, limits) },
                 Provenance = ProvenanceContract.Of(request),
                 Cautions = request.Specimens!.Any(specimen => specimen.Carbide is { })
                     ? [.. Cautions.OfLaboratoryTest, Cautions.OfCarbideTester]

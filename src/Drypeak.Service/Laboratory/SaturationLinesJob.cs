@@ -11,15 +11,16 @@ namespace Drypeak.Service.Laboratory;
 /// <summary><c>POST /v1/saturation-lines</c>.</summary>
 internal static class SaturationLinesJob
 {
-    public static void MapSaturationLines(this IEndpointRouteBuilder app) =>
+    public static void MapSaturationLines(this IEndpointRouteBuilder app)
+    {
+        var rules = new Lazy<Rules>(() => new(app.ServiceProvider.GetRequiredService<Limits>()));
         app.MapJob<SaturationLinesRequest, SaturationLinesAnswer>(
-                "/v1/saturation-lines", services => Check(new Rules(services.GetRequiredService<Limits>())), Compute, Examples.SaturationLinesRequest)
+                "/v1/saturation-lines", request => rules.Value.Validate(request).ToFaults(), Compute, Examples.SaturationLinesRequest)
             .WithTags("Laboratory")
             .WithName("saturation-lines")
             .WithSummary("Lines of saturation and of air voids")
             .WithDescription("The dry density at each water content on each line. The zero-air-voids line is saturation 100.");
-
-    private static Func<SaturationLinesRequest, IReadOnlyList<Fault>> Check(Rules rules) => request => rules.Validate(request).ToFaults();
+    }
 
     private static SaturationLinesAnswer Compute(SaturationLinesRequest request)
     {

@@ -1,9 +1,13 @@
 using Drypeak.Service.Field;
+using Drypeak.Service.Hosting;
 using Drypeak.Service.Pages.Catalogues;
+using Drypeak.Service.Pages.Earthwork;
+using Drypeak.Service.Pages.Exchange;
 using Drypeak.Service.Pages.FieldDensity;
 using Drypeak.Service.Pages.Forms;
 using Drypeak.Service.Pages.Laboratory;
 using Drypeak.Service.Pages.Preparation;
+using Drypeak.Service.Pages.References;
 using Microsoft.AspNetCore.Components;
 
 namespace Drypeak.Service.Pages;
@@ -14,9 +18,15 @@ internal static class PageEndpoints
     /// <summary>Maps every page. They are no part of the API, and stand in no description of it.</summary>
     public static void MapPages(this IEndpointRouteBuilder app)
     {
+        var limits = app.ServiceProvider.GetRequiredService<Limits>();
         PageFiles.Map(app);
         LaboratoryPageEndpoints.Map(app);
-        app.MapForm(FieldDensityPage.Of(app.ServiceProvider.GetRequiredService<FieldDensityJob>()));
+        app.MapForm(FieldDensityPage.Of(app.ServiceProvider.GetRequiredService<FieldDensityJob>(), limits));
+        app.MapForm(RelativeDensityPage.Of(app.ServiceProvider.GetRequiredService<RelativeDensityJob>()));
+        app.MapForm(OnePointPage.Of(app.ServiceProvider.GetRequiredService<OnePointJob>(), limits));
+        app.MapForm(RapidMethodPage.Of(app.ServiceProvider.GetRequiredService<RapidMethodJob>()));
+        EarthworkPages.Map(app);
+        ExchangePageEndpoints.Map(app);
         SpecimenSheetPageEndpoint.Map(app);
         MapStill<TestMethodsPage>(app, "/test-methods");
         MapStill<FindingsPage>(app, "/findings");

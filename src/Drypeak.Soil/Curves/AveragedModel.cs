@@ -16,7 +16,7 @@ internal static class AveragedModel
     public const double GreatestChanceOutside = 0.5;
 
     /// <summary>Half length of the maximum's 95 % interval in standard deviations; calibrated with the interval of the optimum.</summary>
-    private const double HalfLength = 1.85;
+    public const double HalfLength = 1.85;
 
     /// <summary>Error of the saturation model as such, Mg/m³.</summary>
     private const double ErrorOfSaturationModel = 0.004;

@@ -69,6 +69,29 @@ public static class CompactionCurve
         };
     }
 
+    /// <summary>How far a model's curve is known over the tested range: for who draws it.</summary>
+    /// <param name="data">As for <see cref="Analyze"/>.</param>
+    /// <param name="model">The model.</param>
+    /// <returns>The pointwise 95 % interval in order of water content; null where nothing supports one. All of it is finite.</returns>
+    public static IReadOnlyList<BandPoint>? BandOf(CompactionData data, CurveModel model)
+    {
+        var points = new TestedPoints(data);
+        if (points.DistinctCount < AveragedModel.FewestPoints)
+        {
+            return null;
+        }
+
+        return model switch
+        {
+            CurveModel.Averaged => CurveBand.OfAveraged(points),
+            CurveModel.Saturation => SaturationModel.ModeOf(points) is { } mode ? CurveBand.Of(points, mode) : null,
+            CurveModel.Parabola => CurveBand.Of(points, Polynomial.Fit(points, Parabola.Degree)),
+            CurveModel.Cubic => CurveBand.Of(points, Polynomial.Fit(points, Cubic.Degree)),
+            CurveModel.Spline => CurveBand.Of(points, new NaturalSpline(points)),
+            _ => throw new ArgumentOutOfRangeException(nameof(model), model, "Not a model."),
+        };
+    }
+
     private static CompactionPoint? Point(in PeakEstimate? peak) =>
         peak is { } found ? new(found.WaterContent, TestedPoints.ToKilograms(found.Density)) : null;
 

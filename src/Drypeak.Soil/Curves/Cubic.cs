@@ -3,7 +3,8 @@ namespace Drypeak.Soil.Curves;
 /// <summary>The least-squares cubic, from five points: with four it would pass through all of them and say nothing of their scatter.</summary>
 internal static class Cubic
 {
-    private const int Degree = 3;
+    /// <summary>Of the polynomial.</summary>
+    public const int Degree = 3;
     private const int FewestPoints = 5;
 
     private const string TooFew = "A cubic needs five points, at four or more different water contents.";

@@ -8,7 +8,8 @@ internal static class Intervals
 {
     private const double UpperTail = 0.025;
 
-    private static readonly double NormalQuantile = Normal.InvCDF(0, 1, 1 - UpperTail);
+    /// <summary>The quantile of the normal that leaves 2.5 % above.</summary>
+    public static readonly double Normal = MathNet.Numerics.Distributions.Normal.InvCDF(0, 1, 1 - UpperTail);
 
     // Quantiles of t cost more than a fit; a test asks for the same few again and again.
     private static readonly ConcurrentDictionary<int, double> StudentQuantiles = new();
@@ -19,7 +20,7 @@ internal static class Intervals
         StudentQuantiles.GetOrAdd(degreesOfFreedom, static dof => StudentT.InvCDF(0, 1, dof, 1 - UpperTail));
 
     /// <summary>A peak whose errors are normal with known variances, as an optimum in kg/m³.</summary>
-    public static FittedOptimum Normally(in PeakEstimate peak) => Symmetric(peak, NormalQuantile);
+    public static FittedOptimum Normally(in PeakEstimate peak) => Symmetric(peak, Normal);
 
     /// <summary>A peak with intervals of so many standard uncertainties on either side, in kg/m³.</summary>
     public static FittedOptimum Symmetric(in PeakEstimate peak, double quantile) => new(

@@ -3,7 +3,8 @@ namespace Drypeak.Soil.Curves;
 /// <summary>The least-squares parabola.</summary>
 internal static class Parabola
 {
-    private const int Degree = 2;
+    /// <summary>Of the polynomial.</summary>
+    public const int Degree = 2;
 
     private const string TooFew = "A parabola needs three points at different water contents.";
 

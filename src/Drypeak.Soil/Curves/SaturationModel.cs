@@ -43,8 +43,10 @@ internal static class SaturationModel
     }
 
     /// <summary>The peak alone.</summary>
-    public static PeakEstimate? PeakOf(TestedPoints points) =>
-        points.SpecificGravity is { } gs ? SaturationMode.Of(points, gs, Prior).Peak : null;
+    public static PeakEstimate? PeakOf(TestedPoints points) => ModeOf(points)?.Peak;
+
+    /// <summary>The mode, or null without the specific gravity.</summary>
+    public static SaturationMode? ModeOf(TestedPoints points) => points.SpecificGravity is { } gs ? SaturationMode.Of(points, gs, Prior) : null;
 
     /// <summary>
     /// Each point from the others: by refits where the points are few and each may carry the curve; where they are many, to first order about the

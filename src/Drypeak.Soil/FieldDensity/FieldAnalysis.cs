@@ -50,6 +50,7 @@ public static class FieldAnalysis
         WaterDensity = test.WaterDensity.KilogramsPerCubicMeter,
         Oversize = test.Oversize is { SpecificGravity: { } } ? test.Oversize : null,
         OnFines = test.OnFines,
+        Effects = soil.Effects,
     };
 
     private static void ShowPhases(JudgedSoil judged, FieldSheet sheet)

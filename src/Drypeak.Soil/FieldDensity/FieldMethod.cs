@@ -54,7 +54,18 @@ public sealed record MeasuredInPlace(Density? WetDensity, Density? DryDensity, W
 
     /// <summary>The moisture offset, or null where no oven pairs were given.</summary>
     public MoistureOffset? Offset { get; init; }
+
+    /// <summary>What the spread of readings does to the two, each independent of the others.</summary>
+    public IReadOnlyList<ReadingEffect> Effects { get; init; } = [];
 }
+
+/// <summary>
+/// What one standard uncertainty of a mean of readings does to the soil in place, to the first order (JCGM 100:2008, 5.1.2). One reading may move
+/// both: they are then correlated, which two uncertainties side by side would not say.
+/// </summary>
+/// <param name="WetDensity">Change of the wet density, kg/m³.</param>
+/// <param name="WaterContent">Change of the water content, as a fraction.</param>
+public readonly record struct ReadingEffect(double WetDensity, double WaterContent);
 
 /// <summary>Several readings of one quantity.</summary>
 /// <param name="Quantity">The member's name: <c>wetDensity</c>, <c>waterContent</c>, <c>waterDensity</c>.</param>

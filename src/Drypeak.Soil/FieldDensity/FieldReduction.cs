@@ -29,6 +29,9 @@ public sealed record SoilInPlace
 
     /// <summary>The gauge's moisture offset.</summary>
     public MoistureOffset? Offset { get; init; }
+
+    /// <summary>What the spread of the readings does to wet density and water content.</summary>
+    public IReadOnlyList<ReadingEffect> Effects { get; init; } = [];
 }
 
 /// <summary>
@@ -111,7 +114,16 @@ internal static class FieldReduction
         }
 
         return Completed(
-            new SoilInPlace { WetDensity = read.WetDensity, WaterContent = w, DryDensity = read.WetDensity is null || w is null ? read.DryDensity : null, Readings = read.Readings, Offset = read.Offset }, sheet);
+            new SoilInPlace
+            {
+                WetDensity = read.WetDensity,
+                WaterContent = w,
+                DryDensity = read.WetDensity is null || w is null ? read.DryDensity : null,
+                Readings = read.Readings,
+                Offset = read.Offset,
+                Effects = oven is null ? read.Effects : [.. read.Effects.Where(effect => effect.WetDensity != 0).Select(effect => effect with { WaterContent = 0 })],
+            },
+            sheet);
     }
 
     /// <summary>Dry density from wet, or wet from dry, where the water content is known.</summary>

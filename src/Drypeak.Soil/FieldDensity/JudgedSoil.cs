@@ -42,6 +42,9 @@ public sealed record JudgedSoil
     /// <summary>Whether the field is corrected to its fines; else the reference to the total.</summary>
     public bool OnFines { get; init; }
 
+    /// <summary>What the spread of readings does to wet density and water content: the uncertainty of each where none was given.</summary>
+    public IReadOnlyList<ReadingEffect> Effects { get; init; } = [];
+
     /// <summary>The fines in place; null where they are not asked for, or not possible.</summary>
     public DensityAndWater? Fines => OnFines && Oversize is { SpecificGravity: { } gravity } stones && DryDensity is { } dry && WaterContent is { } w
         ? OversizeCorrection.ToFines(new DensityAndWater(new Density(dry), new WaterContent(w)), stones.Fraction, gravity, stones.WaterContent, new Density(WaterDensity))
@@ -86,16 +89,39 @@ public sealed record JudgedSoil
         _ => throw new ArgumentOutOfRangeException(nameof(quantity)),
     };
 
-    /// <summary>Standard uncertainty of a quantity to first order, the inputs independent; null where none of those that matter is known.</summary>
+    /// <summary>
+    /// Standard uncertainty of a quantity to first order, the inputs independent; null where none of those that matter is known. An uncertainty that
+    /// was given stands for the whole of its value; dry density and water content without one take what the spread of their readings does to them.
+    /// </summary>
     public double? StandardUncertaintyOf(AcceptedQuantity quantity, FieldUncertainty uncertainty) => FirstOrderUncertainty.Of(
-        moved => (this with { DryDensity = moved[0], WaterContent = moved[1], MaximumDryDensity = moved[2], OptimumWaterContent = moved[3], SpecificGravity = moved[4] }).ValueOf(quantity),
+        moved => (this with { DryDensity = moved[0], WaterContent = moved[1], MaximumDryDensity = moved[2], OptimumWaterContent = moved[3], SpecificGravity = moved[4] })
+            .MovedByReadings(moved.AsSpan(5), uncertainty).ValueOf(quantity),
         [
             (DryDensity, uncertainty.DryDensity?.KilogramsPerCubicMeter),
             (WaterContent, uncertainty.WaterContent?.Fraction),
             (MaximumDryDensity, uncertainty.MaximumDryDensity?.KilogramsPerCubicMeter),
             (OptimumWaterContent, uncertainty.OptimumWaterContent?.Fraction),
             (SpecificGravity, uncertainty.SpecificGravity),
+            .. Effects.Select(_ => ((double?)1, (double?)1)),
         ]);
+
+    /// <summary>The soil with each reading's effect taken so many times more or less: 1 is the soil as it was read.</summary>
+    private JudgedSoil MovedByReadings(ReadOnlySpan<double?> times, FieldUncertainty given)
+    {
+        var (ofWet, ofWater) = (0.0, 0.0);
+        for (var i = 0; i < times.Length; i++)
+        {
+            ofWet += (times[i]!.Value - 1) * Effects[i].WetDensity;
+            ofWater += (times[i]!.Value - 1) * Effects[i].WaterContent;
+        }
+
+        return this with
+        {
+            DryDensity = given.DryDensity is null && WaterContent is { } w ? ((DryDensity * (1 + w)) + ofWet) / (1 + w + ofWater) : DryDensity,
+            WetDensityAlone = WetDensityAlone + ofWet,
+            WaterContent = given.WaterContent is null ? WaterContent + ofWater : WaterContent,
+        };
+    }
 
     private double? DensityOfTotal(double? fines) => ReferenceIsCorrected && fines is { } density ? ToTotal(density, 0).DryDensity.KilogramsPerCubicMeter : fines;
 

@@ -36,7 +36,43 @@ public sealed record NuclearGauge : DensityMethod
         var wet = new Density(MeanOf("wetDensity", "wet density", WetDensity.Select(density => density.KilogramsPerCubicMeter), sheet, readings));
         var offset = OffsetOf(sheet);
         var read = WaterOf(wet, sheet, readings);
-        return new MeasuredInPlace(wet, null, read is { } w ? Corrected(w, offset, sheet) : null) { Readings = readings, Offset = offset };
+        return new MeasuredInPlace(wet, null, read is { } w ? Corrected(w, offset, sheet) : null)
+        {
+            Readings = readings,
+            Offset = offset,
+            Effects = [.. EffectsOf(readings, read, offset)],
+        };
+    }
+
+    /// <summary>
+    /// Where the water content is read as a mass of water ρm, w = ρm/(ρ − ρm) moves with the wet density too: ∂w/∂ρ = −ρm/(ρ − ρm)² and
+    /// ∂w/∂ρm = ρ/(ρ − ρm)². The offset stretches each by 1 + K/1000, and is itself uncertain where there are several pairs.
+    /// </summary>
+    private static IEnumerable<ReadingEffect> EffectsOf(List<ReadingSpread> readings, WaterContent? read, MoistureOffset? offset)
+    {
+        ReadingSpread? Spread(string quantity) => readings.Find(spread => spread.Quantity == quantity);
+        var (wet, water) = (Spread("wetDensity")!, Spread("waterContent") is null ? Spread("waterDensity") : null);
+        var stretch = 1 + ((offset?.K ?? 0) / 1000);
+        var dry = wet.Mean - (water?.Mean ?? 0);
+        if (wet.StandardUncertainty is > 0 and var ofWet)
+        {
+            yield return new ReadingEffect(ofWet, water is null ? 0 : -water.Mean / (dry * dry) * stretch * ofWet);
+        }
+
+        if (water?.StandardUncertainty is > 0 and var ofWater)
+        {
+            yield return new ReadingEffect(0, wet.Mean / (dry * dry) * stretch * ofWater);
+        }
+
+        if (Spread("waterContent")?.StandardUncertainty is > 0 and var ofContent)
+        {
+            yield return new ReadingEffect(0, stretch * ofContent);
+        }
+
+        if (read is { } w && offset?.StandardUncertainty is > 0 and var ofOffset)
+        {
+            yield return new ReadingEffect(0, ofOffset * (1 + w.Fraction) / 1000);
+        }
     }
 
     private WaterContent? WaterOf(Density wet, FieldSheet sheet, List<ReadingSpread> readings)

@@ -54,6 +54,28 @@ public readonly record struct Length(double Meters)
     public double In(LengthUnit unit) => Meters / unit.InMeters();
 }
 
+/// <summary>An area, kept in m². Any finite number; the default is 0. Immutable, safe on any thread.</summary>
+/// <param name="SquareMeters">m².</param>
+public readonly record struct Area(double SquareMeters)
+{
+    /// <summary>The area that <paramref name="value"/> of <paramref name="unit"/> is.</summary>
+    public static Area From(double value, AreaUnit unit) => new(value * unit.InSquareMeters());
+
+    /// <summary>The number of <paramref name="unit"/>.</summary>
+    public double In(AreaUnit unit) => SquareMeters / unit.InSquareMeters();
+}
+
+/// <summary>A speed, kept in m/s. Any finite number; the default is 0. Immutable, safe on any thread.</summary>
+/// <param name="MetersPerSecond">m/s.</param>
+public readonly record struct Speed(double MetersPerSecond)
+{
+    /// <summary>The speed that <paramref name="value"/> of <paramref name="unit"/> is.</summary>
+    public static Speed From(double value, SpeedUnit unit) => new(value * unit.InMetersPerSecond());
+
+    /// <summary>The number of <paramref name="unit"/>.</summary>
+    public double In(SpeedUnit unit) => MetersPerSecond / unit.InMetersPerSecond();
+}
+
 /// <summary>
 /// A water content: mass of water over mass of dry solids (never over wet mass), kept as a fraction. 0 or more for a real soil,
 /// and over 1 for some clays and peats. The default is 0. Immutable, safe on any thread.

@@ -24,6 +24,10 @@ public enum MassUnit
     Kilogram,
     /// <summary>lb (avoirdupois)</summary>
     Pound,
+    /// <summary>t, 1000 kg</summary>
+    Tonne,
+    /// <summary>Short ton, 2000 lb</summary>
+    ShortTon,
 }
 
 /// <summary>Units of volume at the boundary. Inside, volume is in m³.</summary>
@@ -41,6 +45,10 @@ public enum VolumeUnit
     CubicFoot,
     /// <summary>yd³</summary>
     CubicYard,
+    /// <summary>US gallon, 231 in³</summary>
+    Gallon,
+    /// <summary>acre-foot, 43,560 ft³</summary>
+    AcreFoot,
 }
 
 /// <summary>Units of length at the boundary. Inside, length is in m.</summary>
@@ -56,11 +64,40 @@ public enum LengthUnit
     Inch,
     /// <summary>ft</summary>
     Foot,
+    /// <summary>km</summary>
+    Kilometer,
+    /// <summary>mi, 5280 ft</summary>
+    Mile,
+}
+
+/// <summary>Units of area at the boundary. Inside, area is in m².</summary>
+public enum AreaUnit
+{
+    /// <summary>m²</summary>
+    SquareMeter,
+    /// <summary>ha, 10,000 m²</summary>
+    Hectare,
+    /// <summary>ft²</summary>
+    SquareFoot,
+    /// <summary>yd²</summary>
+    SquareYard,
+    /// <summary>acre, 4840 yd²</summary>
+    Acre,
+}
+
+/// <summary>Units of speed at the boundary. Inside, speed is in m/s.</summary>
+public enum SpeedUnit
+{
+    /// <summary>km/h</summary>
+    KilometerPerHour,
+    /// <summary>mph, miles an hour</summary>
+    MilePerHour,
 }
 
 /// <summary>
 /// The exact size of each unit in SI, its symbol in the interface and its symbol for readers. The international pound and foot
-/// are exact by definition (lb = 0.45359237 kg, ft = 0.3048 m); standard gravity is 9.80665 m/s² (3rd CGPM, 1901).
+/// are exact by definition (lb = 0.45359237 kg, ft = 0.3048 m), and with them yard, mile, acre, gallon (231 in³) and short ton (2000 lb);
+/// standard gravity is 9.80665 m/s² (3rd CGPM, 1901). The acre is the international one: the survey foot is not used.
 /// </summary>
 public static class UnitTable
 {
@@ -86,6 +123,8 @@ public static class UnitTable
         MassUnit.Gram => 1e-3,
         MassUnit.Kilogram => 1,
         MassUnit.Pound => Pound,
+        MassUnit.Tonne => 1000,
+        MassUnit.ShortTon => 2000 * Pound,
         _ => throw new ArgumentOutOfRangeException(nameof(unit)),
     };
 
@@ -98,6 +137,8 @@ public static class UnitTable
         VolumeUnit.CubicInch => Foot * Foot * Foot / 1728,
         VolumeUnit.CubicFoot => Foot * Foot * Foot,
         VolumeUnit.CubicYard => 27 * Foot * Foot * Foot,
+        VolumeUnit.Gallon => 231 * Foot * Foot * Foot / 1728,
+        VolumeUnit.AcreFoot => 43_560 * Foot * Foot * Foot,
         _ => throw new ArgumentOutOfRangeException(nameof(unit)),
     };
 
@@ -109,6 +150,27 @@ public static class UnitTable
         LengthUnit.Meter => 1,
         LengthUnit.Inch => Foot / 12,
         LengthUnit.Foot => Foot,
+        LengthUnit.Kilometer => 1000,
+        LengthUnit.Mile => 5280 * Foot,
+        _ => throw new ArgumentOutOfRangeException(nameof(unit)),
+    };
+
+    /// <summary>m² in one of the unit.</summary>
+    public static double InSquareMeters(this AreaUnit unit) => unit switch
+    {
+        AreaUnit.SquareMeter => 1,
+        AreaUnit.Hectare => 10_000,
+        AreaUnit.SquareFoot => Foot * Foot,
+        AreaUnit.SquareYard => 9 * Foot * Foot,
+        AreaUnit.Acre => 43_560 * Foot * Foot,
+        _ => throw new ArgumentOutOfRangeException(nameof(unit)),
+    };
+
+    /// <summary>m/s in one of the unit.</summary>
+    public static double InMetersPerSecond(this SpeedUnit unit) => unit switch
+    {
+        SpeedUnit.KilometerPerHour => 1000.0 / 3600,
+        SpeedUnit.MilePerHour => 5280 * Foot / 3600,
         _ => throw new ArgumentOutOfRangeException(nameof(unit)),
     };
 
@@ -129,6 +191,8 @@ public static class UnitTable
         MassUnit.Gram => "g",
         MassUnit.Kilogram => "kg",
         MassUnit.Pound => "lb",
+        MassUnit.Tonne => "t",
+        MassUnit.ShortTon => "short-ton",
         _ => throw new ArgumentOutOfRangeException(nameof(unit)),
     };
 
@@ -141,6 +205,8 @@ public static class UnitTable
         VolumeUnit.CubicInch => "in3",
         VolumeUnit.CubicFoot => "ft3",
         VolumeUnit.CubicYard => "yd3",
+        VolumeUnit.Gallon => "gal",
+        VolumeUnit.AcreFoot => "acre-ft",
         _ => throw new ArgumentOutOfRangeException(nameof(unit)),
     };
 
@@ -152,6 +218,27 @@ public static class UnitTable
         LengthUnit.Meter => "m",
         LengthUnit.Inch => "in",
         LengthUnit.Foot => "ft",
+        LengthUnit.Kilometer => "km",
+        LengthUnit.Mile => "mi",
+        _ => throw new ArgumentOutOfRangeException(nameof(unit)),
+    };
+
+    /// <summary>The symbol in the interface, in ASCII: <c>m2</c>.</summary>
+    public static string Code(this AreaUnit unit) => unit switch
+    {
+        AreaUnit.SquareMeter => "m2",
+        AreaUnit.Hectare => "ha",
+        AreaUnit.SquareFoot => "ft2",
+        AreaUnit.SquareYard => "yd2",
+        AreaUnit.Acre => "acre",
+        _ => throw new ArgumentOutOfRangeException(nameof(unit)),
+    };
+
+    /// <summary>The symbol in the interface: <c>km/h</c>. Readers see the same.</summary>
+    public static string Code(this SpeedUnit unit) => unit switch
+    {
+        SpeedUnit.KilometerPerHour => "km/h",
+        SpeedUnit.MilePerHour => "mph",
         _ => throw new ArgumentOutOfRangeException(nameof(unit)),
     };
 
@@ -161,9 +248,20 @@ public static class UnitTable
     /// <summary>The symbol for readers: <c>cm³</c>.</summary>
     public static string Symbol(this VolumeUnit unit) => Raised(unit.Code());
 
+    /// <summary>The symbol for readers: <c>m²</c>.</summary>
+    public static string Symbol(this AreaUnit unit) => Raised(unit.Code());
+
+    /// <summary>The symbol for readers: <c>t</c>.</summary>
+    public static string Symbol(this MassUnit unit) => unit == MassUnit.ShortTon ? "short ton" : unit.Code();
+
     /// <summary>The quantity's name in that unit: dry density, or dry unit weight for a unit of weight.</summary>
     public static string DryDensityName(this DensityUnit unit) =>
         unit == DensityUnit.KilonewtonPerCubicMeter ? "dry unit weight" : "dry density";
 
-    private static string Raised(string code) => code.EndsWith('3') ? code[..^1] + "³" : code;
+    private static string Raised(string code) => code[^1] switch
+    {
+        '2' => code[..^1] + "²",
+        '3' => code[..^1] + "³",
+        _ => code,
+    };
 }

@@ -1,6 +1,7 @@
 using Drypeak.Soil.Curves;
 using Drypeak.Soil.FieldDensity.Review;
 using Drypeak.Soil.Laboratory.Review;
+using Drypeak.Soil.Laboratory.Workings;
 using Drypeak.Soil.Quantities;
 
 namespace Drypeak.Soil.References;
@@ -20,7 +21,14 @@ public readonly record struct RapidSpecimen(double WaterAdded, Density WetDensit
 /// <param name="DensityRatio">Field wet density over the peak: exactly the relative compaction; a fraction.</param>
 /// <param name="WaterContentFromOptimum">Field less optimum, as a fraction: −zm(1 + w), or −zm for an estimate where w is not known.</param>
 /// <param name="Findings">What a careful reviewer says, worst first.</param>
-public sealed record RapidResult(double? PeakWaterAdded, Density? PeakDensity, double? DensityRatio, double? WaterContentFromOptimum, IReadOnlyList<Finding> Findings);
+public sealed record RapidResult(double? PeakWaterAdded, Density? PeakDensity, double? DensityRatio, double? WaterContentFromOptimum, IReadOnlyList<Finding> Findings)
+{
+    /// <summary>The fitted curve: water added as a fraction, converted wet density in kg/m³; in order of water added; empty where nothing could be fitted.</summary>
+    public IReadOnlyList<CompactionPoint> Curve { get; init; } = [];
+
+    /// <summary>Each step of the arithmetic.</summary>
+    public IReadOnlyList<WorkingStep> Working { get; init; } = [];
+}
 
 /// <summary>
 /// The rapid method (Hilf; ASTM D5080, AS 1289.5.7.1): field soil is compacted at fill water content and with water added, and all wet
@@ -33,7 +41,10 @@ public static class RapidMethod
     private const int Parabola = 3;
     private const double HighRatio = 1.05;
 
-    /// <summary>Where the driest specimen is put on the axis of the fit, as a fraction: a usual water content, since the fit takes none below 0.</summary>
+    /// <summary>
+    /// The fit wants water contents and dry densities. Which water content the driest specimen is put at changes a parabola not at all and the averaged
+    /// curve hardly: it is a usual one, as a fraction.
+    /// </summary>
     private const double DriestFitted = 0.1;
 
     /// <summary>Computes the method.</summary>
@@ -43,9 +54,10 @@ public static class RapidMethod
     /// <param name="unit">The unit that texts speak.</param>
     public static RapidResult Compute(Density fieldWetDensity, WaterContent? fieldWater, IReadOnlyList<RapidSpecimen> specimens, DensityUnit unit)
     {
-        if (PeakOf(specimens) is not { } peak)
+        var (peakOrNone, curve) = Fitted(specimens);
+        if (peakOrNone is not { } peak)
         {
-            return new RapidResult(null, null, null, null, [NoPeak(specimens, unit)]);
+            return Worked(new RapidResult(null, null, null, null, [NoPeak(specimens, unit)]));
         }
 
         var ratio = fieldWetDensity.KilogramsPerCubicMeter / peak.DryDensity;
@@ -62,18 +74,24 @@ public static class RapidMethod
                 "The difference from the optimum is an estimate: the true one is larger by the factor 1 + w. Give the field water content once it is known; the density ratio does not change."));
         }
 
-        return new RapidResult(peak.WaterContent, new Density(peak.DryDensity), ratio, -peak.WaterContent * (1 + (fieldWater?.Fraction ?? 0)), findings);
+        return Worked(new RapidResult(peak.WaterContent, new Density(peak.DryDensity), ratio, -peak.WaterContent * (1 + (fieldWater?.Fraction ?? 0)), findings));
+
+        RapidResult Worked(RapidResult result) => result with { Curve = curve, Working = RapidWorking.Of(fieldWetDensity, fieldWater, specimens, result, unit) };
     }
 
-    /// <summary>Peak of the converted wet densities: z, and kg/m³.</summary>
-    private static CompactionPoint? PeakOf(IReadOnlyList<RapidSpecimen> specimens)
+    /// <summary>Peak of the converted wet densities and the curve through them: z, and kg/m³.</summary>
+    private static (CompactionPoint? Peak, IReadOnlyList<CompactionPoint> Curve) Fitted(IReadOnlyList<RapidSpecimen> specimens)
     {
-        var shift = DriestFitted - specimens.Min(specimen => specimen.WaterAdded);
+        var driest = specimens.Min(specimen => specimen.WaterAdded);
+        var fill = (DriestFitted - driest) / (1 + driest);
         var data = new CompactionData(
-            [.. specimens.Select(specimen => new CompactionPoint(specimen.WaterAdded + shift, specimen.Converted.KilogramsPerCubicMeter))], null, 1000);
-        return CompactionCurve.PeakOf(data, specimens.Count == Parabola ? CurveModel.Parabola : CurveModel.Averaged) is { } peak
-            ? peak with { WaterContent = peak.WaterContent - shift }
-            : null;
+            [.. specimens.Select(specimen => new CompactionPoint(fill + (specimen.WaterAdded * (1 + fill)), specimen.Converted.KilogramsPerCubicMeter / (1 + fill)))], null, 1000);
+        var chosen = CompactionCurve.Analyze(data, specimens.Count == Parabola ? CurveModel.Parabola : CurveModel.Averaged).Chosen;
+        return (
+            chosen.Optimum is { } optimum ? Back(new CompactionPoint(optimum.WaterContent.Value, optimum.MaximumDryDensity.Value)) : null,
+            [.. chosen.Curve.Select(Back)]);
+
+        CompactionPoint Back(CompactionPoint point) => new((point.WaterContent - fill) / (1 + fill), point.DryDensity * (1 + fill));
     }
 
     private static Finding NoPeak(IReadOnlyList<RapidSpecimen> specimens, DensityUnit unit)

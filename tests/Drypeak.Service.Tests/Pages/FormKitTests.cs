@@ -9,7 +9,11 @@ namespace Drypeak.Service.Tests.Pages;
 public sealed class FormKitTests(PageService service) : IClassFixture<PageService>
 {
     /// <summary>Every page of the kit.</summary>
-    public static TheoryData<string> Addresses => ["/field"];
+    public static TheoryData<string> Addresses =>
+    [
+        "/field", "/relative-density", "/one-point", "/rapid-method",
+        "/earthwork/specimen-water", "/earthwork/lift-water", "/earthwork/quantities", "/earthwork/test-locations", "/earthwork/roller-output", "/earthwork/test-strip",
+    ];
 
     [Theory]
     [MemberData(nameof(Addresses))]

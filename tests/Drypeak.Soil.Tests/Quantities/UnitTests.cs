@@ -6,7 +6,7 @@ namespace Drypeak.Soil.Tests.Quantities;
 
 /// <summary>
 /// The sizes of the units against exact decimal arithmetic from the definitions: pound 0.45359237 kg and yard 0.9144 m (international yard and
-/// pound agreement, 1959), standard gravity 9.80665 m/s² (3rd CGPM, 1901). From memory.
+/// pound agreement, 1959), standard gravity 9.80665 m/s² (3rd CGPM, 1901), US gallon 231 in³, acre 4840 yd², mile 1760 yd, short ton 2000 lb. From memory.
 /// </summary>
 public class UnitTests
 {
@@ -16,9 +16,11 @@ public class UnitTests
     [InlineData(MassUnit.Gram, "g", 0.001)]
     [InlineData(MassUnit.Kilogram, "kg", 1)]
     [InlineData(MassUnit.Pound, "lb", 0.45359237)]
+    [InlineData(MassUnit.Tonne, "t", 1000)]
+    [InlineData(MassUnit.ShortTon, "short-ton", 907.18474)]
     public void A_unit_of_mass_is_so_many_kilograms(MassUnit unit, string code, double kilograms)
     {
-        Assert.Equal(kilograms, unit.InKilograms());
+        Exactly((decimal)kilograms, unit.InKilograms());
         Assert.Equal(code, unit.Code());
     }
 
@@ -28,6 +30,8 @@ public class UnitTests
     [InlineData(LengthUnit.Meter, "m", 1)]
     [InlineData(LengthUnit.Inch, "in", 0.0254)]
     [InlineData(LengthUnit.Foot, "ft", 0.3048)]
+    [InlineData(LengthUnit.Kilometer, "km", 1000)]
+    [InlineData(LengthUnit.Mile, "mi", 1609.344)]
     public void A_unit_of_length_is_so_many_meters(LengthUnit unit, string code, double meters)
     {
         Exactly((decimal)meters, unit.InMeters());
@@ -42,7 +46,31 @@ public class UnitTests
         { VolumeUnit.CubicInch, "in3", "in³", Inch * Inch * Inch },
         { VolumeUnit.CubicFoot, "ft3", "ft³", Foot * Foot * Foot },
         { VolumeUnit.CubicYard, "yd3", "yd³", Yard * Yard * Yard },
+        { VolumeUnit.Gallon, "gal", "gal", 231 * Inch * Inch * Inch },
+        { VolumeUnit.AcreFoot, "acre-ft", "acre-ft", 4840 * Yard * Yard * Foot },
     };
+
+    [Theory]
+    [InlineData(AreaUnit.SquareMeter, "m2", "m²", 1)]
+    [InlineData(AreaUnit.Hectare, "ha", "ha", 10_000)]
+    [InlineData(AreaUnit.SquareFoot, "ft2", "ft²", 0.09290304)]
+    [InlineData(AreaUnit.SquareYard, "yd2", "yd²", 0.83612736)]
+    [InlineData(AreaUnit.Acre, "acre", "acre", 4046.8564224)]
+    public void A_unit_of_area_is_so_many_square_meters(AreaUnit unit, string code, string symbol, double squareMeters)
+    {
+        Exactly((decimal)squareMeters, unit.InSquareMeters());
+        Assert.Equal(code, unit.Code());
+        Assert.Equal(symbol, unit.Symbol());
+    }
+
+    [Theory]
+    [InlineData(SpeedUnit.KilometerPerHour, "km/h", 3.6)]
+    [InlineData(SpeedUnit.MilePerHour, "mph", 2.2369362920544025)] // 3600/1609.344
+    public void A_meter_a_second_is_so_many_of_a_unit_of_speed(SpeedUnit unit, string code, double number)
+    {
+        Assert.Equal(number, new Speed(1).In(unit), number * 1e-15);
+        Assert.Equal(code, unit.Code());
+    }
 
     [Theory]
     [MemberData(nameof(Volumes))]
@@ -76,20 +104,24 @@ public class UnitTests
     {
         Assert.Equal(Enum.GetValues<VolumeUnit>(), Volumes.Select(row => row.Data.Item1));
         Assert.Equal(Enum.GetValues<DensityUnit>(), Densities.Select(row => row.Data.Item1));
-        Assert.Equal(3, Enum.GetValues<MassUnit>().Length);
-        Assert.Equal(5, Enum.GetValues<LengthUnit>().Length);
+        Assert.Equal(5, Enum.GetValues<MassUnit>().Length);
+        Assert.Equal(7, Enum.GetValues<LengthUnit>().Length);
+        Assert.Equal(5, Enum.GetValues<AreaUnit>().Length);
+        Assert.Equal(2, Enum.GetValues<SpeedUnit>().Length);
     }
 
     [Fact]
     public void A_number_comes_back_from_its_unit() =>
-        Gen.Select(Gen.Double[1e-6, 1e6], Gen.Enum<DensityUnit>(), Gen.Enum<MassUnit>(), Gen.Enum<VolumeUnit>(), Gen.Enum<LengthUnit>())
-            .Sample((number, density, mass, volume, length) => Assert.All(
+        Gen.Select(Gen.Double[1e-6, 1e6], Gen.Enum<DensityUnit>(), Gen.Enum<MassUnit>(), Gen.Enum<VolumeUnit>(), Gen.Enum<LengthUnit>(), Gen.Enum<AreaUnit>(), Gen.Enum<SpeedUnit>())
+            .Sample((number, density, mass, volume, length, area, speed) => Assert.All(
                 new[]
                 {
                     Density.From(number, density).In(density),
                     Mass.From(number, mass).In(mass),
                     Volume.From(number, volume).In(volume),
                     Length.From(number, length).In(length),
+                    Area.From(number, area).In(area),
+                    Speed.From(number, speed).In(speed),
                 },
                 back => Assert.Equal(number, back, number * 1e-15)));
 
@@ -104,6 +136,10 @@ public class UnitTests
         Assert.Throws<ArgumentOutOfRangeException>(() => ((LengthUnit)99).Code());
         Assert.Throws<ArgumentOutOfRangeException>(() => ((VolumeUnit)99).Code());
         Assert.Throws<ArgumentOutOfRangeException>(() => ((DensityUnit)99).Code());
+        Assert.Throws<ArgumentOutOfRangeException>(() => ((AreaUnit)99).InSquareMeters());
+        Assert.Throws<ArgumentOutOfRangeException>(() => ((AreaUnit)99).Code());
+        Assert.Throws<ArgumentOutOfRangeException>(() => ((SpeedUnit)99).InMetersPerSecond());
+        Assert.Throws<ArgumentOutOfRangeException>(() => ((SpeedUnit)99).Code());
     }
 
     [Fact]

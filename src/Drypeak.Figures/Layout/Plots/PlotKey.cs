@@ -5,14 +5,12 @@ namespace Drypeak.Figures.Layout.Plots;
 /// <summary>What stands in a plot's key: the outcomes of its marks as words, and what found no room for its name.</summary>
 internal static class PlotKey
 {
-    private const double LineSample = 24;
-
     public static IReadOnlyList<KeyEntry> Of(PlotChart chart, IReadOnlySet<object> keyed, TypeScale type, Theme theme) =>
     [
         .. Outcomes(chart, type),
-        .. chart.Lines.Where(keyed.Contains).Select(line => Line(line.Label!, PlotStyles.Of(line.Role, line.Dash, type, theme), type)),
-        .. chart.Limits.Where(keyed.Contains).Select(limit => Line(limit.Label!, PlotStyles.Of(limit.Role, PlotDash.Usual, type, theme), type)),
-        .. chart.Areas.Where(keyed.Contains).Select(area => Zone(area, type)),
+        .. chart.Lines.Where(keyed.Contains).Select(line => KeyEntry.Line(line.Label!, PlotStyles.Of(line.Role, line.Dash, type, theme), type)),
+        .. chart.Limits.Where(keyed.Contains).Select(limit => KeyEntry.Line(limit.Label!, PlotStyles.Of(limit.Role, PlotDash.Usual, type, theme), type)),
+        .. chart.Areas.Where(keyed.Contains).Select(area => KeyEntry.Zone(area.Label!, area.Role, type)),
     ];
 
     /// <summary>Each role with how many marks have it, unless all are merely measured.</summary>
@@ -38,21 +36,4 @@ internal static class PlotKey
         MarkRole.Undecided => "undecided",
         _ => throw new ArgumentOutOfRangeException(nameof(role)),
     };
-
-    private static KeyEntry Line(string label, Stroke stroke, TypeScale type)
-    {
-        var half = LineSample * type.Unit / 2;
-        return new KeyEntry(PlainText.Clean(label), at => [new Lines([[at with { X = at.X - half }, at with { X = at.X + half }]], stroke) { Name = "key-line" }], 2 * half);
-    }
-
-    private static KeyEntry Zone(PlotArea area, TypeScale type)
-    {
-        var (halfWidth, halfHeight) = (LineSample * type.Unit / 2, 0.35 * type.Label);
-        return new KeyEntry(PlainText.Clean(area.Label!), at =>
-        [
-            PlotStyles.Of(area.Role,
-                [new(at.X - halfWidth, at.Y - halfHeight), new(at.X + halfWidth, at.Y - halfHeight), new(at.X + halfWidth, at.Y + halfHeight), new(at.X - halfWidth, at.Y + halfHeight)],
-                type) with { Name = "key-area" },
-        ], 2 * halfWidth);
-    }
 }

@@ -14,7 +14,7 @@ internal sealed class PlotWording(PlotChart chart, FigureOptions options)
 
     public AxisWords Axes => new(PlainText.Clean(chart.X.Title), PlainText.Clean(chart.Y.Title));
 
-    public HeadingWords Heading => new(
+    public HeadingWords Heading => !options.SaysResult ? new("", null, [[PlainText.Clean(chart.Subtitle ?? "")]]) : new(
         Title,
         Halves(Title),
         [[_ownTitle is null ? "" : _result, PlainText.Clean(chart.Reference ?? "")], [PlainText.Clean(chart.Subtitle ?? "")]]);

@@ -31,7 +31,7 @@ public sealed record Problem : IResult
     /// <summary>In a batch: the line that was refused, counted from 1.</summary>
     /// <example>7</example>
     [JsonIgnore(Condition = JsonIgnoreCondition.WhenWritingNull)]
-    public int? Line { get; init; }
+    public long? Line { get; init; }
 
     /// <summary>Where the service has failed: what finds the request in its log.</summary>
     /// <example>4bf92f3577b34da6a3ce929d0e0e4736</example>

@@ -11,6 +11,8 @@ internal sealed class TagsAndSecurity : IDocumentFilter
     private static readonly Dictionary<string, string> Descriptions = new()
     {
         ["Laboratory"] = "Compaction tests and what belongs to them.",
+        ["Exchange"] = "Files of tests: spreadsheets and AGS4.",
+        ["Earthwork"] = "Planning the work: water, quantities, test programmes, rollers, trial strips.",
         ["Catalogues"] = "Test methods and findings, explained.",
         ["Charts"] = "Pictures by address.",
         ["Description"] = "The service in its own words.",

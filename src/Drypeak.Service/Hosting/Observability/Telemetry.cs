@@ -26,6 +26,8 @@ internal static class Telemetry
                 .AddPrometheusExporter(exporter => exporter.ScrapeResponseCacheDurationMilliseconds = 0));
         if (builder.Configuration[CollectorSetting] is { Length: > 0 })
         {
+            // What a span is about (route, method, status) is written only where this is switched on.
+            AppContext.SetSwitch("Microsoft.AspNetCore.Hosting.SuppressActivityOpenTelemetryData", false);
             telemetry.WithTracing(traces => traces.AddSource(Meters.Name, "Microsoft.AspNetCore").AddProcessor(new WithoutQuery()).AddOtlpExporter());
         }
     }

@@ -31,9 +31,13 @@ public static class RequestReader
     }
 
     /// <summary>415 for a body that is encoded, has no media type, another one than expected, or is not in UTF-8; else null.</summary>
-    public static Problem? RefuseMediaType(HttpRequest request, Func<MediaTypeHeaderValue, bool> isExpected, string expected)
+    /// <param name="request">The request.</param>
+    /// <param name="isExpected">Whether a media type is the expected one.</param>
+    /// <param name="expected">The expected one, for people.</param>
+    /// <param name="anyCoding">Whether the body's encoding is somebody else's to judge.</param>
+    public static Problem? RefuseMediaType(HttpRequest request, Func<MediaTypeHeaderValue, bool> isExpected, string expected, bool anyCoding = false)
     {
-        if (request.Headers.ContentEncoding.Count > 0)
+        if (!anyCoding && request.Headers.ContentEncoding.Count > 0)
         {
             return Problems.EncodedBody();
         }

@@ -16,9 +16,13 @@ internal static class FieldAnswerWords
         _ => "No dry density",
     };
 
-    /// <summary>The requirement that decides: the worst outcome, then the smallest margin.</summary>
-    public static RequirementAnswer? Deciding(FieldDensityAnswer answer) =>
-        answer.Requirements.OrderBy(requirement => requirement.Outcome switch { "not-met" => 0, "undecided" => 1, _ => 2 }).ThenBy(requirement => requirement.Margin ?? double.MinValue).FirstOrDefault();
+    /// <summary>Why: every requirement that is missed; else the first that is undecided, or the first of all, in the order of the specification.</summary>
+    public static string? Why(FieldDensityAnswer answer)
+    {
+        var missed = answer.Requirements.Where(requirement => requirement.Outcome == "not-met").ToList();
+        var decides = missed.Count > 0 ? missed : [.. answer.Requirements.OrderBy(requirement => requirement.Outcome == "undecided" ? 0 : 1).Take(1)];
+        return decides.Count == 0 ? null : string.Join(" ", decides.Select(requirement => requirement.Explanation));
+    }
 
     /// <summary>What to do next, by the outcome.</summary>
     public static string? Next(FieldDensityAnswer answer) => answer switch

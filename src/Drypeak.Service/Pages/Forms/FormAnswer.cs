@@ -21,6 +21,6 @@ internal static class FormAnswer
         where TChart : class => request =>
     {
         var (answer, chart) = compute(request);
-        return new FormAnswer<TAnswer>(answer, chart is null || kind.Refusal(chart, ChartView.Wide) is { } ? null : size => kind.Draw(chart, new FigureOptions { Size = size }));
+        return new FormAnswer<TAnswer>(answer, chart is null || kind.Refusal(chart, new FigureOptions { Size = ChartView.Wide }) is { } ? null : size => kind.Draw(chart, new FigureOptions { Size = size }));
     };
 }

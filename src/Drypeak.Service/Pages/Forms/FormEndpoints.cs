@@ -14,7 +14,7 @@ internal static class FormEndpoints
     {
         app.MapMethods(page.Address, Reading, (HttpRequest request, Limits limits) => Open(request.Query, page, limits)).ExcludeFromDescription();
         app.MapPost(page.Address, (HttpContext context, Limits limits) => PostAsync(context, page, limits, submission => Page(submission, limits))).ExcludeFromDescription();
-        foreach (var file in FormFile.All)
+        foreach (var file in page.Files)
         {
             app.MapMethods(file.AddressOn(page), Reading, (HttpRequest request, Limits limits) => File(FromAddress(request.Query, page, limits), file, limits)).ExcludeFromDescription();
             app.MapPost(file.AddressOn(page), (HttpContext context, Limits limits) => PostAsync(context, page, limits, submission => File(submission, file, limits))).ExcludeFromDescription();
@@ -77,5 +77,5 @@ internal static class FormEndpoints
     /// <summary>The file where there is an answer, else the page that says what is wrong.</summary>
     private static IResult File(FormSubmission submission, FormFile file, Limits limits) => submission.Answer is null
         ? Page(submission, limits)
-        : Results.File(file.Bytes(submission).ToArray(), "application/json", file.NameOn(submission.Page));
+        : Results.File(file.Bytes(submission).ToArray(), file.MediaType, file.NameOn(submission.Page));
 }

@@ -26,5 +26,7 @@ internal static class FormFields
 
     public static readonly NumberField SpecificGravity = new("specific-gravity", "Specific gravity", "/specificGravity/value") { Beside = Determined };
 
+    public static readonly NumberField WaterTemperature = new("water-temperature", "Water temperature", "/waterTemperature") { Unit = "°C", Hint = "20 where nothing is given" };
+
     public static IReadOnlyList<Choice> Codes(IEnumerable<string> codes) => [.. codes.Select(code => new Choice(code, code))];
 }

@@ -3,9 +3,11 @@ namespace Drypeak.Service.Pages.Forms;
 /// <summary>An answer taken away as a file.</summary>
 /// <param name="Ending">End of its name.</param>
 /// <param name="Label">What it is called on the page.</param>
-/// <param name="Bytes">Its bytes; JSON.</param>
-internal sealed record FormFile(string Ending, string Label, Func<FormSubmission, ReadOnlyMemory<byte>> Bytes)
+/// <param name="Bytes">Its bytes.</param>
+/// <param name="MediaType">As in Content-Type.</param>
+internal sealed record FormFile(string Ending, string Label, Func<FormSubmission, ReadOnlyMemory<byte>> Bytes, string MediaType = "application/json")
 {
+    /// <summary>Those of every page.</summary>
     public static IReadOnlyList<FormFile> All { get; } =
     [
         new("answer.json", "Answer as JSON", submission => submission.AnswerFile),

@@ -51,6 +51,12 @@ public abstract class FormPage
     /// <summary>The component that shows the answer: it has a parameter <c>Answer</c> of the answer's type and a parameter <c>Submission</c>, and is an <see cref="AnswerLayout"/> with what is particular put in.</summary>
     public required Type View { get; init; }
 
+    /// <summary>Files that an answer can be taken away in beside those of every page.</summary>
+    internal IReadOnlyList<FormFile> MoreFiles { get; init; } = [];
+
+    /// <summary>Every file that an answer can be taken away in.</summary>
+    internal IEnumerable<FormFile> Files => FormFile.All.Concat(MoreFiles);
+
     /// <summary>Every field that the form may have.</summary>
     public IReadOnlyList<FormField> Fields => _fields.Value;
 

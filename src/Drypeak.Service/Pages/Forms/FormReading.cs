@@ -44,6 +44,9 @@ public sealed class FormReading
 
     public static FormReading Of(FormPage page, FormTexts texts) => new(page, texts);
 
+    /// <summary>A message of the rules or of a review, with the request's members called as the form calls them.</summary>
+    public string InWordsOfTheForm(string message) => _words.InWordsOfTheForm(message);
+
     /// <summary>How a pasted table was understood; null where the field is empty.</summary>
     public FormTable? TableOf(TableField field) => _tables.GetValueOrDefault(field.Name);
 

@@ -125,11 +125,24 @@ public sealed class FormTable
         {
             var (column, text) = (Columns[i], cells[i]);
             var place = $"{item}/{column.Kind.Member.Replace("+", inItem.ToString(CultureInfo.InvariantCulture), StringComparison.Ordinal)}";
-            _cells.TryAdd(place, (row, i));
             if (text.Length == 0)
             {
+                _cells.TryAdd(place, (row, i));
                 continue;
             }
+
+            // What belongs to the whole item may stand in each of its rows, if it is the same.
+            if (_cells.TryGetValue(place, out var before) && before.Row != row && Rows[before.Row][i] is { Length: > 0 } said)
+            {
+                if (said != text)
+                {
+                    _faults.Add(new Fault(place, "contradiction", $"“{NumberText.Shortened(text)}” stands in row {row + 1} and “{NumberText.Shortened(said)}” in row {before.Row + 1} of the same {_field.GroupedBy!.Heading.ToLowerInvariant()}. Give it once."));
+                }
+
+                continue;
+            }
+
+            _cells[place] = (row, i);
 
             if (column.Kind.Measure == Measure.Text)
             {

@@ -20,12 +20,23 @@ internal static class SavedRequest
             return (null, "It is not a request in JSON. Paste the whole text of a file that was saved from this page.");
         }
 
-        var texts = FormTexts.From(page.Fields, page.Fields
-            .Select(field => KeyValuePair.Create(field.Name, new StringValues(TextOf(field, request))))
+        // A choice that fills no place of the request only tells in which fields it is typed: the first that can hold it all is taken.
+        var variants = page.Variant is { Place.Length: 0 } variant ? variant.Choices.Select(choice => ((FormField?)variant, choice.Value)) : [(null, "")];
+        var tried = variants.Select(chosen => Filled(page, request, chosen)).ToList();
+        var (texts, lost) = tried.Find(attempt => attempt.Lost.Count == 0) is { Texts: { } } whole ? whole : tried[0];
+        return lost.Count == 0 ? (texts, null) : (null, $"This page has no field for {string.Join(", ", lost.Take(5))}. Send the request to the address for programs, or take that out of it.");
+    }
+
+    private static (FormTexts Texts, List<string> Lost) Filled(FormPage page, JsonObject request, (FormField? Field, string Value) chosen)
+    {
+        var shown = FormTexts.From(page.Fields, chosen.Field is null ? [] : [KeyValuePair.Create(chosen.Field.Name, new StringValues(chosen.Value))]);
+        var texts = FormTexts.From(page.Fields, page.PartsOf(page.Variant is { Place.Length: > 0 } variant ? FormTexts.From([variant], [KeyValuePair.Create(variant.Name, new StringValues(TextOf(variant, request)))]) : shown)
+            .SelectMany(part => part.Fields).SelectMany(field => field is NumberField { Beside: { } beside } ? new[] { field, beside } : [field])
+            .Concat([.. page.Variant is { } shownBy ? [shownBy] : Array.Empty<FormField>(), FormFields.Working])
+            .Select(field => KeyValuePair.Create(field.Name, new StringValues(field == chosen.Field ? chosen.Value : TextOf(field, request))))
             .Where(text => text.Value.ToString().Length > 0));
         var reread = FormReading.Of(page, texts);
-        var lost = Leaves(request, Places.Whole).Where(leaf => !JsonNode.DeepEquals(leaf.Value, At(reread.Request, leaf.Place))).Select(leaf => leaf.Place).Take(5).ToList();
-        return lost.Count == 0 ? (texts, null) : (null, $"This page has no field for {string.Join(", ", lost)}. Send the request to the address for programs, or take that out of it.");
+        return (texts, [.. Leaves(request, Places.Whole).Where(leaf => !JsonNode.DeepEquals(leaf.Value, At(reread.Request, leaf.Place))).Select(leaf => leaf.Place)]);
     }
 
     private static JsonObject? Parsed(string json)

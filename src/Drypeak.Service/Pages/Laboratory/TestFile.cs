@@ -1,4 +1,5 @@
 using System.Text.Json;
+using Drypeak.Service.Exchange.Csv;
 using Drypeak.Service.Laboratory;
 
 namespace Drypeak.Service.Pages.Laboratory;
@@ -14,7 +15,7 @@ internal sealed record TestFile(string Name, string Label, string MediaType, Fun
         (_, answer) => JsonSerializer.SerializeToUtf8Bytes(answer, ServiceJson.Of<MoistureDensityAnswer>()));
 
     public static readonly TestFile Table = new("compaction-test.csv", "Table as CSV", "text/csv; charset=utf-8",
-        SpecimenCsv.Write);
+        (request, answer) => LaboratoryCsv.Write([(request, answer)]));
 
     public static readonly TestFile Request = new("compaction-test-request.json", "Request as JSON", "application/json",
         (request, _) => JsonSerializer.SerializeToUtf8Bytes(request, ServiceJson.Of<MoistureDensityRequest>()));

@@ -77,6 +77,13 @@ public static class FieldFindingKinds
         "Give the standard uncertainties of the field and of the laboratory, or decide by the simple rule.",
         "ISO/IEC 17025:2017, 7.8.6; JCGM 106:2012, clause 8");
 
+    /// <summary>The readings' spread stands for an uncertainty.</summary>
+    public static readonly FindingKind UncertaintyFromReadings = new("uncertainty-from-readings", Severity.Note,
+        "The field's uncertainty is the spread of the readings alone.",
+        "Readings at one place do not show what the gauge's own calibration and another place would add: the probability of conformance is too sure.",
+        "Give the standard uncertainties of dry density and water content as a whole.",
+        "JCGM 100:2008, 4.2.3 and 5.1.2: s/√n of each mean, carried to the first order");
+
     /// <summary>Within a guard band.</summary>
     public static readonly FindingKind WithinGuardBand = new("within-guard-band", Severity.Note,
         "A value lies within the guard band of its limit.",
@@ -95,6 +102,6 @@ public static class FieldFindingKinds
     public static IReadOnlyList<FindingKind> All { get; } =
     [
         ConeOverSand, NoVolume, ReferenceWithoutPeak, HoleTooSmall, SandDensityUnusual, RelativeCompactionHigh, FarFromOptimum,
-        GaugeAndOvenApart, WaterContentMissing, ValueMissing, UncertaintyMissing, WithinGuardBand,
+        GaugeAndOvenApart, WaterContentMissing, ValueMissing, UncertaintyMissing, UncertaintyFromReadings, WithinGuardBand,
     ];
 }

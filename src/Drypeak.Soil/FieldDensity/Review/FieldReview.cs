@@ -24,6 +24,7 @@ internal static class FieldReview
         .. AgainstReference(result.Judged),
         .. Missing(result.Soil),
         .. Requirements(test, result),
+        .. Readings(test, result),
         .. test.SpecificGravity is { } gravity ? MaterialReview.SpecificGravity(gravity) : [],
         .. test.Oversize is { } oversize ? MaterialReview.Oversize(oversize, null) : [],
     ];
@@ -69,6 +70,22 @@ internal static class FieldReview
         {
             yield return FieldFindingKinds.FarFromOptimum.At("/waterContent",
                 $"The water content is {ReaderText.Fixed(Math.Abs(apart) * 100, 1)} percentage points {(apart < 0 ? "dry" : "wet")} of the optimum. Check it and the reference; {(apart < 0 ? "wet" : "dry")} the lift before it is rolled again.");
+        }
+    }
+
+    private static IEnumerable<Finding> Readings(FieldTest test, FieldResult result)
+    {
+        var fromReadings = (test.Uncertainty.DryDensity is null ? [AcceptedQuantity.DryDensity] : Array.Empty<AcceptedQuantity>())
+            .Concat(test.Uncertainty.WaterContent is null ? [AcceptedQuantity.WaterContent] : []);
+        List<string> used = [.. fromReadings.Select(quantity => (Quantity: quantity, Uncertainty: result.Judged.StandardUncertaintyOf(quantity, test.Uncertainty)))
+            .Where(item => item.Uncertainty is > 0)
+            .Select(item => item.Quantity == AcceptedQuantity.DryDensity
+                ? $"{ReaderText.Of(new Density(item.Uncertainty!.Value), test.Units.Density)} of the dry density"
+                : $"{ReaderText.Fixed(item.Uncertainty!.Value * 100, 2)} percentage points of the water content")];
+        if (used.Count > 0 && result.Soil.Effects.Count > 0 && result.Judgements.Any(judged => judged.StandardUncertainty is { }))
+        {
+            yield return FieldFindingKinds.UncertaintyFromReadings.At(test.Method.Place,
+                $"The standard uncertainty, {string.Join(" and ", used)}, is the spread of the readings alone. The gauge's calibration is not in it. Give the uncertainty of each as a whole.");
         }
     }
 

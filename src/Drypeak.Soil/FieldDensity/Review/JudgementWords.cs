@@ -15,7 +15,7 @@ public static class JudgementWords
             return $"The {quantity.Words()} could not be computed: {WhatIsMissing(quantity, result)}";
         }
 
-        var start = $"The {quantity.Words()} is {Text(quantity, value, units)}, {Against(requirement, value, units)}";
+        var start = $"The {quantity.Words()} {(quantity == AcceptedQuantity.AirVoids ? "are" : "is")} {Standing(requirement, value, units)}";
         return judged.Doubt switch
         {
             Doubt.UncertaintyUnknown => start + ". The guarded rule needs its uncertainty, and none is known: give the standard uncertainties, or decide by the simple rule.",
@@ -31,7 +31,12 @@ public static class JudgementWords
         : quantity.IsPercent() ? ReaderText.Percent(value)
         : ReaderText.Fixed(value, 3);
 
-    private static string Amount(AcceptedQuantity quantity, double value, UnitSet units) =>
+    /// <summary>A value beside a requirement: <c>95.4 %, 0.40 above the minimum of 95.0 %</c>.</summary>
+    public static string Standing(Requirement requirement, double value, UnitSet units) =>
+        $"{Text(requirement.Quantity, value, units)}, {Against(requirement, value, units)}";
+
+    /// <summary>A difference of two values, or a standard deviation, as readers write it.</summary>
+    public static string Amount(AcceptedQuantity quantity, double value, UnitSet units) =>
         quantity.IsDensity() ? ReaderText.Of(new Density(value), units.Density)
         : quantity.IsPercent() ? ReaderText.Fixed(value * 100, 2)
         : ReaderText.Fixed(value, 3);

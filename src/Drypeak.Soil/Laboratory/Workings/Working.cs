@@ -17,11 +17,23 @@ public static class Working
         sheet.Effort(result.Specimens);
         for (var i = 0; i < result.Specimens.Count; i++)
         {
-            sheet.Specimen(test.Specimens[i], result.Specimens[i]);
+            sheet.Specimen(test.Specimens[i], result.Specimens[i], $" of specimen {result.Specimens[i].Label}");
         }
 
         sheet.Peak(result);
         sheet.Correction(result);
+        return sheet.Steps;
+    }
+
+    /// <summary>The steps of one specimen from its weighings to its densities.</summary>
+    /// <param name="measured">As measured.</param>
+    /// <param name="specimen">As reduced.</param>
+    /// <param name="units">The caller's units.</param>
+    /// <param name="of">What is added to each quantity's name: <c> of the point</c>.</param>
+    public static IReadOnlyList<WorkingStep> OfSpecimen(SpecimenMeasurement measured, Specimen specimen, UnitSet units, string of)
+    {
+        var sheet = new Sheet(new MoistureDensityTest { Specimens = [measured], Units = units, WaterDensity = Soil.Phases.WaterDensity.At(Soil.Phases.WaterDensity.DefaultTemperature) });
+        sheet.Specimen(measured, specimen, of);
         return sheet.Steps;
     }
 
@@ -64,9 +76,8 @@ public static class Working
                 effort.KilojoulesPerCubicMeter, "kJ/m³");
         }
 
-        public void Specimen(SpecimenMeasurement measured, Specimen specimen)
+        public void Specimen(SpecimenMeasurement measured, Specimen specimen, string of)
         {
-            var of = $" of specimen {specimen.Label}";
             WaterContent(measured, specimen, of);
             if (specimen is { MoldVolume: { } moldVolume, SoilVolume: { } volume })
             {
