@@ -14,7 +14,7 @@ internal sealed class TestStripJob(Limits limits)
 {
     private const int CurvePoints = 61;
 
-    private readonly TestStripRules _rules = new(limits);
+    private readonly Lazy<TestStripRules> _rules = new(() => new(limits));
 
     /// <summary>The kind of its chart.</summary>
     public ChartKind<PlotChart> Chart { get; } = ChartKind.Plot("test-strip", "Dry density against passes on a trial strip", limits);
@@ -30,7 +30,7 @@ internal sealed class TestStripJob(Limits limits)
     }
 
     /// <summary>Every broken rule; empty where the request can be computed.</summary>
-    public IReadOnlyList<Fault> Check(TestStripRequest request) => _rules.Check(request);
+    public IReadOnlyList<Fault> Check(TestStripRequest request) => _rules.Value.Check(request);
 
     /// <summary>Computes a request that passed <see cref="Check"/>.</summary>
     public Charted<TestStripAnswer, PlotChart> Compute(TestStripRequest request)
