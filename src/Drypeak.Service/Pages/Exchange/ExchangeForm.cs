@@ -33,8 +33,8 @@ public sealed record ExchangeForm(ExchangeKind Kind, ReadOnlyMemory<byte> File, 
 /// <summary>A test of the file in a row of the page.</summary>
 /// <param name="Name">Its reference, or its key.</param>
 /// <param name="Numbers">What was computed, by the headings of the table.</param>
-/// <param name="Findings">Its findings, worst first.</param>
-public sealed record ExchangeRow(string Name, IReadOnlyList<string> Numbers, IReadOnlyList<FindingContract> Findings);
+/// <param name="Findings">Its findings, worst first; null where a reviewer was not asked.</param>
+public sealed record ExchangeRow(string Name, IReadOnlyList<string> Numbers, IReadOnlyList<FindingContract>? Findings);
 
 /// <summary>A table of tests.</summary>
 public sealed record ExchangeTable(string Heading, IReadOnlyList<string> Columns, IReadOnlyList<ExchangeRow> Rows);
@@ -53,6 +53,8 @@ public sealed record ExchangeResult(
 /// <summary>A form with its answer, or with what is wrong.</summary>
 public sealed record ExchangeSubmission(ExchangeForm Form)
 {
+    private static readonly string[] Outcomes = ["accepted", "rejected", "undecided"];
+
     public ExchangeResult? Result { get; init; }
 
     /// <summary>What is wrong with the file, at its lines.</summary>
@@ -103,7 +105,7 @@ public sealed record ExchangeSubmission(ExchangeForm Form)
     {
         var laboratory = LaboratoryTable([.. answer.Tests.Select(test => test.Answer)]);
         var field = new ExchangeTable("Field density tests", ["Dry density, Mg/m³", "Water content, %", "Relative compaction, %"],
-            [.. answer.FieldTests.Select(test => new ExchangeRow(string.Join(", ", test.Key.Values.Where(text => text.Length > 0)), [Text(test.DryDensity, "0.000"), Text(test.WaterContent, "0.0"), Text(test.RelativeCompaction, "0.0")], []))]);
+            [.. answer.FieldTests.Select(test => new ExchangeRow(string.Join(", ", test.Key.Values.Where(text => text.Length > 0)), [Text(test.DryDensity, "0.000"), Text(test.WaterContent, "0.0"), Text(test.RelativeCompaction, "0.0")], null))]);
         var sentence = (answer.Tests.Count, answer.FieldTests.Count) switch
         {
             (0, 0) => "Nothing in the file could be computed.",
@@ -119,7 +121,7 @@ public sealed record ExchangeSubmission(ExchangeForm Form)
 
     private static string SentenceOfField(IReadOnlyList<FieldDensityAnswer> tests)
     {
-        var decided = new[] { "accepted", "rejected", "undecided" }
+        var decided = Outcomes
             .Select(outcome => (Outcome: outcome, Count: tests.Count(test => test.Outcome == outcome))).Where(each => each.Count > 0).Select(each => $"{each.Count} {each.Outcome}").ToList();
         return decided.Count == 0 ? Sentence(tests.Count, "field density test") : $"{Counted(tests.Count, "field density test")} computed: {string.Join(", ", decided)}.";
     }
