@@ -1,5 +1,6 @@
 using Drypeak.Service.Charts;
 using Drypeak.Service.Hosting;
+using Drypeak.Soil.Acceptance;
 using Drypeak.Soil.Earthwork;
 using Drypeak.Soil.FieldDensity.Review;
 using Drypeak.Soil.Laboratory.Review;
@@ -12,12 +13,12 @@ internal static class FindingKindsEndpoint
 {
     internal static IReadOnlyList<FindingKindAnswer> Kinds { get; } =
     [
-        .. FindingKinds.All.Concat(FieldFindingKinds.All).Concat(ReferenceFindingKinds.All).Concat(EarthworkFindingKinds.All).Append(ChartAddress.NoAddress).Select(kind => new FindingKindAnswer(
+        .. FindingKinds.All.Concat(FieldFindingKinds.All).Concat(ReferenceFindingKinds.All).Concat(EarthworkFindingKinds.All).Concat(LotFindingKinds.All).Append(ChartAddress.NoAddress).Select(kind => new FindingKindAnswer(
             kind.Code, kind.Severity.ToString().ToLowerInvariant(), kind.Meaning, kind.Why, kind.Remedy, kind.Basis)),
     ];
 
     public static void MapFindingKinds(this IEndpointRouteBuilder app) =>
-        app.MapRead("/v1/findings", () => Results.Json(Kinds, ServiceJson.Of<IReadOnlyList<FindingKindAnswer>>()))
+        app.MapMethods("/v1/findings", EndpointDescription.Reading, () => Results.Json(Kinds, ServiceJson.Of<IReadOnlyList<FindingKindAnswer>>()))
             .WithTags("Catalogues")
             .WithName("findings")
             .WithSummary("Every kind of finding")

@@ -1,5 +1,7 @@
+using Drypeak.Service.Acceptance;
 using Drypeak.Service.Field;
 using Drypeak.Service.Hosting;
+using Drypeak.Service.Pages.Acceptance;
 using Drypeak.Service.Pages.Catalogues;
 using Drypeak.Service.Pages.Earthwork;
 using Drypeak.Service.Pages.Exchange;
@@ -25,6 +27,8 @@ internal static class PageEndpoints
         app.MapForm(RelativeDensityPage.Of(app.ServiceProvider.GetRequiredService<RelativeDensityJob>()));
         app.MapForm(OnePointPage.Of(app.ServiceProvider.GetRequiredService<OnePointJob>(), limits));
         app.MapForm(RapidMethodPage.Of(app.ServiceProvider.GetRequiredService<RapidMethodJob>()));
+        app.MapForm(LotPage.Of(app.ServiceProvider.GetRequiredService<LotAcceptanceJob>()));
+        app.MapForm(PlanPage.Of(app.ServiceProvider.GetRequiredService<AcceptancePlanJob>()));
         EarthworkPages.Map(app);
         ExchangePageEndpoints.Map(app);
         SpecimenSheetPageEndpoint.Map(app);
@@ -35,7 +39,7 @@ internal static class PageEndpoints
     /// <summary>A page that is the same for all who ask.</summary>
     private static void MapStill<TPage>(IEndpointRouteBuilder app, string address)
         where TPage : IComponent =>
-        app.MapMethods(address, [HttpMethods.Get, HttpMethods.Head], () => new PageResult<TPage>(new Dictionary<string, object?>())).ExcludeFromDescription();
+        app.MapMethods(address, [HttpMethods.Get, HttpMethods.Head], IResult () => new PageResult<TPage>(new Dictionary<string, object?>())).ExcludeFromDescription();
 
     /// <summary>The page for an unknown address; it sets no status of its own.</summary>
     public static IResult NotFound(HttpContext _) => new PageResult<NotFoundPage>(new Dictionary<string, object?>());
