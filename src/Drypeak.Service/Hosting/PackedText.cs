@@ -7,7 +7,12 @@ namespace Drypeak.Service.Hosting;
 /// <summary>Bytes as a part of an address: compressed (Brotli, RFC 7932) and in base64url (RFC 4648).</summary>
 internal static class PackedText
 {
-    private const int Quality = 5;
+    /// <summary>
+    /// Each answer packs its links, so that this counts in every answer. A chart of five specimens, 9 kB of JSON: at 2 it takes 36 µs and
+    /// 1,690 bytes, at 5 127 µs and 1,600; at 0 17 µs and 2,280.
+    /// </summary>
+    private const int Quality = 2;
+
     private const int Window = 18;
 
     /// <summary>What became of unpacking.</summary>

@@ -77,6 +77,20 @@ public sealed class CsvTests(RunningService service)
     }
 
     [Fact]
+    public async Task A_computed_column_that_says_otherwise_is_computed_anew_and_said()
+    {
+        var own = Join(await TableAsync(Laboratory, Weighed));
+        Assert.Empty((await JsonAsync(Laboratory, own)).At("/findings").EnumerateArray());
+        const string stale = "reference,waterContent [%],dryDensity [Mg/m3],optimumWaterContent [%],maximumDryDensity [Mg/m3],model\nB,10,1.75,12.0,1.9,guess\nB,12,1.82,,,\nB,14,1.86,,,\nB,16,1.83,,,\n";
+        var answer = await JsonAsync(Laboratory, stale);
+        Assert.Equal(["2 computed-anew", "2 computed-anew"], answer.At("/findings").EnumerateArray().Select(finding => $"{finding.Number("/line")} {finding.Text("/code")}"));
+        Assert.InRange(answer.Number("/tests/0/optimum/waterContent"), 13, 15);
+
+        var field = await JsonAsync(Field, "label,dryDensity,maximumDryDensity,relativeCompaction [%]\n1,1.8,1.9,99\n2,1.9,1.9,100\n");
+        Assert.Equal(2, Assert.Single(field.At("/findings").EnumerateArray()).Number("/line"));
+    }
+
+    [Fact]
     public async Task A_file_of_field_tests_has_one_row_a_test()
     {
         const string file = "label,wetDensity [Mg/m3],waterContent [%],dryDensity [Mg/m3],maximumDryDensity [Mg/m3],optimumWaterContent [%],minimumRelativeCompaction [%]\n"

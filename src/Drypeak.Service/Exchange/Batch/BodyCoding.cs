@@ -100,9 +100,22 @@ internal static class BodyCoding
 
         public override async ValueTask<int> ReadAsync(Memory<byte> buffer, CancellationToken cancellationToken = default)
         {
-            var bytes = await inner.ReadAsync(buffer, cancellationToken);
+            var bytes = await ReadInnerAsync(buffer, cancellationToken);
             told(bytes);
             return bytes;
+        }
+
+        /// <summary>Of damaged data Brotli's decoder says that the operation is invalid, gzip's that the data are; here both say the latter.</summary>
+        private async ValueTask<int> ReadInnerAsync(Memory<byte> buffer, CancellationToken cancellationToken)
+        {
+            try
+            {
+                return await inner.ReadAsync(buffer, cancellationToken);
+            }
+            catch (InvalidOperationException damaged) when (inner is BrotliStream)
+            {
+                throw new InvalidDataException("The compressed data are damaged.", damaged);
+            }
         }
 
         public override Task<int> ReadAsync(byte[] buffer, int offset, int count, CancellationToken cancellationToken) =>

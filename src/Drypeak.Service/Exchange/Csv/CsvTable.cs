@@ -99,6 +99,22 @@ internal sealed class CsvTable
         return ColumnUnits.InFormUnits(number, AsTableColumn(column), UnitSet);
     }
 
+    /// <summary>
+    /// What there is to say where a computed column stands in the file with another number than was computed now: it is put right, and
+    /// said. Null where there is no such number, or the same.
+    /// </summary>
+    public FileFinding? Replaced(CsvRow row, CsvColumn computed, double? now)
+    {
+        if (Find(computed.Name) is not { } column || Plain(Cell(row, column)) is not { Length: > 0 } text || NumberText.Read(text, _mark, out var number) is not null
+            || (now is { } value && Math.Abs(ColumnUnits.InFormUnits(number, AsTableColumn(column), UnitSet) - value) <= 1e-9 * Math.Abs(value)))
+        {
+            return null;
+        }
+
+        return FileFinding.Of("computed-anew", Severity.Note, row.Line,
+            $"{computed.Name} is {NumberText.Shortened(text)} in the file; computed it is {(now is { } anew ? CsvText.Number(anew) : "not there")}. The computed one counts.");
+    }
+
     public static string Cell(CsvRow row, FoundColumn column) => column.Position < row.Cells.Count ? row.Cells[column.Position] : "";
 
     /// <summary>A cell as the tables of the pages take it: without an exponent.</summary>

@@ -84,7 +84,12 @@ internal static class FieldCsv
         }
 
         var answers = tests.ConvertAll(FieldDensityJob.Compute);
-        return new CsvOutcome<FieldDensityAnswer>(new CsvFile<FieldDensityAnswer>(answers, [], () => Write(tests, answers)), null);
+        var replaced = table.Rows.Zip(answers).SelectMany(test => new[]
+        {
+            table.Replaced(test.First, RelativeCompaction, test.Second.RelativeCompaction),
+            table.Replaced(test.First, WaterContentFromOptimum, test.Second.WaterContentFromOptimum),
+        });
+        return new CsvOutcome<FieldDensityAnswer>(new CsvFile<FieldDensityAnswer>(answers, [.. replaced.OfType<FileFinding>()], () => Write(tests, answers)), null);
     }
 
     private static byte[] Write(List<FieldDensityRequest> tests, List<FieldDensityAnswer> answers) => CsvText.Write(

@@ -38,8 +38,8 @@ internal static class LaboratoryColumns
     private static readonly CsvColumn Porosity = new("porosity", Measure.Percent, "Porosity.") { IsComputed = true };
     private static readonly CsvColumn Saturation = new("saturation", Measure.Percent, "Degree of saturation.") { IsComputed = true, Words = ["degree of saturation"] };
     private static readonly CsvColumn AirVoids = new("airVoids", Measure.Percent, "Air voids, % of the total volume.") { IsComputed = true };
-    private static readonly CsvColumn OptimumWaterContent = new("optimumWaterContent", Measure.Percent, "Optimum water content, on the test's first row.") { IsComputed = true };
-    private static readonly CsvColumn MaximumDryDensity = new("maximumDryDensity", Measure.Density, "Maximum dry density, on the test's first row.") { IsComputed = true };
+    public static readonly CsvColumn OptimumWaterContent = new("optimumWaterContent", Measure.Percent, "Optimum water content, on the test's first row.") { IsComputed = true };
+    public static readonly CsvColumn MaximumDryDensity = new("maximumDryDensity", Measure.Density, "Maximum dry density, on the test's first row.") { IsComputed = true };
     private static readonly CsvColumn Model = new("model", Measure.Text, "The curve's model, on the test's first row.") { IsComputed = true };
     private static readonly CsvColumn Findings = new("findings", Measure.Text, "Codes of the test's findings, worst first, on its first row.") { IsComputed = true };
 

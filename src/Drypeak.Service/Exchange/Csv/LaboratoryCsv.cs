@@ -30,7 +30,7 @@ internal static partial class LaboratoryCsv
 
         var answers = tests.ConvertAll(test => job.Compute(test.Request).Answer);
         return new CsvOutcome<MoistureDensityAnswer>(
-            new CsvFile<MoistureDensityAnswer>(answers, [], () => Write([.. tests.Select(test => test.Request).Zip(answers)])), null);
+            new CsvFile<MoistureDensityAnswer>(answers, [.. tests.Zip(answers).SelectMany(test => test.First.Replaced(test.Second))], () => Write([.. tests.Select(test => test.Request).Zip(answers)])), null);
     }
 
     /// <summary>Tests and their answers as a file, a row a specimen.</summary>
@@ -129,6 +129,13 @@ internal static partial class LaboratoryCsv
 
         /// <summary>What is the test's and stands differently on its rows.</summary>
         public List<FileFault> Faults { get; } = [];
+
+        /// <summary>What the file says of the peak otherwise than the answer.</summary>
+        public IEnumerable<FileFinding> Replaced(MoistureDensityAnswer answer) => new[]
+        {
+            _table.Replaced(_rows[0], LaboratoryColumns.OptimumWaterContent, answer.Optimum?.WaterContent),
+            _table.Replaced(_rows[0], LaboratoryColumns.MaximumDryDensity, answer.Optimum?.MaximumDryDensity),
+        }.OfType<FileFinding>();
 
         /// <summary>A fault of the request at its cell.</summary>
         public FileFault At(Fault fault)

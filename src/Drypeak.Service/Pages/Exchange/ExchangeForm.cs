@@ -33,8 +33,8 @@ public sealed record ExchangeForm(ExchangeKind Kind, ReadOnlyMemory<byte> File, 
 /// <summary>A test of the file in a row of the page.</summary>
 /// <param name="Name">Its reference, or its key.</param>
 /// <param name="Numbers">What was computed, by the headings of the table.</param>
-/// <param name="Findings">Its findings, worst first.</param>
-public sealed record ExchangeRow(string Name, IReadOnlyList<string> Numbers, IReadOnlyList<FindingContract> Findings);
+/// <param name="Findings">Its findings, worst first; null where a reviewer was not asked.</param>
+public sealed record ExchangeRow(string Name, IReadOnlyList<string> Numbers, IReadOnlyList<FindingContract>? Findings);
 
 /// <summary>A table of tests.</summary>
 public sealed record ExchangeTable(string Heading, IReadOnlyList<string> Columns, IReadOnlyList<ExchangeRow> Rows);
@@ -53,7 +53,6 @@ public sealed record ExchangeResult(
 /// <summary>A form with its answer, or with what is wrong.</summary>
 public sealed record ExchangeSubmission(ExchangeForm Form)
 {
-    /// <summary>The outcomes of field tests, in the order in which they are counted.</summary>
     private static readonly string[] Outcomes = ["accepted", "rejected", "undecided"];
 
     public ExchangeResult? Result { get; init; }
@@ -106,7 +105,7 @@ public sealed record ExchangeSubmission(ExchangeForm Form)
     {
         var laboratory = LaboratoryTable([.. answer.Tests.Select(test => test.Answer)]);
         var field = new ExchangeTable("Field density tests", ["Dry density, Mg/m³", "Water content, %", "Relative compaction, %"],
-            [.. answer.FieldTests.Select(test => new ExchangeRow(string.Join(", ", test.Key.Values.Where(text => text.Length > 0)), [Text(test.DryDensity, "0.000"), Text(test.WaterContent, "0.0"), Text(test.RelativeCompaction, "0.0")], []))]);
+            [.. answer.FieldTests.Select(test => new ExchangeRow(string.Join(", ", test.Key.Values.Where(text => text.Length > 0)), [Text(test.DryDensity, "0.000"), Text(test.WaterContent, "0.0"), Text(test.RelativeCompaction, "0.0")], null))]);
         var sentence = (answer.Tests.Count, answer.FieldTests.Count) switch
         {
             (0, 0) => "Nothing in the file could be computed.",

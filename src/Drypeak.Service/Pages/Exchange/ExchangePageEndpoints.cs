@@ -53,7 +53,8 @@ internal static class ExchangePageEndpoints
             return Problem.Of(ProblemKind.BadRequest, "The form is damaged or cut short. Send it again.");
         }
 
-        return Page(ExchangeSubmission.Of(await FormOfAsync(posted, context.RequestAborted), jobs));
+        var form = await FormOfAsync(posted, context.RequestAborted);
+        return form.File.Length > limits.BodyBytes ? Problems.TooLarge(limits.BodyBytes) : Page(ExchangeSubmission.Of(form, jobs));
     }
 
     private static async Task<ExchangeForm> FormOfAsync(IFormCollection posted, CancellationToken stop)
