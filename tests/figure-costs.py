@@ -1,5 +1,5 @@
 #!/usr/bin/python3
-"""The figure of five specimens by matplotlib in a warm process: median milliseconds for a PNG of 960x640.
+"""The figure of five specimens by matplotlib in a warm process: median processor milliseconds for a PNG of 960x640.
 
 Needs Debian's python3-matplotlib. Called by tests/figure-costs.
 """
@@ -45,7 +45,7 @@ for _ in range(5):
     draw()
 times = []
 for _ in range(25):
-    start = time.perf_counter()
+    start = time.process_time()
     size = len(draw())
-    times.append(1000 * (time.perf_counter() - start))
+    times.append(1000 * (time.process_time() - start))
 print(f"matplotlib {matplotlib.__version__}, PNG 960x640, warm: {statistics.median(times):.1f} ms, {size} bytes")
