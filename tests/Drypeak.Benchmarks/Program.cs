@@ -2,7 +2,7 @@ using System.Globalization;
 using BenchmarkDotNet.Running;
 using Drypeak.Benchmarks;
 
-// Either the benchmarks, or the bare server that the service is measured against over HTTP, the batch beside single requests, or what figures cost.
+// Either the benchmarks, or the bare server that the service is measured against over HTTP, or the batch beside single requests, or lots, or what figures cost.
 if (args is ["bare-server", var url])
 {
     await BareServer.RunAsync(url);
@@ -10,6 +10,10 @@ if (args is ["bare-server", var url])
 else if (args is ["figures"])
 {
     FigureCosts.Run();
+}
+else if (args is ["lots", var lots])
+{
+    await LotTimes.RunAsync(lots);
 }
 else if (args is ["batch", var service, var process, var tests, var singles])
 {

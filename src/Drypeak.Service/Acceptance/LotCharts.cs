@@ -19,7 +19,7 @@ internal sealed class LotCharts(Lot lot, LotResult result, string? reference)
         lot.ControlChart?.Quantity
         ?? lot.Rules.OfType<QuantityRule>().FirstOrDefault()?.Limits.Quantity
         ?? lot.Tests.SelectMany(test => test.Judgements).FirstOrDefault()?.Requirement.Quantity
-        ?? result.Statistics.FirstOrDefault()?.Quantity;
+        ?? (result.Statistics.Count > 0 ? result.Statistics[0].Quantity : null);
 
     /// <summary>The tests that count.</summary>
     private readonly HashSet<LotTest> _counted = result.Counted.ToHashSet<LotTest>(ReferenceEqualityComparer.Instance);
@@ -88,8 +88,8 @@ internal sealed class LotCharts(Lot lot, LotResult result, string? reference)
         double[] values = [.. result.Counted.Select(test => test.Values[quantity]).OfType<double>().Select(value => In(quantity, value))];
         var (least, most) = (values.Min(), values.Max());
 
-        // D. W. Scott, On optimal and data-based histograms, Biometrika 66 (1979): 3.49·s/∛n, made a round number.
-        var width = Round(Math.Max(3.49 * In(quantity, deviation) / Math.Cbrt(values.Length), (most - least) / MostBars));
+        // D. W. Scott, On optimal and data-based histograms, Biometrika 66 (1979): 3.49·s/∛n, made a round number not over it.
+        var width = RoundBelow(Math.Max(3.49 * In(quantity, deviation) / Math.Cbrt(values.Length), 2.5 * (most - least) / MostBars));
         var first = Math.Floor(least / width);
         var counts = values.CountBy(value => (int)(Math.Floor(value / width) - first)).ToDictionary(pair => pair.Key, pair => pair.Value);
         var share = result.Rules.FirstOrDefault(judged => judged.Rule is PercentWithinLimitsRule rule && rule.Limits.Quantity == quantity);
@@ -243,11 +243,11 @@ internal sealed class LotCharts(Lot lot, LotResult result, string? reference)
 
     private static double Normal(double z) => Math.Exp(-z * z / 2) / Math.Sqrt(2 * Math.PI);
 
-    /// <summary>The next of 1, 2, 5, 10, …</summary>
-    private static double Round(double width)
+    /// <summary>The last of 1, 2, 5, 10, … that is not over it.</summary>
+    private static double RoundBelow(double width)
     {
         var power = Math.Pow(10, Math.Floor(Math.Log10(width)));
-        return width <= power ? power : width <= 2 * power ? 2 * power : width <= 5 * power ? 5 * power : 10 * power;
+        return width >= 5 * power ? 5 * power : width >= 2 * power ? 2 * power : power;
     }
 
     private static PlotArea Bar(double from, double width, int count) =>

@@ -1,10 +1,8 @@
 using Drypeak.Service.Contracts;
 using Drypeak.Service.Field;
-using Drypeak.Service.Laboratory;
 using Drypeak.Soil.Acceptance;
 using Drypeak.Soil.Acceptance.ControlCharts;
 using Drypeak.Soil.FieldDensity;
-using Drypeak.Soil.Laboratory;
 using Drypeak.Soil.Quantities;
 
 namespace Drypeak.Service.Acceptance;

@@ -15,7 +15,7 @@ namespace Drypeak.Service.Field;
 /// <summary><c>POST /v1/field-density</c>: the field test from contract to contract. The endpoint and the page both call this.</summary>
 internal sealed class FieldDensityJob(MoistureDensityJob laboratory, Limits limits)
 {
-    private readonly FieldDensityRules _rules = new(laboratory, limits);
+    private readonly Lazy<FieldDensityRules> _rules = new(() => new(laboratory, limits));
 
     /// <summary>The kind of its chart.</summary>
     public ChartKind<CompactionChart> Chart { get; } = ChartKind.Compaction("field-density", "The chart of a field test on its laboratory's curve, with the zone in which it is accepted", limits);
@@ -32,7 +32,7 @@ internal sealed class FieldDensityJob(MoistureDensityJob laboratory, Limits limi
     }
 
     /// <summary>Every broken rule; empty where the request can be computed.</summary>
-    public IReadOnlyList<Fault> Check(FieldDensityRequest request) => _rules.Check(request);
+    public IReadOnlyList<Fault> Check(FieldDensityRequest request) => _rules.Value.Check(request);
 
     /// <summary>Computes a request that passed <see cref="Check"/>, with its chart and the chart's addresses.</summary>
     public Charted<FieldDensityAnswer, CompactionChart> ComputeWithChart(FieldDensityRequest request)

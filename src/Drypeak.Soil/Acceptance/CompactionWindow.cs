@@ -1,6 +1,3 @@
-using Drypeak.Soil.Phases;
-using Drypeak.Soil.Quantities;
-
 namespace Drypeak.Soil.Acceptance;
 
 /// <summary>

@@ -26,5 +26,6 @@ internal static class PlanWords
         _ => null,
     };
 
-    private static string Tests(AcceptancePlanAnswer answer) => answer.Count == 1 ? "1 test" : $"{answer.Count} tests";
+    /// <summary>The number of tests.</summary>
+    public static string Tests(AcceptancePlanAnswer answer) => answer.Count == 1 ? "1 test" : $"{answer.Count} tests";
 }
