@@ -202,6 +202,36 @@ public sealed class CompactionFigureTests
         Assert.DoesNotContain(picture.Texts, text => text.Contains("optimum", StringComparison.OrdinalIgnoreCase));
     }
 
+    /// <summary>
+    /// Slopes are told apart best about 45° (Cleveland, McGill and McGill, The shape parameter of a two-variable graph, JASA 83 (1988) 289–300, from
+    /// memory). The ranges fill the plot with what was measured, which at the usual shapes brings a curve's mean slope near to it.
+    /// </summary>
+    [Theory]
+    [InlineData(960, 640)]
+    [InlineData(480, 360)]
+    [InlineData(1920, 1200)]
+    public void The_curve_rises_and_falls_at_slopes_that_can_be_read(int width, int height)
+    {
+        foreach (var bent in (double[])[0.002, 0.0063, 0.02])
+        {
+            var chart = Charts.Ternmarsh with
+            {
+                Specimens = [.. Charts.Ternmarsh.Specimens.Select(specimen => specimen with { DryDensity = 1.826 - (bent * (specimen.WaterContent - 14.1) * (specimen.WaterContent - 14.1)) })],
+                Curve = Charts.Parabola(14.1, 1.826, bent, 9.8, 17.3),
+                Band = null,
+            };
+            var places = Places(SvgPicture.Of(chart, new FigureSize(width, height)).OfClass("curve").Single().Elements().Single());
+            var (length, slopes) = (0.0, 0.0);
+            foreach (var (from, to) in places.Zip(places.Skip(1)))
+            {
+                var step = Math.Sqrt(((to[0] - from[0]) * (to[0] - from[0])) + ((to[1] - from[1]) * (to[1] - from[1])));
+                (length, slopes) = (length + step, slopes + (step * Math.Atan2(Math.Abs(to[1] - from[1]), to[0] - from[0]) * 180 / Math.PI));
+            }
+
+            Assert.InRange(slopes / length, 20, 60);
+        }
+    }
+
     [Fact]
     public void The_band_lies_about_the_curve_as_far_as_its_numbers()
     {

@@ -75,7 +75,8 @@ public sealed partial class SvgWriterTests
         Assert.InRange(SvgWriter.Write(CompactionFigure.Draw(chart, FigureSize.Default)).Length, 1, 20_000);
     }
 
-    private static readonly Dictionary<string, (CompactionChart Chart, FigureOptions Options)> Reviewed = new()
+    /// <summary>The compaction figures of the gallery.</summary>
+    internal static readonly Dictionary<string, (CompactionChart Chart, FigureOptions Options)> Reviewed = new()
     {
         ["full"] = (Charts.Full, new FigureOptions()),
         ["small"] = (Charts.Full, new FigureOptions { Size = new(320, 280) }),

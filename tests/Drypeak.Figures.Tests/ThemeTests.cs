@@ -1,4 +1,6 @@
 using Drypeak.Figures.Drawing;
+using Drypeak.Figures.Layout;
+using Drypeak.Figures.Layout.Plots;
 using Xunit;
 
 namespace Drypeak.Figures.Tests;
@@ -59,6 +61,45 @@ public sealed class ThemeTests
         }
     }
 
+    /// <summary>The same within a zone, a band or a bar: there the ground is the tint.</summary>
+    [Theory]
+    [MemberData(nameof(Names))]
+    public void Every_text_stands_out_from_a_tinted_ground(string theme)
+    {
+        var palette = Of(theme).Palette;
+        (PlotAreaRole Area, ColorRole[] Texts)[] grounds =
+        [
+            (PlotAreaRole.Accepted, [ColorRole.Ink, ColorRole.Quiet, ColorRole.Clay, ColorRole.Moss]),
+            (PlotAreaRole.Band, [ColorRole.Ink, ColorRole.Quiet, ColorRole.Clay]),
+        ];
+        var type = new TypeScale(FigureSize.Default);
+        foreach (var (area, texts) in grounds)
+        {
+            var shape = PlotStyles.Of(area, [new(0, 0), new(1, 0), new(1, 1)], type);
+            var ground = Mixed(palette.Paper, palette[shape.Fill!.Value], shape.Opacity);
+            Assert.All(texts, text => Assert.True(Color.Contrast(palette[text], ground) >= 4.5, $"{text} on {area}: {Color.Contrast(palette[text], ground):0.00}"));
+        }
+    }
+
+    /// <summary>By color, by dash, or by a width that differs by half; a limit and a curve to compare with, too.</summary>
+    [Theory]
+    [MemberData(nameof(Names))]
+    public void No_two_roles_of_a_plots_lines_are_alike_to_any_eye_or_in_grey(string theme)
+    {
+        var (dress, type) = (Of(theme), new TypeScale(FigureSize.Default));
+        var strokes = Enum.GetValues<PlotLineRole>().Select(role => (role, PlotStyles.Of(role, PlotDash.Usual, type, dress))).ToList();
+        foreach (var vision in Enum.GetValues<Vision>())
+        {
+            foreach (var ((one, a), (other, b)) in strokes.SelectMany((one, i) => strokes.Skip(i + 1).Select(other => (one, other))))
+            {
+                Assert.True(
+                    !a.Dash.SequenceEqual(b.Dash) || Math.Max(a.Width, b.Width) / Math.Min(a.Width, b.Width) >= 1.5
+                        || vision.Difference(dress.Palette[a.Color], dress.Palette[b.Color]) >= Apart,
+                    $"{one} and {other} look alike: {vision}.");
+            }
+        }
+    }
+
     [Theory]
     [InlineData("light")]
     [InlineData("dark")]
@@ -105,6 +146,12 @@ public sealed class ThemeTests
     [Theory]
     [MemberData(nameof(Names))]
     public void Colors_of_a_PNG_fit_an_index_of_8_bits(string theme) => Assert.InRange(ColorTable.Of(Of(theme).Palette).Entries.Count, 1, 256);
+
+    private static Color Mixed(Color ground, Color ink, double share)
+    {
+        byte Channel(byte from, byte to) => (byte)Math.Round(from + ((to - from) * share));
+        return new Color(Channel(ground.Red, ink.Red), Channel(ground.Green, ink.Green), Channel(ground.Blue, ink.Blue));
+    }
 
     private static Theme Of(string name) => Theme.All.Single(theme => theme.Name == name);
 
