@@ -17,6 +17,8 @@ FROM mcr.microsoft.com/dotnet/aspnet:10.0
 WORKDIR /app
 COPY --from=build /app .
 # The runtime's diagnostics would open a socket in the temp folder; without them the file system can be read-only.
+# Beyond its own network the service listens only with keys, or with Access__AllowOpen=true where something guards it (deploy/README.md):
+#   docker run --read-only -e Access__AllowOpen=true -p 127.0.0.1:8080:8080 drypeak
 ENV DOTNET_EnableDiagnostics=0 \
     ASPNETCORE_URLS=http://0.0.0.0:8080
 EXPOSE 8080

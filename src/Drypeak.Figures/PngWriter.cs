@@ -23,7 +23,10 @@ public static class PngWriter
     public const int MostPixels = 24_000_000;
 
     /// <summary>Why a picture of that size and scale is not written, as a sentence; null where it is.</summary>
-    public static string? Refusal(FigureSize size, double scale)
+    /// <param name="size">The figure's.</param>
+    /// <param name="scale">Pixels to a px of the figure.</param>
+    /// <param name="mostPixels">The bound, where it is narrower than the writer's own.</param>
+    public static string? Refusal(FigureSize size, double scale, int mostPixels = MostPixels)
     {
         if (scale is not (>= SmallestScale and <= LargestScale))
         {
@@ -31,7 +34,7 @@ public static class PngWriter
         }
 
         var (width, height) = Pixels(size, scale);
-        return (long)width * height <= MostPixels ? null : $"A picture must have no more than {MostPixels} pixels, not {width} by {height}.";
+        return (long)width * height <= Math.Min(mostPixels, MostPixels) ? null : $"A picture must have no more than {Math.Min(mostPixels, MostPixels)} pixels, not {width} by {height}.";
     }
 
     /// <summary>The figure as a PNG file.</summary>

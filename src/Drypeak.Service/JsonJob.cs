@@ -83,7 +83,7 @@ internal static class JsonJob
 
             var faults = new List<Fault>();
             var format = ChartFormat.All.FirstOrDefault(format => format.MediaType == mediaType);
-            var options = format is null ? WithoutParameters(context.Request.Query, faults) : ChartOptions.Read(context.Request.Query, kind.Parameters, format, [], faults);
+            var options = format is null ? WithoutParameters(context.Request.Query, faults) : ChartOptions.Read(context.Request.Query, kind.Parameters, format, limits, [], faults);
             if (faults.Count > 0)
             {
                 return Problems.InvalidQuery(faults);

@@ -36,6 +36,7 @@ app.MapTestMethods();
 app.MapFindingKinds();
 app.MapSpecimenSheet();
 MoistureDensityReport.Map(app);
+FieldDensityReport.Map(app);
 app.MapPages();
 
 if (args is ["openapi", var path])

@@ -11,12 +11,12 @@ internal static class ChartEndpoints
     {
         foreach (var format in ChartFormat.All)
         {
-            var chart = app.MapRead($"/v1/charts/{kind.Job}.{format.Suffix}", (HttpContext context, Limits limits) => Draw(context, limits, kind, format))
+            var chart = app.MapMethods($"/v1/charts/{kind.Job}.{format.Suffix}", EndpointDescription.Reading, (HttpContext context, Limits limits) => Draw(context, limits, kind, format))
                 .WithTags("Charts")
                 .WithName($"{kind.Job}-chart-{format.Suffix}")
                 .WithSummary($"{kind.Shows} as {format.Suffix.ToUpperInvariant()}")
                 .WithDescription("The address comes from an answer's links and holds all that the picture shows. The same address gives the same bytes, with a strong ETag.")
-                .TakesQuery<string>(ChartAddress.Data, "The chart, as an answer's links give it.", ChartAddress.Encode(kind.Example, kind.Json), required: true)
+                .TakesQuery<string>(ChartAddress.Data, "The chart, as an answer's links give it.", () => ChartAddress.Encode(kind.Example, kind.Json), required: true)
                 .Gives<byte[]>(format.MediaType)
                 .Refuses(400);
             ChartOptions.Describe(chart, kind.Parameters, [format]);
@@ -28,7 +28,7 @@ internal static class ChartEndpoints
     {
         var query = context.Request.Query;
         var faults = new List<Fault>();
-        var options = ChartOptions.Read(query, kind.Parameters, format, [ChartAddress.Data], faults);
+        var options = ChartOptions.Read(query, kind.Parameters, format, limits, [ChartAddress.Data], faults);
         if (query[ChartAddress.Data] is not [{ Length: > 0 } data])
         {
             if (query[ChartAddress.Data].Count < 2)

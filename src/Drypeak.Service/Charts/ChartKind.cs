@@ -62,11 +62,11 @@ internal static class ChartKind
     /// <summary>A chart of dry density against water content.</summary>
     public static ChartKind<CompactionChart> Compaction(string job, string shows, Limits limits)
     {
-        var rules = new CompactionChartRules(limits);
+        var rules = new Lazy<CompactionChartRules>(() => new(limits));
         return new ChartKind<CompactionChart>(job, shows, ExampleChart.Compaction)
         {
             Parameters = ChartParameters.OfCompaction,
-            Check = chart => rules.Validate(chart).ToFaults(),
+            Check = chart => rules.Value.Validate(chart).ToFaults(),
             Refusal = CompactionFigure.Refusal,
             Draw = CompactionFigure.Draw,
         };
@@ -75,11 +75,11 @@ internal static class ChartKind
     /// <summary>A chart of any two quantities.</summary>
     public static ChartKind<PlotChart> Plot(string job, string shows, Limits limits)
     {
-        var rules = new PlotChartRules(limits);
+        var rules = new Lazy<PlotChartRules>(() => new(limits));
         return new ChartKind<PlotChart>(job, shows, ExampleChart.Plot)
         {
             Parameters = ChartParameters.OfAny,
-            Check = chart => rules.Validate(chart).ToFaults(),
+            Check = chart => rules.Value.Validate(chart).ToFaults(),
             Refusal = PlotFigure.Refusal,
             Draw = PlotFigure.Draw,
         };

@@ -13,7 +13,7 @@ internal sealed record ChartOptions(FigureOptions Figure, double Scale)
     {
         foreach (var parameter in formats.SelectMany(format => Of(parameters, format)).Distinct())
         {
-            endpoint.WithMetadata(new EndpointDescription.Query(parameter.Name, parameter.Type, parameter.Description, parameter.Example, Required: false));
+            endpoint.WithMetadata(new EndpointDescription.Query(parameter.Name, parameter.Type, parameter.Description, () => parameter.Example, Required: false));
         }
     }
 
@@ -21,9 +21,10 @@ internal sealed record ChartOptions(FigureOptions Figure, double Scale)
     /// <param name="query">The query.</param>
     /// <param name="parameters">What may be asked of the picture.</param>
     /// <param name="format">The format drawn, which adds its own.</param>
+    /// <param name="limits">The bound on pixels.</param>
     /// <param name="further">Names that the endpoint reads itself.</param>
     /// <param name="faults">Receives each unknown, repeated or impossible parameter.</param>
-    public static ChartOptions Read(IQueryCollection query, IReadOnlyList<ChartParameter> parameters, ChartFormat format, ReadOnlySpan<string> further, ICollection<Fault> faults)
+    public static ChartOptions Read(IQueryCollection query, IReadOnlyList<ChartParameter> parameters, ChartFormat format, Limits limits, ReadOnlySpan<string> further, ICollection<Fault> faults)
     {
         var known = Of(parameters, format).ToList();
         foreach (var name in query.Keys)
@@ -57,7 +58,7 @@ internal sealed record ChartOptions(FigureOptions Figure, double Scale)
             }
         }
 
-        if (format == ChartFormat.Png && PngWriter.Refusal(options.Figure.Size, options.Scale) is { } tooLarge)
+        if (format == ChartFormat.Png && PngWriter.Refusal(options.Figure.Size, options.Scale, limits.PicturePixels) is { } tooLarge)
         {
             faults.Add(new Fault("/" + ChartParameters.Scale.Name, "out-of-range", tooLarge));
         }

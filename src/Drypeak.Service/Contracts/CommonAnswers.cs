@@ -14,8 +14,13 @@ namespace Drypeak.Service.Contracts;
 public sealed record FindingContract(
     string Code, string Severity, string Message, [property: JsonPropertyName("pointer")] string Place, string Basis)
 {
-    internal static FindingContract Of(Finding finding) =>
-        new(finding.Code, finding.Severity.ToString().ToLowerInvariant(), finding.Message, finding.Place, finding.Basis);
+    /// <summary>The finding as it is answered; each is counted.</summary>
+    internal static FindingContract Of(Finding finding)
+    {
+        var severity = finding.Severity.ToString().ToLowerInvariant();
+        Meters.Finding(finding.Code, severity);
+        return new(finding.Code, severity, finding.Message, finding.Place, finding.Basis);
+    }
 }
 
 /// <summary>Where the answer came from.</summary>

@@ -10,7 +10,7 @@ namespace Drypeak.Service.Earthwork;
 /// <summary><c>POST /v1/earthwork/test-locations</c>: the programme as JSON, its locations as CSV, or its plan, by Accept.</summary>
 internal sealed class TestLocationsJob(Limits limits)
 {
-    private readonly TestLocationsRules _rules = new(limits);
+    private readonly Lazy<TestLocationsRules> _rules = new(() => new(limits));
 
     /// <summary>The kind of its chart.</summary>
     public ChartKind<PlotChart> Chart { get; } = ChartKind.Plot("test-locations", "The plan of a test programme", limits);
@@ -26,7 +26,7 @@ internal sealed class TestLocationsJob(Limits limits)
     }
 
     /// <summary>Every broken rule; empty where the request can be computed.</summary>
-    public IReadOnlyList<Fault> Check(TestLocationsRequest request) => _rules.Check(request);
+    public IReadOnlyList<Fault> Check(TestLocationsRequest request) => _rules.Value.Check(request);
 
     /// <summary>Computes a request that passed <see cref="Check"/>.</summary>
     public Charted<TestLocationsAnswer, PlotChart> Compute(TestLocationsRequest request)

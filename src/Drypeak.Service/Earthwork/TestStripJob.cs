@@ -14,7 +14,7 @@ internal sealed class TestStripJob(Limits limits)
 {
     private const int CurvePoints = 61;
 
-    private readonly TestStripRules _rules = new(limits);
+    private readonly Lazy<TestStripRules> _rules = new(() => new(limits));
 
     /// <summary>The kind of its chart.</summary>
     public ChartKind<PlotChart> Chart { get; } = ChartKind.Plot("test-strip", "Dry density against passes on a trial strip", limits);
@@ -30,7 +30,7 @@ internal sealed class TestStripJob(Limits limits)
     }
 
     /// <summary>Every broken rule; empty where the request can be computed.</summary>
-    public IReadOnlyList<Fault> Check(TestStripRequest request) => _rules.Check(request);
+    public IReadOnlyList<Fault> Check(TestStripRequest request) => _rules.Value.Check(request);
 
     /// <summary>Computes a request that passed <see cref="Check"/>.</summary>
     public Charted<TestStripAnswer, PlotChart> Compute(TestStripRequest request)
@@ -46,8 +46,8 @@ internal sealed class TestStripJob(Limits limits)
             Reference = request.Reference,
             Identification = request.Identification,
             Units = units.ToContract(),
-            Stages = [.. strip.Stages.Select(stage => ToAnswer(stage, strip.Curve, units))],
-            Curve = strip is { Curve: { } curve, RootMeanSquareError: { } error } ? ToAnswer(curve, error, strip.Stages, units) : null,
+            Stages = [.. strip.Stages.Select(stage => ToAnswer(stage, strip.Growing.Contains(stage) ? strip.Curve : null, units))],
+            Curve = strip is { Curve: { } curve, RootMeanSquareError: { } error } ? ToAnswer(curve, error, strip.Growing, units) : null,
             Passes = strip.PassesNeeded,
             Target = strip.Target is { } target
                 ? new StripTargetAnswer(

@@ -3,6 +3,7 @@ using Drypeak.Service.Charts;
 using Drypeak.Service.Contracts;
 using Drypeak.Service.Hosting;
 using Drypeak.Service.Laboratory;
+using Drypeak.Service.Reports;
 using Drypeak.Soil.Acceptance;
 using Drypeak.Soil.FieldDensity;
 using Drypeak.Soil.FieldDensity.Review;
@@ -14,7 +15,7 @@ namespace Drypeak.Service.Field;
 /// <summary><c>POST /v1/field-density</c>: the field test from contract to contract. The endpoint and the page both call this.</summary>
 internal sealed class FieldDensityJob(MoistureDensityJob laboratory, Limits limits)
 {
-    private readonly FieldDensityRules _rules = new(laboratory, limits);
+    private readonly Lazy<FieldDensityRules> _rules = new(() => new(laboratory, limits));
 
     /// <summary>The kind of its chart.</summary>
     public ChartKind<CompactionChart> Chart { get; } = ChartKind.Compaction("field-density", "The chart of a field test on its laboratory's curve, with the zone in which it is accepted", limits);
@@ -31,19 +32,20 @@ internal sealed class FieldDensityJob(MoistureDensityJob laboratory, Limits limi
     }
 
     /// <summary>Every broken rule; empty where the request can be computed.</summary>
-    public IReadOnlyList<Fault> Check(FieldDensityRequest request) => _rules.Check(request);
+    public IReadOnlyList<Fault> Check(FieldDensityRequest request) => _rules.Value.Check(request);
 
     /// <summary>Computes a request that passed <see cref="Check"/>, with its chart and the chart's addresses.</summary>
     public Charted<FieldDensityAnswer, CompactionChart> ComputeWithChart(FieldDensityRequest request)
     {
         var (answer, chart) = Answer(request);
+        var report = ReportAddress.Of(FieldDensityReport.Job, request, limits);
         if (chart is null)
         {
-            return new(answer, null);
+            return new(answer with { Links = new LinksContract { Report = report } }, null);
         }
 
         var links = Chart.LinksOf(chart, limits, out var whyNot);
-        return new(answer with { Links = links, Findings = whyNot is null ? answer.Findings : [.. answer.Findings, FindingContract.Of(whyNot)] }, chart);
+        return new(answer with { Links = links with { Report = report }, Findings = whyNot is null ? answer.Findings : [.. answer.Findings, FindingContract.Of(whyNot)] }, chart);
     }
 
     /// <summary>Computes a request that passed <see cref="Check"/>, where only its numbers are wanted.</summary>

@@ -16,7 +16,7 @@ internal sealed class OnePointJob(MoistureDensityJob laboratory, Limits limits)
 {
     private const string PointPlace = "/point";
 
-    private readonly OnePointRules _rules = new(limits);
+    private readonly Lazy<OnePointRules> _rules = new(() => new(limits));
 
     /// <summary>The kind of its chart.</summary>
     public ChartKind<PlotChart> Chart { get; } = ChartKind.Plot("one-point", "A family of curves with the point and the curve that it chose", limits);
@@ -34,7 +34,8 @@ internal sealed class OnePointJob(MoistureDensityJob laboratory, Limits limits)
     /// <summary>Every broken rule; empty where the request can be computed.</summary>
     public IReadOnlyList<Fault> Check(OnePointRequest request)
     {
-        var faults = _rules.Validate(request).ToFaults().ToList();
+        var faults = _rules.Value.Validate(request).ToFaults().ToList();
+        faults.AddRange(Identification.Check(request.Identification, limits));
         for (var i = 0; i < request.Family?.Count; i++)
         {
             if (request.Family[i]?.Test is { } test)
@@ -67,6 +68,7 @@ internal sealed class OnePointJob(MoistureDensityJob laboratory, Limits limits)
         var answer = new OnePointAnswer
         {
             Reference = request.Reference,
+            Identification = request.Identification,
             Units = units.ToContract(),
             Point = new DensityAndWaterContract { DryDensity = point.DryDensity.In(units.Density), WaterContent = point.WaterContent.Percent },
             Optimum = result.Optimum is { } optimum ? new SelectedOptimumAnswer(optimum.WaterContent * 100, new Density(optimum.DryDensity).In(units.Density)) : null,

@@ -13,7 +13,7 @@ namespace Drypeak.Service.Field;
 /// <summary><c>POST /v1/rapid-method</c>: the density ratio of a lift before the oven has spoken.</summary>
 internal sealed class RapidMethodJob(Limits limits)
 {
-    private readonly Rules _rules = new(limits);
+    private readonly Lazy<Rules> _rules = new(() => new(limits));
 
     /// <summary>The kind of its chart.</summary>
     public ChartKind<PlotChart> Chart { get; } = ChartKind.Plot("rapid-method", "The converted wet densities of the rapid method with their peak", limits);
@@ -31,7 +31,8 @@ internal sealed class RapidMethodJob(Limits limits)
     /// <summary>Every broken rule; empty where the request can be computed.</summary>
     public IReadOnlyList<Fault> Check(RapidMethodRequest request)
     {
-        var faults = _rules.Validate(request).ToFaults().ToList();
+        var faults = _rules.Value.Validate(request).ToFaults().ToList();
+        faults.AddRange(Identification.Check(request.Identification, limits));
         if (faults.Count == 0)
         {
             FieldWater(request, faults);
@@ -52,6 +53,7 @@ internal sealed class RapidMethodJob(Limits limits)
         var answer = new RapidMethodAnswer
         {
             Reference = request.Reference,
+            Identification = request.Identification,
             Units = units.ToContract(),
             Specimens = [.. specimens.Select((specimen, i) => new RapidSpecimenAnswer(
                 request.Specimens![i].WaterAdded!.Value, request.Specimens[i].WetDensity!.Value, specimen.Converted.In(units.Density)))],

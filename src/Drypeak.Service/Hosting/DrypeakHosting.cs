@@ -7,27 +7,29 @@ namespace Drypeak.Service.Hosting;
 /// <summary>All that surrounds the jobs: limits, log, refusals, security, health, description. Two calls in Program.cs.</summary>
 public static class DrypeakHosting
 {
-    /// <summary>Kestrel's own bound, above ours, so that a long address is refused by a problem and not by the bare server.</summary>
-    private const int ServersRequestLineBytes = 32 << 10;
-
     /// <summary>Registers what the service stands on. <see cref="Limits"/> can be injected afterwards.</summary>
-    /// <exception cref="System.ComponentModel.DataAnnotations.ValidationException">A limit in the configuration lies outside its range.</exception>
+    /// <exception cref="System.ComponentModel.DataAnnotations.ValidationException">A setting in the configuration is out of its range.</exception>
     public static WebApplicationBuilder AddDrypeakHosting(this WebApplicationBuilder builder)
     {
         var limits = Limits.From(builder.Configuration);
-        builder.Services.AddSingleton(limits);
+        var access = AccessSettings.From(builder.Configuration);
+        builder.Services.AddSingleton(limits).AddSingleton<Capacity>().AddSingleton<Readiness>().AddHostedService<WarmUp>();
         builder.Services.AddSerilog(RequestLog.Configure);
         builder.Services.AddApiDescription();
+        AccessControl.Add(builder.Services, access);
+        Telemetry.Add(builder);
+        if (limits.RequestsPerSecond > 0)
+        {
+            CallerRates.Add(builder.Services, limits);
+        }
+
         builder.Services.Configure<HostOptions>(host => host.ShutdownTimeout = TimeSpan.FromSeconds(limits.ShutdownSeconds));
         builder.Services.Configure<KeyManagementOptions>(keys => keys.XmlRepository = new MemoryKeys());
         builder.Services.Configure<FormOptions>(forms => KeepInMemory(forms, limits));
         builder.WebHost.ConfigureKestrel(server =>
         {
-            server.AddServerHeader = false;
-            server.Limits.MaxRequestLineSize = ServersRequestLineBytes;
-            // Each endpoint has its own bound, and a batch has none.
-            server.Limits.MaxRequestBodySize = null;
-            server.Limits.MaxConcurrentConnections = limits.Connections == 0 ? null : limits.Connections;
+            ServerLimits.Apply(server, limits);
+            server.ConfigureEndpointDefaults(endpoint => access.RefuseOpenAddress(endpoint.EndPoint));
         });
         return builder;
     }
@@ -37,13 +39,26 @@ public static class DrypeakHosting
     /// <param name="notFoundPage">The page for an unknown address, for who accepts <c>text/html</c>; it sets no status of its own.</param>
     public static WebApplication UseDrypeakHosting(this WebApplication app, Func<HttpContext, IResult> notFoundPage)
     {
+        var limits = app.Services.GetRequiredService<Limits>();
+        TrustedProxies.Use(app);
         app.Use(SecurityHeaders.Add);
         RequestLog.Use(app);
+        app.Use(Telemetry.Count);
         app.UseExceptionHandler(Refusals.Exceptions);
-        app.Use(Refusals.LongAddresses(app.Services.GetRequiredService<Limits>().AddressBytes));
+        app.Use(Refusals.LongAddresses(limits.AddressBytes));
+        app.Use(Refusals.LongHeaders(limits.HeaderBytes, limits.HeaderFields));
         app.UseStatusCodePages(Refusals.BareStatus(notFoundPage));
+        AccessControl.Use(app, app.Services.GetRequiredService<AccessSettings>());
+        if (limits.RequestsPerSecond > 0)
+        {
+            app.UseRateLimiter();
+        }
+
         ApiReference.Use(app);
+        app.Use(app.Services.GetRequiredService<Capacity>().PassAsync);
         Health.Map(app);
+        Telemetry.Map(app);
+        SecurityContact.Map(app, SecurityContact.From(app.Configuration));
         return app;
     }
 

@@ -70,9 +70,65 @@ public sealed record Limits
     [Range(1, 1_000)]
     public int IdentificationLabels { get; init; } = 30;
 
-    /// <summary>Connections open at once, or 0 for as many as the system gives. Default 0.</summary>
+    /// <summary>Pixels of a PNG. Default 24,000,000, which takes about 120 MB while it is drawn.</summary>
+    [Range(10_000, 24_000_000)]
+    public int PicturePixels { get; init; } = 24_000_000;
+
+    /// <summary>Requests that are computed at once; beyond them others wait. Default 64.</summary>
+    [Range(1, 100_000)]
+    public int RequestsAtOnce { get; init; } = 64;
+
+    /// <summary>Requests that wait to be computed; beyond them the answer is 503 at once. Default 1,024.</summary>
     [Range(0, 1_000_000)]
-    public int Connections { get; init; }
+    public int RequestsWaiting { get; init; } = 1024;
+
+    /// <summary>Batches that are streamed at once, beside the other requests; as many again wait. Default 256.</summary>
+    [Range(1, 100_000)]
+    public int BatchesAtOnce { get; init; } = 256;
+
+    /// <summary>Bodies over 64 KiB that are received at once: with <see cref="LotBodyBytes"/> they bound the memory that senders can fill. Default 64.</summary>
+    [Range(1, 100_000)]
+    public int LargeBodiesAtOnce { get; init; } = 64;
+
+    /// <summary>Seconds that a request may take to arrive and to wait for its turn. A batch has no bound. Default 30.</summary>
+    [Range(1, 3_600)]
+    public int RequestSeconds { get; init; } = 30;
+
+    /// <summary>Requests a second and caller (key, else address), on average; 0 for no such bound. Default 0.</summary>
+    [Range(0, 1_000_000)]
+    public int RequestsPerSecond { get; init; }
+
+    /// <summary>Requests that a caller may send in one burst, where <see cref="RequestsPerSecond"/> is set. Default 50.</summary>
+    [Range(1, 1_000_000)]
+    public int RequestBurst { get; init; } = 50;
+
+    /// <summary>Bytes a second below which a body, or the reading of an answer, is cut off after <see cref="SlowSeconds"/>. Default 240.</summary>
+    [Range(1, 1 << 30)]
+    public int BytesPerSecond { get; init; } = 240;
+
+    /// <summary>Seconds for which a connection may be slower than <see cref="BytesPerSecond"/>. Default 5.</summary>
+    [Range(2, 300)]
+    public int SlowSeconds { get; init; } = 5;
+
+    /// <summary>Bytes of the header fields of a request. Default 32 KiB.</summary>
+    [Range(1024, 1 << 20)]
+    public int HeaderBytes { get; init; } = 32 << 10;
+
+    /// <summary>Header fields of a request. Default 100.</summary>
+    [Range(10, 10_000)]
+    public int HeaderFields { get; init; } = 100;
+
+    /// <summary>Seconds in which the header fields of a request must have come. Default 15.</summary>
+    [Range(1, 300)]
+    public int HeaderSeconds { get; init; } = 15;
+
+    /// <summary>Seconds that a connection may be idle between two requests. Default 130, above what proxies wait.</summary>
+    [Range(1, 3_600)]
+    public int IdleSeconds { get; init; } = 130;
+
+    /// <summary>Connections open at once, or 0 for as many as the system gives; one more is closed at once. Default 10,000.</summary>
+    [Range(0, 1_000_000)]
+    public int Connections { get; init; } = 10_000;
 
     /// <summary>Seconds that requests already begun are given when the service is told to stop. Default 8.</summary>
     [Range(1, 300)]

@@ -37,6 +37,10 @@ internal static class RequestLog
             context.Set("RequestBytes", http.Request.ContentLength);
             context.Set("ResponseBytes", http.Response.ContentLength);
             context.Set("TraceIdentifier", TraceIdentifier(http));
+            if (http.User.Identity is { IsAuthenticated: true, Name: { } name })
+            {
+                context.Set("Caller", name);
+            }
         };
     });
 

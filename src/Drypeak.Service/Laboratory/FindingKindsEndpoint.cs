@@ -18,7 +18,7 @@ internal static class FindingKindsEndpoint
     ];
 
     public static void MapFindingKinds(this IEndpointRouteBuilder app) =>
-        app.MapRead("/v1/findings", () => Results.Json(Kinds, ServiceJson.Of<IReadOnlyList<FindingKindAnswer>>()))
+        app.MapMethods("/v1/findings", EndpointDescription.Reading, () => Results.Json(Kinds, ServiceJson.Of<IReadOnlyList<FindingKindAnswer>>()))
             .WithTags("Catalogues")
             .WithName("findings")
             .WithSummary("Every kind of finding")

@@ -15,7 +15,7 @@ namespace Drypeak.Service.Laboratory;
 /// <summary>The laboratory test from contract to contract. The endpoint, the page and a batch line all call this.</summary>
 internal sealed class MoistureDensityJob(Limits limits)
 {
-    private readonly MoistureDensityRules _rules = new(limits);
+    private readonly Lazy<MoistureDensityRules> _rules = new(() => new(limits));
 
     private const int LinePoints = 41;
     private const double Coverage = 0.95;
@@ -24,7 +24,7 @@ internal sealed class MoistureDensityJob(Limits limits)
     public ChartKind<CompactionChart> Chart { get; } = ChartKind.Compaction("moisture-density", "The chart of a laboratory test", limits);
 
     /// <summary>Every broken rule; empty where the request can be computed.</summary>
-    public IReadOnlyList<Fault> Check(MoistureDensityRequest request) => _rules.Check(request);
+    public IReadOnlyList<Fault> Check(MoistureDensityRequest request) => _rules.Value.Check(request);
 
     /// <summary>Computes a request that passed <see cref="Check"/>.</summary>
     public Charted<MoistureDensityAnswer, CompactionChart> Compute(MoistureDensityRequest request)
@@ -71,7 +71,13 @@ internal sealed class MoistureDensityJob(Limits limits)
     public static (MoistureDensityTest Test, MoistureDensityResult Result) Analyze(MoistureDensityRequest request)
     {
         var (test, specimens) = Reduce(request);
-        return (test, MoistureDensity.Analyze(test, specimens));
+        var result = MoistureDensity.Analyze(test, specimens);
+        if (result.Curve is { } curve)
+        {
+            Meters.Curve(curve.Chosen.Model.Name(), hasOptimum: result.Optimum is { });
+        }
+
+        return (test, result);
     }
 
     /// <summary>The reduced specimens of a request that passed <see cref="Check"/>, without a curve.</summary>

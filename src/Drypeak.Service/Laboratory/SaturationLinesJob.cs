@@ -13,9 +13,9 @@ internal static class SaturationLinesJob
 {
     public static void MapSaturationLines(this IEndpointRouteBuilder app)
     {
-        var rules = new Rules(app.ServiceProvider.GetRequiredService<Limits>());
+        var rules = new Lazy<Rules>(() => new(app.ServiceProvider.GetRequiredService<Limits>()));
         app.MapJob<SaturationLinesRequest, SaturationLinesAnswer>(
-                "/v1/saturation-lines", request => rules.Validate(request).ToFaults(), Compute, Examples.SaturationLinesRequest)
+                "/v1/saturation-lines", request => rules.Value.Validate(request).ToFaults(), Compute, Examples.SaturationLinesRequest)
             .WithTags("Laboratory")
             .WithName("saturation-lines")
             .WithSummary("Lines of saturation and of air voids")

@@ -13,7 +13,7 @@ internal static class SpecimenSheetEndpoint
     {
         foreach (var format in Formats)
         {
-            app.MapRead(AddressOf(format), (HttpContext context, Limits limits) => Draw(context.Request.Query, limits, format))
+            app.MapMethods(AddressOf(format), EndpointDescription.Reading, (HttpContext context, Limits limits) => Draw(context.Request.Query, limits, format))
                 .WithTags("Laboratory")
                 .WithName($"specimen-sheet-{format.Suffix}")
                 .WithSummary($"A laboratory sheet with blanks as {format.Suffix.ToUpperInvariant()}")

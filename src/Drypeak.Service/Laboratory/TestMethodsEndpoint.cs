@@ -97,13 +97,13 @@ internal static class TestMethodsEndpoint
 
     public static void MapTestMethods(this IEndpointRouteBuilder app)
     {
-        app.MapRead("/v1/test-methods", () => Results.Json(Methods, ServiceJson.Of<IReadOnlyList<TestMethodAnswer>>()))
+        app.MapMethods("/v1/test-methods", EndpointDescription.Reading, () => Results.Json(Methods, ServiceJson.Of<IReadOnlyList<TestMethodAnswer>>()))
             .WithTags("Catalogues")
             .WithName("test-methods")
             .WithSummary("Every test method")
             .WithDescription("The catalogue: mold, rammer, effort, particles, specimens, each value with its source.")
             .Gives<IReadOnlyList<TestMethodAnswer>>("application/json");
-        app.MapRead("/v1/test-methods/{code}", Find)
+        app.MapMethods("/v1/test-methods/{code}", EndpointDescription.Reading, Find)
             .WithTags("Catalogues")
             .WithName("test-method")
             .WithSummary("One test method")

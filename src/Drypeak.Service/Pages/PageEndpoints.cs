@@ -39,7 +39,7 @@ internal static class PageEndpoints
     /// <summary>A page that is the same for all who ask.</summary>
     private static void MapStill<TPage>(IEndpointRouteBuilder app, string address)
         where TPage : IComponent =>
-        app.MapMethods(address, [HttpMethods.Get, HttpMethods.Head], () => new PageResult<TPage>(new Dictionary<string, object?>())).ExcludeFromDescription();
+        app.MapMethods(address, [HttpMethods.Get, HttpMethods.Head], IResult () => new PageResult<TPage>(new Dictionary<string, object?>())).ExcludeFromDescription();
 
     /// <summary>The page for an unknown address; it sets no status of its own.</summary>
     public static IResult NotFound(HttpContext _) => new PageResult<NotFoundPage>(new Dictionary<string, object?>());

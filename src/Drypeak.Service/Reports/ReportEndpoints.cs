@@ -27,7 +27,7 @@ internal static class ReportEndpoints
         where TRequest : class
     {
         var path = $"/v1/reports/{kind.Job}.pdf";
-        ReportOptions.Describe(app.MapRead(path, (HttpContext context, Limits limits) => Get(context, limits, kind))
+        ReportOptions.Describe(app.MapMethods(path, EndpointDescription.Reading, (HttpContext context, Limits limits) => Get(context, limits, kind))
             .WithTags(kind.Tag)
             .WithName($"{kind.Job}-report")
             .WithSummary($"{kind.Shows} by its address")

@@ -90,28 +90,6 @@ public sealed class HttpTests : IAsyncLifetime
         Assert.Equal(expected, string.Join(',', faults));
     }
 
-    /// <summary>The public JSON parsing test suite; its source and licence stand beside the files.</summary>
-    [Fact]
-    public async Task Every_text_of_the_parsing_suite_is_refused_and_bad_JSON_by_400()
-    {
-        var files = Directory.GetFiles(Path.Combine(AppContext.BaseDirectory, "Published", "json-suite", "test_parsing"));
-        Assert.Equal(318, files.Length);
-        var wrong = new List<string>();
-        foreach (var file in files)
-        {
-            using var response = await service.Client.SendAsync(Post(await File.ReadAllBytesAsync(file, Stop), "application/json"), Stop);
-            var status = (int)response.StatusCode;
-            // Two of the files that are no JSON are longer than the bound of this endpoint.
-            var expected = new FileInfo(file).Length > TestService.MaximumBytes ? 413 : 400;
-            if (status != expected || response.Content.Headers.ContentType?.MediaType != Problem.MediaType)
-            {
-                wrong.Add($"{Path.GetFileName(file)}: {status}");
-            }
-        }
-
-        Assert.Empty(wrong);
-    }
-
     [Theory]
     [InlineData("GET", "/nothing", 404)]
     [InlineData("POST", "/nothing", 404)]

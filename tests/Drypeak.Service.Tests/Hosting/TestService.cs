@@ -1,7 +1,9 @@
+using System.Net;
 using Drypeak.Service.Hosting;
 using Microsoft.AspNetCore.Builder;
 using Microsoft.AspNetCore.Hosting;
 using Microsoft.AspNetCore.Http;
+using Microsoft.Extensions.Configuration;
 using Serilog;
 
 namespace Drypeak.Service.Tests.Hosting;
@@ -22,11 +24,17 @@ public sealed class TestService : IAsyncDisposable
 
     public HttpClient Client { get; }
 
+    public int Port => new Uri(app.Urls.Single()).Port;
+
     public IServiceProvider Services => app.Services;
 
-    public static async Task<TestService> StartAsync(Action<WebApplication>? map = null)
+    /// <summary>Starts on a free port of this machine, and waits until it is ready.</summary>
+    /// <param name="map">Further endpoints.</param>
+    /// <param name="settings">Configuration, as <c>Limits:Specimens</c>.</param>
+    public static async Task<TestService> StartAsync(Action<WebApplication>? map = null, params (string Name, string Value)[] settings)
     {
         var builder = WebApplication.CreateBuilder(new WebApplicationOptions { EnvironmentName = "Production" });
+        builder.Configuration.AddInMemoryCollection(settings.Select(setting => KeyValuePair.Create(setting.Name, (string?)setting.Value)));
         builder.AddDrypeakHosting();
         builder.Services.AddSerilog(log => log.MinimumLevel.Fatal());
         builder.WebHost.UseUrls("http://127.0.0.1:0");
@@ -37,7 +45,15 @@ public sealed class TestService : IAsyncDisposable
         app.MapGet("/kept", () => new CachedBytes("kept"u8.ToArray(), "text/plain") { Vary = "Accept" });
         map?.Invoke(app);
         await app.StartAsync();
-        return new TestService(app);
+        var service = new TestService(app);
+        HttpStatusCode ready;
+        do
+        {
+            using var answer = await service.Client.GetAsync("/health/ready");
+            ready = answer.StatusCode;
+        }
+        while (ready != HttpStatusCode.OK);
+        return service;
     }
 
     public Task StopAsync() => app.StopAsync();

@@ -16,7 +16,7 @@ internal static class CsvMetadata
         foreach (var (job, columns) in new[] { (ExchangeJobs.MoistureDensity, LaboratoryColumns.All), (ExchangeJobs.FieldDensity, FieldCsv.Columns) })
         {
             var bytes = System.Text.Encoding.UTF8.GetBytes(Of(job, columns).ToJsonString());
-            app.MapRead(AddressOf(job), () => new CachedBytes(bytes, MediaType) { CacheControl = CachedBytes.Revalidated })
+            app.MapMethods(AddressOf(job), EndpointDescription.Reading, () => new CachedBytes(bytes, MediaType) { CacheControl = CachedBytes.Revalidated })
                 .WithTags("Exchange")
                 .WithName(job + "-csv-metadata")
                 .WithSummary($"The columns of {job} files")

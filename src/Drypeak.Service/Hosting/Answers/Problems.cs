@@ -34,6 +34,15 @@ public static class Problems
     public static Problem AddressTooLong(int maximumBytes) =>
         Problem.Of(ProblemKind.AddressTooLong, string.Create(CultureInfo.InvariantCulture, $"An address may have up to {maximumBytes} bytes. Send the data by POST instead."));
 
+    /// <summary>431, with both bounds.</summary>
+    public static Problem HeadersTooLarge(int maximumBytes, int maximumFields) =>
+        Problem.Of(ProblemKind.HeadersTooLarge, string.Create(CultureInfo.InvariantCulture, $"A request may have up to {maximumFields} header fields with up to {maximumBytes} bytes together. Leave out what the service does not need, such as cookies."));
+
+    /// <summary>429 with Retry-After: this caller asks more often than the configuration allows.</summary>
+    public static Problem TooMany(int retryAfterSeconds) => OfStatus(StatusCodes.Status429TooManyRequests)
+        with
+    { Headers = RetryAfter(retryAfterSeconds) };
+
     /// <summary>415: another media type, another character set, or none.</summary>
     public static Problem UnsupportedMediaType(string expected) =>
         Problem.Of(ProblemKind.UnsupportedMediaType, $"Send the body as {expected}, in UTF-8, and say so in Content-Type.")
@@ -50,11 +59,13 @@ public static class Problems
     public static Problem Unavailable(string detail, int retryAfterSeconds) =>
         Problem.Of(ProblemKind.Unavailable, detail)
             with
-        { Headers = new Dictionary<string, string> { ["Retry-After"] = retryAfterSeconds.ToString(CultureInfo.InvariantCulture) } };
+        { Headers = RetryAfter(retryAfterSeconds) };
 
     /// <summary>The problem for a status that routing or the server has set, with a sentence of general advice.</summary>
     public static Problem OfStatus(int status) => Problem.Of(ProblemKind.OfStatus(status), status switch
     {
+        401 => "Send a key as Authorization: Bearer KEY, or a token of the issuer that the service trusts.",
+        403 => "The key does not open this address. Ask whoever runs the service for one whose scopes do.",
         404 => "Look at the address: the addresses of the service are listed at /openapi/v1.json and explained at /reference.",
         405 => "Use one of the methods listed in Allow.",
         406 => "Ask for application/json in Accept.",
@@ -66,6 +77,8 @@ public static class Problems
         >= 500 => "The fault is ours. Report the trace identifier with the time of the request.",
         _ => "Look at the request line, the header fields and the length of the body.",
     });
+
+    private static Dictionary<string, string> RetryAfter(int seconds) => new() { ["Retry-After"] = seconds.ToString(CultureInfo.InvariantCulture) };
 
     private static Problem WithFaults(ProblemKind kind, IReadOnlyList<Fault> faults)
     {

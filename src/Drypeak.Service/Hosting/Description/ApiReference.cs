@@ -25,9 +25,9 @@ public static class ApiReference
 
     internal static void Use(WebApplication app)
     {
-        app.MapRead(ApiDescription.Address, Document).WithTags("Description").WithName("description")
+        app.MapMethods(ApiDescription.Address, EndpointDescription.Reading, Document).AllowAnonymous().WithTags("Description").WithName("description")
             .Gives<JsonObject>("application/json", """{ "openapi": "3.1.1" }""");
-        app.MapRead(StyleSheetAddress, () => new CachedBytes(StyleSheet, "text/css") { CacheControl = CachedBytes.Revalidated })
+        app.MapMethods(StyleSheetAddress, EndpointDescription.Reading, () => new CachedBytes(StyleSheet, "text/css") { CacheControl = CachedBytes.Revalidated })
             .ExcludeFromDescription();
         app.UseSwaggerUI(page =>
         {

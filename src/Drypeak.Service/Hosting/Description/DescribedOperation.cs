@@ -1,5 +1,7 @@
 using System.Globalization;
 using System.Text.Json.Nodes;
+using Microsoft.AspNetCore.Authorization;
+using Microsoft.AspNetCore.RateLimiting;
 using Microsoft.AspNetCore.WebUtilities;
 using Microsoft.OpenApi;
 using Swashbuckle.AspNetCore.SwaggerGen;
@@ -23,6 +25,11 @@ internal sealed class DescribedOperation : IOperationFilter
             };
         }
 
+        foreach (var status in OfEveryone(metadata))
+        {
+            ContentOfAnswer(operation, status)[Problem.MediaType] = new OpenApiMediaType { Schema = SchemaOf(typeof(Problem)) };
+        }
+
         foreach (var query in metadata.OfType<EndpointDescription.Query>())
         {
             (operation.Parameters ??= []).Add(new OpenApiParameter
@@ -32,9 +39,17 @@ internal sealed class DescribedOperation : IOperationFilter
                 Required = query.Required,
                 Description = query.Description,
                 Schema = SchemaOf(query.Type),
-                Example = query.Type == typeof(string) ? JsonValue.Create(query.Example) : JsonNode.Parse(query.Example),
+                Example = query.Type == typeof(string) ? JsonValue.Create(query.Example()) : JsonNode.Parse(query.Example()),
             });
         }
+    }
+
+    /// <summary>What may be refused before an endpoint is asked: who may not, who asks too often, and everyone while the service is busy.</summary>
+    private static IEnumerable<int> OfEveryone(IList<object> metadata)
+    {
+        int[] access = metadata.OfType<IAllowAnonymous>().Any() ? [] : [401, 403];
+        int[] capacity = metadata.OfType<DisableRateLimitingAttribute>().Any() ? [] : [408, 429, 503];
+        return access.Concat(capacity);
     }
 
     private static JsonNode? ParseExample(EndpointDescription.Body body) => body.Example is null ? null

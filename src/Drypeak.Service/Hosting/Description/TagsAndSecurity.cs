@@ -3,9 +3,11 @@ using Swashbuckle.AspNetCore.SwaggerGen;
 
 namespace Drypeak.Service.Hosting;
 
-/// <summary>What the document says once for all operations: what each group of them is for, and that none needs a key.</summary>
+/// <summary>What the document says once for all operations: what each group of them is for, and how a key is shown where whoever runs the service asks for one.</summary>
 internal sealed class TagsAndSecurity : IDocumentFilter
 {
+    private const string Key = "key";
+
     private static readonly Dictionary<string, string> Descriptions = new()
     {
         ["Laboratory"] = "Compaction tests and what belongs to them.",
@@ -24,6 +26,16 @@ internal sealed class TagsAndSecurity : IDocumentFilter
             tag.Description = Descriptions.GetValueOrDefault(tag.Name ?? "");
         }
 
-        swaggerDoc.Security = [new OpenApiSecurityRequirement()];
+        swaggerDoc.Components ??= new OpenApiComponents();
+        swaggerDoc.Components.SecuritySchemes = new Dictionary<string, IOpenApiSecurityScheme>
+        {
+            [Key] = new OpenApiSecurityScheme
+            {
+                Type = SecuritySchemeType.Http,
+                Scheme = "bearer",
+                Description = "A key, or a token of the issuer that the service trusts. Needed only where whoever runs the service has configured it; else everyone may ask.",
+            },
+        };
+        swaggerDoc.Security = [new OpenApiSecurityRequirement(), new OpenApiSecurityRequirement { [new OpenApiSecuritySchemeReference(Key, swaggerDoc)] = [] }];
     }
 }

@@ -16,7 +16,11 @@ internal static class TestLocationsPage
     private static readonly NumberField Start = new("start-station", "From station", "/area/startStation") { UnitOf = SiteFields.Length };
 
     private static readonly TableField Outline = new("outline", "or corners in order, a row each", "/area/outline",
-        [new ColumnKind("Station", Measure.Ratio, "0"), new ColumnKind("Offset", Measure.Ratio, "1")]) { Row = "Corner", Lines = 5 };
+        [new ColumnKind("Station", Measure.Ratio, "0"), new ColumnKind("Offset", Measure.Ratio, "1")])
+    {
+        Row = "Corner",
+        Lines = 5,
+    };
 
     private static readonly ColumnKind Zone = new("Zone", Measure.Text, "label");
 
@@ -62,7 +66,7 @@ internal static class TestLocationsPage
         View = typeof(TestLocationsView),
         Check = job.Check,
         Compute = FormAnswer.Of<TestLocationsRequest, TestLocationsAnswer, Figures.PlotChart>(job.Compute, job.Chart),
-        Headline = Headline,
+        Headline = answer => Sentence(answer).ToString(),
         MoreFiles =
         [
             new Forms.FormFile("locations.csv", "Locations as CSV", submission => Encoding.UTF8.GetBytes(TestLocationsTable.Text((TestLocationsAnswer)submission.Answer!)), "text/csv; charset=utf-8"),
@@ -70,6 +74,6 @@ internal static class TestLocationsPage
     };
 
     /// <summary>The answer in a few words.</summary>
-    public static string Headline(TestLocationsAnswer answer) =>
-        $"{answer.Count} {(answer.Count == 1 ? "test" : "tests")}: {answer.PerLift} in each of {answer.LiftsTested} {(answer.LiftsTested == 1 ? "lift" : "lifts")}";
+    public static SiteSentence Sentence(TestLocationsAnswer answer) => new(
+        "", answer.Count == 1 ? "1 test:" : $"{answer.Count} tests:", answer.LiftsTested == 1 ? $"{answer.PerLift} in one lift" : $"{answer.PerLift} in each of {answer.LiftsTested} lifts");
 }

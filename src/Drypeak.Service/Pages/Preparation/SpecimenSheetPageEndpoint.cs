@@ -6,8 +6,11 @@ namespace Drypeak.Service.Pages.Preparation;
 /// <summary>The page of the blank sheet. The form is sent by GET, so that a sheet has an address of its own.</summary>
 internal static class SpecimenSheetPageEndpoint
 {
+    /// <summary>Typed here: what generates the endpoint's call does not see pages, which are generated too.</summary>
+    private const string Address = SpecimenSheetPage.Address;
+
     public static void Map(IEndpointRouteBuilder app) =>
-        app.MapMethods(SpecimenSheetPage.Address, [HttpMethods.Get, HttpMethods.Head], (HttpContext context, Limits limits) => Open(context.Request.Query, limits)).ExcludeFromDescription();
+        app.MapMethods(Address, [HttpMethods.Get, HttpMethods.Head], IResult (HttpContext context, Limits limits) => Open(context.Request.Query, limits)).ExcludeFromDescription();
 
     private static PageResult<SpecimenSheetPage> Open(IQueryCollection query, Limits limits)
     {
