@@ -17,7 +17,7 @@ namespace Drypeak.Service.Acceptance;
 internal sealed class LotAcceptanceJob(MoistureDensityJob laboratory, FieldDensityJob field, Limits limits)
 {
     /// <summary>More marks than this never fit an address; larger pictures are to be posted for.</summary>
-    private const int MostLinkedTests = 1_500;
+    private const int MostLinkedTests = 500;
 
     private readonly LotAcceptanceRules _rules = new(laboratory, field, limits);
 

@@ -72,7 +72,7 @@ internal static class LotPage
         Heading = "Lot acceptance",
         Lead = "From the tests of a lot to accepted or not: by which rule, by how much, and what else is to be seen in them.",
         Action = "Decide",
-        WhatComesOut = "One word for the lot, each rule with its value and its limit, the results in order with what signals, their histogram, the window and the map; on paper as one sheet.",
+        WhatComesOut = "One word for the lot, each rule with its value and its limit, the results in order with what signals, their histogram, the window and the map; ready to be printed.",
         HasWorking = false,
         Parts =
         [
