@@ -1,5 +1,3 @@
-using Drypeak.Soil.Quantities;
-
 namespace Drypeak.Figures;
 
 /// <summary>How a chart is to be drawn, apart from what it shows. Immutable, safe on any thread.</summary>

@@ -22,15 +22,15 @@ public static class ReportFigure
         List<IReportBlock> before =
         [
             new HeadBlock(report),
-            new FactsBlock(null, report.Identification, columns: 3),
-            new FactsBlock("Method", report.Method, columns: 3),
-            .. TableBlocks.Of(report.Table),
+            .. FactBlocks.Of("Identification", report.Identification, pages.Width),
+            .. FactBlocks.Of("Method", report.Method, pages.Width),
+            .. TableBlocks.Of(report.Table, pages.Width),
         ];
         List<IReportBlock> after =
         [
-            new FactsBlock("Further results", report.Results, columns: 3),
-            .. FindingBlocks.Of(report.Findings),
-            .. NoteBlocks.Of("To bear in mind", report.Cautions),
+            .. FactBlocks.Of("Further results", report.Results, pages.Width),
+            .. FindingBlocks.Of(report.Findings, pages.Width),
+            .. NoteBlocks.Of("To bear in mind", report.Cautions, pages.Width),
             new SignatureBlock(),
             new AddressBlock(report.Address),
         ];

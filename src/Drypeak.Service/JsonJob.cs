@@ -57,8 +57,9 @@ internal static class JsonJob
     /// <param name="example">A whole request that is accepted.</param>
     /// <param name="kind">The kind of its chart.</param>
     /// <param name="text">A text that may be asked for as well; null: none.</param>
+    /// <param name="bodyBytes">The largest body, where it is not the usual one.</param>
     public static RouteHandlerBuilder MapJob<TRequest, TAnswer, TChart>(
-        this IEndpointRouteBuilder app, string path, Func<TRequest, IReadOnlyList<Fault>> check, Func<TRequest, Charted<TAnswer, TChart>> compute, string example, ChartKind<TChart> kind, TextForm<TAnswer>? text = null)
+        this IEndpointRouteBuilder app, string path, Func<TRequest, IReadOnlyList<Fault>> check, Func<TRequest, Charted<TAnswer, TChart>> compute, string example, ChartKind<TChart> kind, TextForm<TAnswer>? text = null, int? bodyBytes = null)
         where TRequest : class
         where TChart : class
     {
@@ -88,7 +89,7 @@ internal static class JsonJob
                 return Problems.InvalidQuery(faults);
             }
 
-            var request = await RequestReader.ReadAsync(context, ServiceJson.Of<TRequest>(), check, limits.BodyBytes);
+            var request = await RequestReader.ReadAsync(context, ServiceJson.Of<TRequest>(), check, bodyBytes ?? limits.BodyBytes);
             if (!request.Succeeded)
             {
                 return request.Problem;

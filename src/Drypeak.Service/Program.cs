@@ -1,3 +1,4 @@
+using Drypeak.Service.Acceptance;
 using Drypeak.Service.Earthwork;
 using Drypeak.Service.Exchange;
 using Drypeak.Service.Field;
@@ -13,7 +14,8 @@ if (args is [ComputeCommand.Name, .. var arguments])
 
 var builder = WebApplication.CreateBuilder(args).AddDrypeakHosting();
 builder.Services.AddSingleton<MoistureDensityJob>().AddSingleton<ComparisonJob>().AddSingleton<FieldDensityJob>()
-    .AddSingleton<RelativeDensityJob>().AddSingleton<OnePointJob>().AddSingleton<RapidMethodJob>().AddEarthworkJobs().AddExchangeJobs();
+    .AddSingleton<RelativeDensityJob>().AddSingleton<OnePointJob>().AddSingleton<RapidMethodJob>().AddEarthworkJobs().AddExchangeJobs()
+    .AddSingleton<LotAcceptanceJob>().AddSingleton<AcceptancePlanJob>();
 
 var app = builder.Build();
 app.UseDrypeakHosting(PageEndpoints.NotFound);
@@ -26,12 +28,15 @@ FieldDensityJob.Map(app);
 RelativeDensityJob.Map(app);
 OnePointJob.Map(app);
 RapidMethodJob.Map(app);
+LotAcceptanceJob.Map(app);
+AcceptancePlanJob.Map(app);
 app.MapEarthwork();
 app.MapExchange();
 app.MapTestMethods();
 app.MapFindingKinds();
 app.MapSpecimenSheet();
 MoistureDensityReport.Map(app);
+FieldDensityReport.Map(app);
 app.MapPages();
 
 if (args is ["openapi", var path])

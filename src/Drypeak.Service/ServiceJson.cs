@@ -2,6 +2,7 @@ using System.Text.Json;
 using System.Text.Json.Serialization;
 using System.Text.Json.Serialization.Metadata;
 using Drypeak.Figures;
+using Drypeak.Service.Acceptance;
 using Drypeak.Service.Earthwork;
 using Drypeak.Service.Exchange.Ags;
 using Drypeak.Service.Exchange.Batch;
@@ -52,6 +53,10 @@ internal static class ServiceJson
 [JsonSerializable(typeof(OnePointAnswer))]
 [JsonSerializable(typeof(RapidMethodRequest))]
 [JsonSerializable(typeof(RapidMethodAnswer))]
+[JsonSerializable(typeof(LotAcceptanceRequest))]
+[JsonSerializable(typeof(LotAcceptanceAnswer))]
+[JsonSerializable(typeof(AcceptancePlanRequest))]
+[JsonSerializable(typeof(AcceptancePlanAnswer))]
 [JsonSerializable(typeof(AgsAnswer))]
 [JsonSerializable(typeof(BatchSummaryLine))]
 [JsonSerializable(typeof(LaboratoryFileAnswer))]

@@ -37,9 +37,9 @@ internal sealed class SpecimenMarks(CompactionChart chart, Wording wording, Plot
     {
         foreach (var specimen in chart.Specimens.Count <= MostLabeled ? chart.Specimens : [])
         {
-            var candidates = wording.Specimen(specimen)
-                .SelectMany(text => MarkLabels.Around(plot.At(specimen.Point), type.MarkRadius, text, type.Label, ColorRole.Quiet, WidestLabel));
-            space.Place(candidates.Select(candidate => candidate with { Name = "specimen-label" }), Barriers.All);
+            space.PlaceFullest(wording.Specimen(specimen).Select(text => MarkLabels
+                .Around(plot.At(specimen.Point), type.MarkRadius, text, type.Label, ColorRole.Quiet, WidestLabel)
+                .Select(candidate => candidate with { Name = "specimen-label" })));
         }
     }
 

@@ -38,11 +38,15 @@ internal static class QuantitiesJob
             FillNotServed = quantities.FillMissing.In(units.BulkVolume),
             Fleet = request.Fleet is { } fleet ? CyclesOf(fleet, quantities, loads, units) : null,
             Trace = EarthworkJob.TraceOf(request, () => QuantitiesWorking.Of(quantities, request.Fleet?.ToFleet(units), units)),
-            Findings = quantities.Review(i => request.BorrowAreas is null ? "/borrow" : $"/borrowAreas/{i}", units).ToContract(request),
+            Findings = quantities.Review(i => request.BorrowAreas is null ? "/borrow" : $"/borrowAreas/{i}", units).Concat(OfFleet(request.Fleet)).ToContract(request),
             Cautions = EarthworkCautions.OfQuantities.With([request.Fill, request.Borrow, request.Loose, .. request.BorrowAreas ?? []]),
             Provenance = ProvenanceContract.Of(request),
         };
     }
+
+    private static IEnumerable<Finding> OfFleet(FleetContract? fleet) => fleet is { Efficiency: null }
+        ? [EarthworkFindingKinds.EfficiencyNotGiven.At("/fleet/efficiency", "Without an efficiency loader and trucks are taken to work all of the hour. Give it: 50 minutes in the hour is 0.83.")]
+        : [];
 
     private static FillWaterAnswer WaterOf(EarthQuantities quantities, EarthworkUnits units)
     {

@@ -48,7 +48,7 @@ internal static class SpecimenWaterJob
             Expected = expected is null ? null : new ExpectedAnswer(
                 expected.WaterContent.Percent, expected.MaximumDryDensity?.In(units.Density),
                 expected.MaximumDryDensity is null ? "Expected by the caller" : ExpectedOptimum.EstimateSource),
-            Trace = EarthworkJob.TraceOf(request, () => SpecimenWater.Working(portions, water, units)),
+            Trace = EarthworkJob.TraceOf(request, () => SpecimenWater.Working(portions, LimitOf(request), water, units)),
             Findings = findings.ToContract(request),
             Cautions = EarthworkCautions.OfSpecimens.With((request.Portions ?? []).Append<IWaterContentGiven>(request)),
             Provenance = ProvenanceContract.Of(request),
@@ -81,12 +81,12 @@ internal static class SpecimenWaterJob
         ? SpecimenTargets.Around(optimum.WaterContent, count, WaterContent.FromPercent(request.Expected!.Spacing ?? SpecimenTargets.UsualSpacing))
         : [];
 
-    private static ExpectedOptimum? OptimumOf(SpecimenWaterRequest request) => request.Expected switch
-    {
-        { PlasticLimit: { } limit } => ExpectedOptimum.FromPlasticLimit(WaterContent.FromPercent(limit)),
-        { OptimumWaterContent: { } optimum } => new ExpectedOptimum(WaterContent.FromPercent(optimum), null),
-        _ => null,
-    };
+    private static WaterContent? LimitOf(SpecimenWaterRequest request) => request.Expected?.PlasticLimit is { } limit ? WaterContent.FromPercent(limit) : null;
+
+    private static ExpectedOptimum? OptimumOf(SpecimenWaterRequest request) =>
+        LimitOf(request) is { } limit ? ExpectedOptimum.FromPlasticLimit(limit)
+        : request.Expected?.OptimumWaterContent is { } optimum ? new ExpectedOptimum(WaterContent.FromPercent(optimum), null)
+        : null;
 }
 
 /// <summary>All that a request for the water of specimens must keep.</summary>

@@ -13,7 +13,7 @@ internal static class TestStripChart
     public static PlotChart Of(TestStripRequest request, TestStrip strip, EarthworkUnits units)
     {
         var unit = units.Density;
-        var (first, last) = (strip.Stages[0].Passes, strip.Stages[^1].Passes);
+        var (first, last) = (strip.Growing[0].Passes, strip.Growing[^1].Passes);
         var gain = ReaderText.Of(strip.LeastGain, unit);
         double InUnit(double density) => ChartNumbers.Drawn(new Density(density).In(unit));
         return new PlotChart
@@ -36,7 +36,8 @@ internal static class TestStripChart
                 : [],
             Marks =
             [
-                .. strip.Stages.SelectMany(stage => stage.DryDensities.Select(density => new PlotMark(stage.Passes, InUnit(density.KilogramsPerCubicMeter), MarkRole.Measured))),
+                .. strip.Stages.SelectMany(stage => stage.DryDensities.Select(density => new PlotMark(
+                    stage.Passes, InUnit(density.KilogramsPerCubicMeter), strip.Growing.Contains(stage) ? MarkRole.Measured : MarkRole.SetAside))),
             ],
         };
     }

@@ -53,10 +53,10 @@ public sealed record TestStripAnswer : EarthworkAnswer
     /// <summary>The stages of the strip, by passes.</summary>
     public required IReadOnlyList<StripStageAnswer> Stages { get; init; }
 
-    /// <summary>The growth curve; null with fewer than three numbers of passes, or where density does not grow.</summary>
+    /// <summary>The growth curve; null with fewer than three numbers of passes, or where density does not grow. Readings after a fall of density are left out.</summary>
     public GrowthCurveAnswer? Curve { get; init; }
 
-    /// <summary>Passes after which one more gains less than leastGain; null without a curve, or where they lie beyond the passes tried.</summary>
+    /// <summary>Passes after which one more gains less than leastGain; null without a curve, or where they lie beyond the passes over which density grew.</summary>
     /// <example>8</example>
     public int? Passes { get; init; }
 
@@ -75,8 +75,8 @@ public sealed record TestStripAnswer : EarthworkAnswer
 /// <param name="WaterContent" example="12.6">Water content, %; null where none was given.</param>
 /// <param name="Mean" example="1.8">Mean dry density, in units.density.</param>
 /// <param name="StandardDeviation" example="0.01">Sample standard deviation, in units.density; null for one reading.</param>
-/// <param name="Fitted" example="1.803">Dry density of the growth curve, in units.density; null without one.</param>
-/// <param name="GainOfOneMore" example="0.016">What one pass more gains by the curve, in units.density; null without one.</param>
+/// <param name="Fitted" example="1.803">Dry density of the growth curve, in units.density; null without one, and after density has fallen.</param>
+/// <param name="GainOfOneMore" example="0.016">What one pass more gains by the curve, in units.density; null as fitted is.</param>
 public sealed record StripStageAnswer(
     int Passes, int Count, IReadOnlyList<double> DryDensities, double? WaterContent, double Mean, double? StandardDeviation, double? Fitted, double? GainOfOneMore);
 

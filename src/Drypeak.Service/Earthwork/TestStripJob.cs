@@ -46,8 +46,8 @@ internal sealed class TestStripJob(Limits limits)
             Reference = request.Reference,
             Identification = request.Identification,
             Units = units.ToContract(),
-            Stages = [.. strip.Stages.Select(stage => ToAnswer(stage, strip.Curve, units))],
-            Curve = strip is { Curve: { } curve, RootMeanSquareError: { } error } ? ToAnswer(curve, error, strip.Stages, units) : null,
+            Stages = [.. strip.Stages.Select(stage => ToAnswer(stage, strip.Growing.Contains(stage) ? strip.Curve : null, units))],
+            Curve = strip is { Curve: { } curve, RootMeanSquareError: { } error } ? ToAnswer(curve, error, strip.Growing, units) : null,
             Passes = strip.PassesNeeded,
             Target = strip.Target is { } target
                 ? new StripTargetAnswer(

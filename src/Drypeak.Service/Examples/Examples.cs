@@ -34,6 +34,12 @@ internal static class Examples
     /// <summary>The rapid method on a lift, as JSON.</summary>
     public static string RapidMethodRequest { get; } = Text("rapid-method.json");
 
+    /// <summary>A lot of ten tests with a retest and one set aside, as JSON.</summary>
+    public static string LotAcceptanceRequest { get; } = Text("lot-acceptance.json");
+
+    /// <summary>What six tests a lot risk, as JSON.</summary>
+    public static string AcceptancePlanRequest { get; } = Text("acceptance-plan.json");
+
     /// <summary>Two laboratory tests, a row a specimen, as CSV.</summary>
     public static string LaboratoryCsv { get; } = Text("moisture-density.csv");
 

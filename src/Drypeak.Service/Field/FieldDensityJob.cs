@@ -3,6 +3,7 @@ using Drypeak.Service.Charts;
 using Drypeak.Service.Contracts;
 using Drypeak.Service.Hosting;
 using Drypeak.Service.Laboratory;
+using Drypeak.Service.Reports;
 using Drypeak.Soil.Acceptance;
 using Drypeak.Soil.FieldDensity;
 using Drypeak.Soil.FieldDensity.Review;
@@ -37,13 +38,14 @@ internal sealed class FieldDensityJob(MoistureDensityJob laboratory, Limits limi
     public Charted<FieldDensityAnswer, CompactionChart> ComputeWithChart(FieldDensityRequest request)
     {
         var (answer, chart) = Answer(request);
+        var report = ReportAddress.Of(FieldDensityReport.Job, request, limits);
         if (chart is null)
         {
-            return new(answer, null);
+            return new(answer with { Links = new LinksContract { Report = report } }, null);
         }
 
         var links = Chart.LinksOf(chart, limits, out var whyNot);
-        return new(answer with { Links = links, Findings = whyNot is null ? answer.Findings : [.. answer.Findings, FindingContract.Of(whyNot)] }, chart);
+        return new(answer with { Links = links with { Report = report }, Findings = whyNot is null ? answer.Findings : [.. answer.Findings, FindingContract.Of(whyNot)] }, chart);
     }
 
     /// <summary>Computes a request that passed <see cref="Check"/>, where only its numbers are wanted.</summary>
@@ -51,21 +53,9 @@ internal sealed class FieldDensityJob(MoistureDensityJob laboratory, Limits limi
 
     private static Charted<FieldDensityAnswer, CompactionChart> Answer(FieldDensityRequest request)
     {
-        var test = request.ToTest();
-        CompactionChart? curve = null;
         var ofLaboratory = new List<Finding>();
-        if (request.Laboratory?.Test is { } embedded)
-        {
-            var (laboratoryTest, laboratoryResult) = MoistureDensityJob.Analyze(embedded);
-            test = test.Against(laboratoryTest, laboratoryResult);
-            curve = MoistureDensityChart.Of(embedded, laboratoryTest with { Units = test.Units }, laboratoryResult);
-            ofLaboratory.AddRange(laboratoryResult.Findings.Select(finding => finding with { Place = "/laboratory/test" + finding.Place }));
-            if (test.Reference.MaximumDryDensity is null)
-            {
-                ofLaboratory.Add(FieldFindingKinds.ReferenceWithoutPeak.At("/laboratory/test", "The laboratory test has no optimum, so that there is nothing to hold the field test against. See its own findings."));
-            }
-        }
-
+        var (test, laboratory) = HeldAgainst(request, ofLaboratory);
+        var curve = laboratory is { } known ? MoistureDensityChart.Of(request.Laboratory!.Test!, known.Test with { Units = test.Units }, known.Result) : null;
         var faults = new List<Fault>();
         var result = FieldAnalysis.Analyze(test, faults)
             ?? throw new ArgumentException("The request does not keep the rules: " + faults[0].Message, nameof(request));
@@ -86,7 +76,7 @@ internal sealed class FieldDensityJob(MoistureDensityJob laboratory, Limits limi
             Requirements =
             [
                 .. result.Judgements.Select((judgement, i) => judgement.ToAnswer(
-                    request.Specification!.Requirements![i], JudgementWords.Of(judgement, result, test.Units), test.Units)),
+                    request.Specification!.Requirements![i], JudgementWords.Of(judgement, judged, test.Units), test.Units)),
             ],
             Outcome = result.Outcome?.ToString().ToLowerInvariant(),
             Trace = request.Trace is true ? [.. result.Working.Select(TraceStep.Of)] : null,
@@ -96,6 +86,28 @@ internal sealed class FieldDensityJob(MoistureDensityJob laboratory, Limits limi
             Provenance = ProvenanceContract.Of(request),
         };
         return new(answer, FieldDensityChart.Of(request, test, result, curve));
+    }
+
+    /// <summary>The test of a request that passed <see cref="Check"/>, held against its laboratory: values, or a whole test that is computed here.</summary>
+    /// <param name="request">The request.</param>
+    /// <param name="findings">Receives what a reviewer says of the laboratory test.</param>
+    public static (FieldTest Test, (MoistureDensityTest Test, MoistureDensityResult Result)? Laboratory) HeldAgainst(FieldDensityRequest request, List<Finding> findings)
+    {
+        var test = request.ToTest();
+        if (request.Laboratory?.Test is not { } embedded)
+        {
+            return (test, null);
+        }
+
+        var laboratory = MoistureDensityJob.Analyze(embedded);
+        test = test.Against(laboratory.Test, laboratory.Result);
+        findings.AddRange(laboratory.Result.Findings.Select(finding => finding with { Place = "/laboratory/test" + finding.Place }));
+        if (test.Reference.MaximumDryDensity is null)
+        {
+            findings.Add(FieldFindingKinds.ReferenceWithoutPeak.At("/laboratory/test", "The laboratory test has no optimum, so that there is nothing to hold the field test against. See its own findings."));
+        }
+
+        return (test, laboratory);
     }
 
     private static SoilInPlaceAnswer ToAnswer(FieldResult result, UnitSet units)

@@ -26,29 +26,37 @@ internal static class FieldDensityMapping
             LargestParticleMillimeters = request.LargestParticle,
             Oversize = request.Oversize?.ToOversize(),
             OnFines = request.Oversize?.Apply == ToField,
-            Reference = new ReferenceValues
-            {
-                MaximumDryDensity = DensityOf(request.Laboratory?.MaximumDryDensity),
-                OptimumWaterContent = WaterOf(request.Laboratory?.OptimumWaterContent),
-                MinimumDryDensity = DensityOf(request.Laboratory?.MinimumDryDensity),
-            },
-            Uncertainty = new FieldUncertainty
-            {
-                DryDensity = DensityOf(request.Uncertainty?.DryDensity),
-                WaterContent = WaterOf(request.Uncertainty?.WaterContent),
-                SpecificGravity = request.Uncertainty?.SpecificGravity,
-                MaximumDryDensity = DensityOf(request.Laboratory?.Uncertainty?.MaximumDryDensity),
-                OptimumWaterContent = WaterOf(request.Laboratory?.Uncertainty?.OptimumWaterContent),
-            },
+            Reference = request.Laboratory.ToReference(units),
+            Uncertainty = request.Uncertainty.ToUncertainty(request.Laboratory, units),
             Requirements = request.Specification.ToRequirements(units),
             Decision = request.Specification.ToDecision(),
             Units = units,
         };
 
         Mass? MassOf(double? mass) => mass is { } given ? Mass.From(given, units.Mass) : null;
-        Density? DensityOf(double? density) => density is { } given ? Density.From(given, units.Density) : null;
-        WaterContent? WaterOf(double? percent) => percent is { } given ? WaterContent.FromPercent(given) : null;
     }
+
+    /// <summary>The values of a laboratory, without the test that it may bring in their place.</summary>
+    public static ReferenceValues ToReference(this LaboratoryContract? laboratory, UnitSet units) => new()
+    {
+        MaximumDryDensity = DensityOf(laboratory?.MaximumDryDensity, units),
+        OptimumWaterContent = WaterOf(laboratory?.OptimumWaterContent),
+        MinimumDryDensity = DensityOf(laboratory?.MinimumDryDensity, units),
+    };
+
+    /// <summary>The standard uncertainties of field and laboratory.</summary>
+    public static FieldUncertainty ToUncertainty(this FieldUncertaintyContract? field, LaboratoryContract? laboratory, UnitSet units) => new()
+    {
+        DryDensity = DensityOf(field?.DryDensity, units),
+        WaterContent = WaterOf(field?.WaterContent),
+        SpecificGravity = field?.SpecificGravity,
+        MaximumDryDensity = DensityOf(laboratory?.Uncertainty?.MaximumDryDensity, units),
+        OptimumWaterContent = WaterOf(laboratory?.Uncertainty?.OptimumWaterContent),
+    };
+
+    private static Density? DensityOf(double? density, UnitSet units) => density is { } given ? Density.From(given, units.Density) : null;
+
+    private static WaterContent? WaterOf(double? percent) => percent is { } given ? WaterContent.FromPercent(given) : null;
 
     /// <summary>The field test, held against a laboratory test: its adopted peak before the fitted one, and corrected for the oversize of its own where the field names none.</summary>
     public static FieldTest Against(this FieldTest field, MoistureDensityTest test, MoistureDensityResult result)

@@ -101,7 +101,7 @@ internal sealed class FieldDensityRules(MoistureDensityJob laboratory, Limits li
         }
     }
 
-    private sealed class LaboratoryRules : AbstractValidator<LaboratoryContract>
+    internal sealed class LaboratoryRules : AbstractValidator<LaboratoryContract>
     {
         public LaboratoryRules()
         {
@@ -132,7 +132,7 @@ internal sealed class FieldDensityRules(MoistureDensityJob laboratory, Limits li
         }
     }
 
-    private sealed class UncertaintyRules : AbstractValidator<FieldUncertaintyContract>
+    internal sealed class UncertaintyRules : AbstractValidator<FieldUncertaintyContract>
     {
         public UncertaintyRules()
         {

@@ -35,6 +35,7 @@ internal sealed class OnePointJob(MoistureDensityJob laboratory, Limits limits)
     public IReadOnlyList<Fault> Check(OnePointRequest request)
     {
         var faults = _rules.Value.Validate(request).ToFaults().ToList();
+        faults.AddRange(Identification.Check(request.Identification, limits));
         for (var i = 0; i < request.Family?.Count; i++)
         {
             if (request.Family[i]?.Test is { } test)
@@ -67,6 +68,7 @@ internal sealed class OnePointJob(MoistureDensityJob laboratory, Limits limits)
         var answer = new OnePointAnswer
         {
             Reference = request.Reference,
+            Identification = request.Identification,
             Units = units.ToContract(),
             Point = new DensityAndWaterContract { DryDensity = point.DryDensity.In(units.Density), WaterContent = point.WaterContent.Percent },
             Optimum = result.Optimum is { } optimum ? new SelectedOptimumAnswer(optimum.WaterContent * 100, new Density(optimum.DryDensity).In(units.Density)) : null,

@@ -11,6 +11,9 @@ public sealed record RapidMethodRequest
     /// <example>Ternmarsh, lift 4, 1+240</example>
     public string? Reference { get; init; }
 
+    /// <summary>Up to 30 labels of the caller's own with texts, carried unchanged into the answer.</summary>
+    public IReadOnlyDictionary<string, string>? Identification { get; init; }
+
     /// <summary>Units of the request and of the answer.</summary>
     public UnitsContract? Units { get; init; }
 
@@ -70,6 +73,10 @@ public sealed record RapidMethodAnswer
     /// <summary>As in the request.</summary>
     /// <example>Ternmarsh, lift 4, 1+240</example>
     public string? Reference { get; init; }
+
+    /// <summary>As in the request; absent where it had none.</summary>
+    [JsonIgnore(Condition = JsonIgnoreCondition.WhenWritingNull)]
+    public IReadOnlyDictionary<string, string>? Identification { get; init; }
 
     /// <summary>All units that were used.</summary>
     public required UnitsContract Units { get; init; }

@@ -32,6 +32,7 @@ internal sealed class RapidMethodJob(Limits limits)
     public IReadOnlyList<Fault> Check(RapidMethodRequest request)
     {
         var faults = _rules.Value.Validate(request).ToFaults().ToList();
+        faults.AddRange(Identification.Check(request.Identification, limits));
         if (faults.Count == 0)
         {
             FieldWater(request, faults);
@@ -52,6 +53,7 @@ internal sealed class RapidMethodJob(Limits limits)
         var answer = new RapidMethodAnswer
         {
             Reference = request.Reference,
+            Identification = request.Identification,
             Units = units.ToContract(),
             Specimens = [.. specimens.Select((specimen, i) => new RapidSpecimenAnswer(
                 request.Specimens![i].WaterAdded!.Value, request.Specimens[i].WetDensity!.Value, specimen.Converted.In(units.Density)))],

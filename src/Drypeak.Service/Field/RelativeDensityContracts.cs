@@ -7,6 +7,13 @@ namespace Drypeak.Service.Field;
 /// <summary>A state of a free-draining soil and its two limits. One measure is given; the others follow.</summary>
 public sealed record RelativeDensityRequest : IWaterGiven, IWaterContentGiven
 {
+    /// <summary>One line that names the test, up to 200 characters.</summary>
+    /// <example>Ternmarsh, drainage blanket, 0+450</example>
+    public string? Reference { get; init; }
+
+    /// <summary>Up to 30 labels of the caller's own with texts, carried unchanged into the answer.</summary>
+    public IReadOnlyDictionary<string, string>? Identification { get; init; }
+
     /// <summary>Units; density, and tinMass where tins are given.</summary>
     public UnitsContract? Units { get; init; }
 
@@ -79,6 +86,14 @@ public sealed record RelativeDensityRequest : IWaterGiven, IWaterContentGiven
 /// <summary>Every measure of the state.</summary>
 public sealed record RelativeDensityAnswer
 {
+    /// <summary>As in the request.</summary>
+    /// <example>Ternmarsh, drainage blanket, 0+450</example>
+    public string? Reference { get; init; }
+
+    /// <summary>As in the request; absent where it had none.</summary>
+    [JsonIgnore(Condition = JsonIgnoreCondition.WhenWritingNull)]
+    public IReadOnlyDictionary<string, string>? Identification { get; init; }
+
     /// <summary>All units that were used.</summary>
     public required UnitsContract Units { get; init; }
 

@@ -26,6 +26,7 @@ internal sealed class RelativeDensityJob(Limits limits)
     public IReadOnlyList<Fault> Check(RelativeDensityRequest request)
     {
         var faults = _rules.Value.Validate(request).ToFaults().ToList();
+        faults.AddRange(Identification.Check(request.Identification, limits));
         if (faults.Count == 0 && StateOf(request, faults) is not { } && faults.Count == 0)
         {
             faults.Add(new Fault("/relativeDensity", "out-of-range", $"At a relative density of {RuleWords.Text(request.RelativeDensity)} % the soil would have no volume. Check it and the limits."));
@@ -41,6 +42,8 @@ internal sealed class RelativeDensityJob(Limits limits)
         var state = StateOf(request, []) ?? throw new ArgumentException("The request does not keep the rules.", nameof(request));
         return new RelativeDensityAnswer
         {
+            Reference = request.Reference,
+            Identification = request.Identification,
             Units = request.Units.ToUnitSet().ToContract(),
             DryDensity = state.DryDensity / unit.InKilogramsPerCubicMeter(),
             VoidRatio = state.VoidRatio,

@@ -11,6 +11,7 @@ internal sealed class RelativeDensityRules : AbstractValidator<RelativeDensityRe
 
     public RelativeDensityRules(Limits limits)
     {
+        RuleFor(request => request.Reference).AtMost(limits.NameCharacters);
         RuleFor(request => request.Units!).SetValidator(new UnitsRules()).When(request => request.Units is { });
         Include(new WaterRules());
         Include(new WaterContentRules(limits));

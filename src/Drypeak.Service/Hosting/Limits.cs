@@ -42,6 +42,10 @@ public sealed record Limits
     [Range(1, 1_000_000)]
     public int LotTests { get; init; } = 20_000;
 
+    /// <summary>Whole laboratory tests that the tests of a lot may bring. Default 100.</summary>
+    [Range(1, 100_000)]
+    public int LotLaboratoryTests { get; init; } = 100;
+
     /// <summary>Lines of one kind (saturation, air voids) in a chart. Default 20.</summary>
     [Range(1, 1_000)]
     public int LinesOfAKind { get; init; } = 20;

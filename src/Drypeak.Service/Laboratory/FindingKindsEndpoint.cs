@@ -1,5 +1,6 @@
 using Drypeak.Service.Charts;
 using Drypeak.Service.Hosting;
+using Drypeak.Soil.Acceptance;
 using Drypeak.Soil.Earthwork;
 using Drypeak.Soil.FieldDensity.Review;
 using Drypeak.Soil.Laboratory.Review;
@@ -12,7 +13,7 @@ internal static class FindingKindsEndpoint
 {
     internal static IReadOnlyList<FindingKindAnswer> Kinds { get; } =
     [
-        .. FindingKinds.All.Concat(FieldFindingKinds.All).Concat(ReferenceFindingKinds.All).Concat(EarthworkFindingKinds.All).Append(ChartAddress.NoAddress).Select(kind => new FindingKindAnswer(
+        .. FindingKinds.All.Concat(FieldFindingKinds.All).Concat(ReferenceFindingKinds.All).Concat(EarthworkFindingKinds.All).Concat(LotFindingKinds.All).Append(ChartAddress.NoAddress).Select(kind => new FindingKindAnswer(
             kind.Code, kind.Severity.ToString().ToLowerInvariant(), kind.Meaning, kind.Why, kind.Remedy, kind.Basis)),
     ];
 

@@ -1,5 +1,7 @@
+using Drypeak.Service.Acceptance;
 using Drypeak.Service.Field;
 using Drypeak.Service.Hosting;
+using Drypeak.Service.Pages.Acceptance;
 using Drypeak.Service.Pages.Catalogues;
 using Drypeak.Service.Pages.Earthwork;
 using Drypeak.Service.Pages.Exchange;
@@ -25,6 +27,8 @@ internal static class PageEndpoints
         app.MapForm(RelativeDensityPage.Of(app.ServiceProvider.GetRequiredService<RelativeDensityJob>()));
         app.MapForm(OnePointPage.Of(app.ServiceProvider.GetRequiredService<OnePointJob>(), limits));
         app.MapForm(RapidMethodPage.Of(app.ServiceProvider.GetRequiredService<RapidMethodJob>()));
+        app.MapForm(LotPage.Of(app.ServiceProvider.GetRequiredService<LotAcceptanceJob>()));
+        app.MapForm(PlanPage.Of(app.ServiceProvider.GetRequiredService<AcceptancePlanJob>()));
         EarthworkPages.Map(app);
         ExchangePageEndpoints.Map(app);
         SpecimenSheetPageEndpoint.Map(app);

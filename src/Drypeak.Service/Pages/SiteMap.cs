@@ -7,6 +7,7 @@ internal static class SiteMap
     [
         ("Laboratory", [("/", "Compaction test"), ("/specimen-sheet", "Blank sheet")]),
         ("Field", [("/field", "Field density test"), ("/rapid-method", "Rapid method"), ("/one-point", "One point on a family"), ("/relative-density", "Relative density")]),
+        ("Lots", [("/lot", "Lot acceptance"), ("/plan", "What a plan risks")]),
         ("Earthwork",
         [
             ("/earthwork/specimen-water", "Water for specimens"), ("/earthwork/lift-water", "Water for a lift"), ("/earthwork/quantities", "Quantities and haulage"),

@@ -1,5 +1,3 @@
-using Drypeak.Soil.Quantities;
-
 namespace Drypeak.Soil.Acceptance;
 
 /// <summary>

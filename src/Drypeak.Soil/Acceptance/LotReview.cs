@@ -46,7 +46,7 @@ internal static class LotReview
         if (result.ReplacedBy.Count > 0)
         {
             List<string> replaced = [.. result.ReplacedBy.Keys];
-            yield return LotFindingKinds.TestsReplaced.At("/tests", $"{Labels.Listed(replaced, "test")} {Are(replaced)} replaced by retests, which count. See that the lift was reworked first, or the first test was faulty.");
+            yield return LotFindingKinds.TestsReplaced.At("/tests", $"{Labels.Listed(replaced, "test")} {Are(replaced)} replaced by {(replaced.Count == 1 ? "a retest, which counts" : "retests, which count")}. See that the lift was reworked first, or the first test was faulty.");
         }
     }
 

@@ -107,7 +107,7 @@ public static class EarthworkFindingKinds
 
     /// <summary>No efficiency.</summary>
     public static readonly FindingKind EfficiencyNotGiven = new("efficiency-not-given", Severity.Note,
-        "No efficiency was given: the roller would roll all of the hour.",
+        "No efficiency was given: roller, loader and trucks would work all of the hour.",
         "Turning, waiting and breaks take a part of every hour.",
         "Give it as a fraction: 50 minutes in the hour is 0.83.",
         CommonPractice);
@@ -130,7 +130,7 @@ public static class EarthworkFindingKinds
     public static readonly FindingKind DensityFalls = new("density-falls", Severity.Warning,
         "The density falls with more passes.",
         "The roller loosens or crushes what it has packed, or the lift's water changes.",
-        "Stop before; check the water content and the places; repeat.",
+        "Stop before; check the water content and the places; repeat. What was read after the fall is left out of the curve.",
         "A fall of the mean over two standard errors and over the gain that counts: " + CommonPractice);
 
     /// <summary>No growth at all.</summary>

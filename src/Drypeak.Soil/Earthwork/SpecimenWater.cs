@@ -47,9 +47,18 @@ public static class SpecimenWater
     }
 
     /// <summary>The working of every portion, in the caller's units.</summary>
-    public static IReadOnlyList<WorkingStep> Working(IReadOnlyList<Portion> portions, Density water, EarthworkUnits units)
+    /// <param name="portions">In the order of the request.</param>
+    /// <param name="plasticLimit">That the optimum was estimated from; null where it was not.</param>
+    /// <param name="water">Density of water.</param>
+    /// <param name="units">The caller's units.</param>
+    public static IReadOnlyList<WorkingStep> Working(IReadOnlyList<Portion> portions, WaterContent? plasticLimit, Density water, EarthworkUnits units)
     {
         var sheet = new EarthworkSheet(units);
+        if (plasticLimit is { } limit)
+        {
+            sheet.Step(EarthworkFormulas.OptimumOfPlasticLimit, "estimated optimum water content", $"0.92*{EarthworkSheet.Text(limit)}", ExpectedOptimum.FromPlasticLimit(limit).WaterContent.Percent, "%");
+        }
+
         foreach (var portion in portions)
         {
             var of = $" of portion {portion.Label}";

@@ -35,12 +35,14 @@ public sealed record TestStrip(IReadOnlyList<StripStage> Stages, Density LeastGa
 
     private const double Arithmetic = 1e-9;
 
-    /// <summary>The growth curve; null with fewer than three numbers of passes, or where density does not grow.</summary>
-    public GrowthCurve? Curve { get; } = Stages.Count < LeastStages ? null : GrowthCurve.Fit(
-        [.. Stages.SelectMany(stage => stage.DryDensities.Select(density => ((double)stage.Passes, density.KilogramsPerCubicMeter)))]);
+    /// <summary>The stages up to the first fall of density: what comes after is no growth, and is neither fitted nor counted to the target.</summary>
+    public IReadOnlyList<StripStage> Growing { get; } = GrowingOf(Stages, LeastGain);
 
-    /// <summary>Passes after which one more gains less than <see cref="LeastGain"/>; null without a curve, or beyond the passes that were tried.</summary>
-    public int? PassesNeeded => Curve?.PassesUntilGainBelow(LeastGain.KilogramsPerCubicMeter) is { } passes && passes <= Stages[^1].Passes ? (int)passes : null;
+    /// <summary>The growth curve over <see cref="Growing"/>; null with fewer than three numbers of passes, or where density does not grow.</summary>
+    public GrowthCurve? Curve { get; } = CurveOf(GrowingOf(Stages, LeastGain));
+
+    /// <summary>Passes after which one more gains less than <see cref="LeastGain"/>; null without a curve, or beyond the passes over which density grew.</summary>
+    public int? PassesNeeded => Curve?.PassesUntilGainBelow(LeastGain.KilogramsPerCubicMeter) is { } passes && passes <= Growing[^1].Passes ? (int)passes : null;
 
     /// <summary>The strip's target density; null where the passes needed are not known.</summary>
     public StripTarget? Target
@@ -52,14 +54,14 @@ public sealed record TestStrip(IReadOnlyList<StripStage> Stages, Density LeastGa
                 return null;
             }
 
-            double[] reached = [.. Stages.Where(stage => stage.Passes >= needed).SelectMany(stage => stage.DryDensities).Select(density => density.KilogramsPerCubicMeter)];
+            double[] reached = [.. Growing.Where(stage => stage.Passes >= needed).SelectMany(stage => stage.DryDensities).Select(density => density.KilogramsPerCubicMeter)];
             return new StripTarget(new Density(reached.Average()), reached.Length, Spread.Of(reached) is { } s ? new Density(s) : null);
         }
     }
 
     /// <summary>Root mean square distance of the readings from the curve, kg/m³.</summary>
     public double? RootMeanSquareError => Curve is { } curve
-        ? Math.Sqrt(Stages.SelectMany(stage => stage.DryDensities.Select(density => density.KilogramsPerCubicMeter - curve.At(stage.Passes))).Average(off => off * off))
+        ? Math.Sqrt(Growing.SelectMany(stage => stage.DryDensities.Select(density => density.KilogramsPerCubicMeter - curve.At(stage.Passes))).Average(off => off * off))
         : null;
 
     /// <summary>What a careful reviewer says.</summary>
@@ -84,21 +86,21 @@ public sealed record TestStrip(IReadOnlyList<StripStage> Stages, Density LeastGa
                 $"After {stage.Passes} passes there {(stage.DryDensities.Count == 1 ? "is 1 reading" : $"are {stage.DryDensities.Count} readings")}; {LeastReadings} or more make a mean that can be trusted. Test at more places of the strip.");
         }
 
-        foreach (var (before, after) in Stages.Zip(Stages.Skip(1)).Where(pair => Falls(pair.First, pair.Second)))
+        foreach (var (before, after) in Stages.Zip(Stages.Skip(1)).Where(pair => Falls(pair.First, pair.Second, LeastGain)))
         {
             yield return EarthworkFindingKinds.DensityFalls.At(placeOf(after.Passes),
-                $"From {before.Passes} to {after.Passes} passes the mean falls from {ReaderText.Of(before.Mean, units.Density)} to {ReaderText.Of(after.Mean, units.Density)}. The roller loosens what it has packed, the lift is too wet or drying, or the places differ: stop there, check the water content, and repeat.");
+                $"From {before.Passes} to {after.Passes} passes the mean falls from {ReaderText.Of(before.Mean, units.Density)} to {ReaderText.Of(after.Mean, units.Density)}. The roller loosens what it has packed, the lift is too wet or drying, or the places differ: what was read from there on is left out of the curve. Stop before, check the water content, and repeat.");
         }
 
         if (Stages.Count >= LeastStages && Curve is null)
         {
             yield return EarthworkFindingKinds.NoGrowth.At("/readings",
-                "The density does not grow with the passes, so that no number of passes can be read from the strip. Check that the readings belong to their passes; make another strip with fewer passes at its start.");
+                $"The density does not grow over {LeastStages} numbers of passes, so that no number can be read from the strip. Check that the readings belong to their passes; make another strip, and test it at fewer passes too.");
         }
         else if (Curve is { } curve && PassesNeeded is null)
         {
             yield return EarthworkFindingKinds.StillGaining.At("/readings",
-                $"After {Stages[^1].Passes} passes one more would still gain {ReaderText.Of(new Density(curve.GainAfter(Stages[^1].Passes)), units.Density)}, not less than {ReaderText.Of(LeastGain, units.Density)}. Roll on, and test again.");
+                $"After {Growing[^1].Passes} passes one more would still gain {ReaderText.Of(new Density(curve.GainAfter(Growing[^1].Passes)), units.Density)}, not less than {ReaderText.Of(LeastGain, units.Density)}. Roll on, and test again.");
         }
     }
 
@@ -128,12 +130,18 @@ public sealed record TestStrip(IReadOnlyList<StripStage> Stages, Density LeastGa
         return sheet.Steps;
     }
 
+    private static StripStage[] GrowingOf(IReadOnlyList<StripStage> stages, Density leastGain) =>
+        [.. stages.TakeWhile((stage, i) => i == 0 || !Falls(stages[i - 1], stage, leastGain))];
+
+    private static GrowthCurve? CurveOf(StripStage[] growing) => growing.Length < LeastStages ? null : GrowthCurve.Fit(
+        [.. growing.SelectMany(stage => stage.DryDensities.Select(density => ((double)stage.Passes, density.KilogramsPerCubicMeter)))]);
+
     /// <summary>Lower by more than what the spread of both means explains (two standard errors), and by more than the gain that counts.</summary>
-    private bool Falls(StripStage before, StripStage after)
+    private static bool Falls(StripStage before, StripStage after, Density leastGain)
     {
         double Variance(StripStage stage) => stage.StandardDeviation is { KilogramsPerCubicMeter: var s } ? s * s / stage.DryDensities.Count : 0;
         var fall = before.Mean.KilogramsPerCubicMeter - after.Mean.KilogramsPerCubicMeter;
-        return fall > Math.Max(LeastGain.KilogramsPerCubicMeter, 2 * Math.Sqrt(Variance(before) + Variance(after))) * (1 + Arithmetic);
+        return fall > Math.Max(leastGain.KilogramsPerCubicMeter, 2 * Math.Sqrt(Variance(before) + Variance(after))) * (1 + Arithmetic);
     }
 }
 

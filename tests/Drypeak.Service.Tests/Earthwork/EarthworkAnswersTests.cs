@@ -75,7 +75,8 @@ public sealed class EarthworkAnswersTests(RunningService service)
     [InlineData("""{"plasticLimit":20}""", new[] { 14.4, 16.4, 18.4, 20.4, 22.4 })]
     public async Task Targets_are_proposed_around_an_expected_optimum_and_said_to_be(string expected, double[] targets)
     {
-        var answer = await service.AnswerAsync(EarthworkJobs.SpecimenWater, $$"""{"wetMass":2200,"waterContent":5,"expected":{{expected}}}""");
+        var answer = await service.AnswerAsync(EarthworkJobs.SpecimenWater, $$"""{"wetMass":2200,"waterContent":5,"trace":true,"expected":{{expected}}}""");
+        Assert.All(answer.GetProperty("trace").EnumerateArray(), step => Assert.Equal(step.Number("/value"), Arithmetic.Value(step.Text("/substitution")!), 1e-9 * Math.Max(1, Math.Abs(step.Number("/value")))));
         Assert.Equal(targets, answer.Numbers("/portions", "target"), Close);
         var fromLimit = expected.Contains("plastic", StringComparison.Ordinal);
         Assert.Equal(fromLimit, answer.Finding("targets-proposed").Text("/basis")!.Contains("Gurtug", StringComparison.Ordinal));
@@ -224,6 +225,7 @@ public sealed class EarthworkAnswersTests(RunningService service)
     [InlineData(EarthworkJobs.Quantities, "fill-looser-than-borrow", "/borrow/dryDensity", "1.81", "1.8")]
     [InlineData(EarthworkJobs.Quantities, "loose-denser-than-bank", "/loose", """{"dryDensity":1.51}""", """{"dryDensity":1.5}""")]
     [InlineData(EarthworkJobs.Quantities, "loose-density-missing", "/loose", Body.Absent, """{"swell":0}""")]
+    [InlineData(EarthworkJobs.Quantities, "efficiency-not-given", "/fleet/efficiency", Body.Absent, "0.8")]
     [InlineData(EarthworkJobs.TestLocations, "area-small", "/area", """{"length":3,"width":3}""", """{"length":5,"width":2}""")]
     [InlineData(EarthworkJobs.TestLocations, "lift-thickness-unusual", "/liftThickness", "2", "0.3")]
     [InlineData(EarthworkJobs.RollerOutput, "roller-fast", "/speed", "12.1", "12")]

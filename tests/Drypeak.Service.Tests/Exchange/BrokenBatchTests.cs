@@ -121,9 +121,8 @@ public sealed class BrokenBatchTests(RunningService another) : IDisposable
         {
             if (JsonElement.Parse(line) is var entry && entry.TryGetProperty("address", out var address))
             {
-                // What it logs from here on is thrown away, or it would wait for a reader.
-                _process.OutputDataReceived += static (_, _) => { };
-                _process.BeginOutputReadLine();
+                // What it logs from here on is read and thrown away, or it would wait for a reader.
+                _ = _process.StandardOutput.BaseStream.CopyToAsync(Stream.Null, CancellationToken.None);
                 return new Uri(address.GetString()!);
             }
         }

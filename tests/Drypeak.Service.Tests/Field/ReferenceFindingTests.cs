@@ -40,6 +40,21 @@ public sealed class ReferenceFindingTests(RunningService service)
     public void Every_kind_has_its_twins() =>
         Assert.Equal(ReferenceFindingKinds.All.Select(kind => kind.Code).Order(StringComparer.Ordinal), Twins.Select(row => row.Data.Item1).Order(StringComparer.Ordinal));
 
+    [Theory]
+    [InlineData(FieldJobs.OnePoint, 0)]
+    [InlineData(FieldJobs.RelativeDensity, 7)]
+    [InlineData(FieldJobs.RapidMethod, 8)]
+    public async Task The_caller_s_labels_come_back_and_are_bounded(string address, int twin)
+    {
+        var body = Twins.ElementAt(twin).Data.Item4[1..];
+        var answer = await service.AnswerAsync(address, """{"reference":"Ternmarsh","identification":{"layer/2":"clay"},""" + body);
+        Assert.Equal("Ternmarsh", answer.Text("/reference"));
+        Assert.Equal("clay", answer.At("/identification").GetProperty("layer/2").GetString());
+        Assert.False((await service.AnswerAsync(address, "{" + body)).Has("identification"));
+        var refusal = await service.RefusalAsync(address, $$"""{"identification":{"layer/2":"{{new string('x', 5000)}}"},""" + body);
+        Assert.Contains(refusal.Faults, fault => fault.Contains("/identification/layer~12", StringComparison.Ordinal));
+    }
+
     [Fact]
     public async Task A_family_may_be_given_as_optima_as_points_or_as_whole_tests()
     {

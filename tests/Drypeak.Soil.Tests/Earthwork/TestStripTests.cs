@@ -72,6 +72,16 @@ public sealed class TestStripTests
     }
 
     [Fact]
+    public void Readings_after_a_fall_are_left_out_of_curve_and_target()
+    {
+        StripStage[] growing = [Stage(2, 1700, 1704, 1696), Stage(4, 1790, 1794, 1786), Stage(6, 1822, 1826, 1818), Stage(8, 1832, 1836, 1828)];
+        var (before, after) = (new TestStrip(growing, new Density(12)), new TestStrip([.. growing, Stage(10, 1790, 1786, 1794), Stage(12, 1850, 1846, 1854)], new Density(12)));
+        Assert.Equal(before.Curve, after.Curve);
+        Assert.Equal(before.Target, after.Target);
+        Assert.Equal(before.PassesNeeded, after.PassesNeeded);
+    }
+
+    [Fact]
     public void A_strip_that_levels_off_gives_a_careful_reviewer_nothing_to_ask() =>
         Assert.Empty(Review([Stage(2, 1700, 1704, 1696), Stage(4, 1790, 1794, 1786), Stage(6, 1822, 1826, 1818), Stage(8, 1832, 1836, 1828)]));
 

@@ -71,6 +71,48 @@ public sealed class FieldLawTests
         Gen.Select(Gen.Double[0.02, 0.4], Gen.Double[0.02, 0.4]).Sample((gauge, oven) =>
             Assert.Equal(oven, MoistureOffset.Of([new OvenPair(new WaterContent(gauge), new WaterContent(oven))]).Applied(new WaterContent(gauge)).Fraction, 1e-12));
 
+    /// <summary>First order against trials (JCGM 101:2008): readings drawn anew about their means, 20,000 times from a stated seed. A standard deviation of so many is good to 0.5 %.</summary>
+    [Theory]
+    [InlineData(true)]
+    [InlineData(false)]
+    public void The_readings_spread_is_carried_as_trials_carry_it(bool asMassOfWater)
+    {
+        double[] wet = [2010, 2040, 2026], water = asMassOfWater ? [221, 232, 226] : [0.121, 0.128, 0.126];
+        OvenPair[] pairs = [new(new(0.12), new(0.112)), new(new(0.14), new(0.135)), new(new(0.13), new(0.124))];
+        JudgedSoil Judged(double[] densities, double[] waters, OvenPair[] offsets) => FieldAnalysis.Analyze(
+            new FieldTest
+            {
+                Method = new NuclearGauge
+                {
+                    WetDensity = [.. densities.Select(density => new Density(density))],
+                    WaterDensity = asMassOfWater ? [.. waters.Select(density => new Density(density))] : [],
+                    WaterContent = asMassOfWater ? [] : [.. waters.Select(w => new WaterContent(w))],
+                    OvenPairs = offsets,
+                },
+                Water = NoWater,
+                WaterDensity = new Density(998.2),
+                Reference = new ReferenceValues { MaximumDryDensity = new Density(1900), OptimumWaterContent = new WaterContent(0.12) },
+            }, [])!.Judged;
+
+        var judged = Judged(wet, water, pairs);
+        var (ofWet, ofWater, offset) = (ReadingSpread.Of("", true, wet), ReadingSpread.Of("", false, water), MoistureOffset.Of(pairs));
+        var random = new MathNet.Numerics.Random.MersenneTwister(20_240_602);
+        double Drawn(double mean, double u) => MathNet.Numerics.Distributions.Normal.Sample(random, mean, u);
+        var trials = Enumerable.Range(0, 20_000).Select(_ =>
+        {
+            // A pair that gives exactly the drawn offset: K = 1000(o − g)/(100 + g) with g = 10 %.
+            var k = Drawn(offset.K, offset.StandardUncertainty!.Value);
+            return Judged([Drawn(ofWet.Mean, ofWet.StandardUncertainty!.Value)], [Drawn(ofWater.Mean, ofWater.StandardUncertainty!.Value)], [new(new(0.10), new(0.10 + (k * 1.1 / 1000)))]);
+        }).ToList();
+        foreach (var quantity in new[] { AcceptedQuantity.DryDensity, AcceptedQuantity.WaterContent, AcceptedQuantity.WetDensity, AcceptedQuantity.RelativeCompaction, AcceptedQuantity.WaterContentFromOptimum })
+        {
+            var values = trials.Select(trial => trial.ValueOf(quantity)!.Value).ToList();
+            var mean = values.Average();
+            var deviation = Math.Sqrt(values.Sum(value => (value - mean) * (value - mean)) / (values.Count - 1));
+            Assert.Equal(1, judged.StandardUncertaintyOf(quantity, new FieldUncertainty())!.Value / deviation, 0.025);
+        }
+    }
+
     private static SoilInPlace Reduced(double kilograms, double liters, double w) => Reduced(new DriveCylinder(new Volume(liters / 1000), null, null), kilograms, w);
 
     private static SoilInPlace Reduced(FieldMethod method, double kilograms, double w)

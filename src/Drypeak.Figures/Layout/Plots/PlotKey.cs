@@ -1,5 +1,3 @@
-using Drypeak.Figures.Drawing;
-
 namespace Drypeak.Figures.Layout.Plots;
 
 /// <summary>What stands in a plot's key: the outcomes of its marks as words, and what found no room for its name.</summary>

@@ -12,8 +12,8 @@ internal sealed class HeadBlock(Report report) : IReportBlock
         var down = 0.0;
         foreach (var (text, style) in Lines(pages.Width))
         {
+            pages.Text(text, ReportPages.Left, down + style.Baseline, style);
             down += style.LineHeight;
-            pages.Text(text, ReportPages.Left, down - (0.3 * style.Size), style);
         }
     }
 
@@ -25,53 +25,51 @@ internal sealed class HeadBlock(Report report) : IReportBlock
     }
 }
 
-/// <summary>Labels with their texts, in columns, under a section's name where it has one.</summary>
-internal sealed class FactsBlock(string? title, IReadOnlyList<ReportFact> facts, int columns) : IReportBlock
+/// <summary>Labels with their texts, in columns: a block a row, and more than one where a text is long.</summary>
+internal static class FactBlocks
 {
+    private const int Columns = 3;
+    private const int MostLines = 20;
     private const double Gap = 18;
-    private const double Above = 8;
 
-    public double Height(double width) =>
-        facts.Count == 0 ? 0 : Above + (title is null ? 0 : ReportText.Section.LineHeight) + Rows(ColumnWidth(width)).Sum(row => RowHeight(row.Max(fact => fact.Lines.Count)));
-
-    public void Draw(ReportPages pages)
+    /// <summary>Under a section's name.</summary>
+    public static IEnumerable<IReportBlock> Of(string name, IReadOnlyList<ReportFact> facts, double width)
     {
-        if (facts.Count == 0)
-        {
-            return;
-        }
+        var column = (width - ((Columns - 1) * Gap)) / Columns;
+        return facts.Count == 0 ? [] : [new SectionBlock(name), .. facts.Chunk(Columns).SelectMany(row => RowsOf(row, column))];
+    }
 
-        var width = ColumnWidth(pages.Width);
-        pages.Rule(ReportPages.Left, pages.Right, Above / 2);
-        var down = Above;
-        if (title is not null)
+    private static IEnumerable<IReportBlock> RowsOf(ReportFact[] facts, double column)
+    {
+        var lines = Array.ConvertAll(facts, fact => ReportText.Value.Wrapped(fact.Text, column));
+        for (var from = 0; from == 0 || from < lines.Max(of => of.Count); from += MostLines)
         {
-            down += ReportText.Section.LineHeight;
-            pages.Text(title, ReportPages.Left, down - 4, ReportText.Section);
-        }
-
-        foreach (var row in Rows(width))
-        {
-            for (var i = 0; i < row.Length; i++)
-            {
-                var x = ReportPages.Left + (i * (width + Gap));
-                pages.Text(PlainText.Elide(PlainText.Clean(row[i].Label), ReportText.Label.Face, ReportText.Label.Size, width), x, down + 11, ReportText.Label);
-                for (var line = 0; line < row[i].Lines.Count; line++)
-                {
-                    pages.Text(row[i].Lines[line], x, down + 11 + ((line + 1) * (ReportText.Value.LineHeight - 1)), ReportText.Value);
-                }
-            }
-
-            down += RowHeight(row.Max(fact => fact.Lines.Count));
+            yield return new FactsRow(
+                from == 0 ? Array.ConvertAll(facts, fact => PlainText.Elide(PlainText.Clean(fact.Label), ReportText.Label.Face, ReportText.Label.Size, column)) : [],
+                Array.ConvertAll(lines, of => of.Skip(from).Take(MostLines).ToArray()),
+                column);
         }
     }
 
-    private double ColumnWidth(double width) => (width - ((columns - 1) * Gap)) / columns;
+    private sealed class FactsRow(string[] labels, string[][] lines, double column) : IReportBlock
+    {
+        private double Top => labels.Length > 0 ? ReportText.Label.LineHeight : 0;
 
-    private static double RowHeight(int lines) => ReportText.Label.LineHeight + (lines * (ReportText.Value.LineHeight - 1)) + 4;
+        public double Height(double width) => Top + (lines.Max(of => of.Length) * ReportText.Value.LineHeight) + 2;
 
-    private IEnumerable<(string Label, IReadOnlyList<string> Lines)[]> Rows(double width) =>
-        facts.Select(fact => (fact.Label, ReportText.Value.Wrapped(fact.Text, width))).Chunk(columns);
+        public void Draw(ReportPages pages)
+        {
+            for (var i = 0; i < lines.Length; i++)
+            {
+                var x = ReportPages.Left + (i * (column + Gap));
+                pages.Text(labels.ElementAtOrDefault(i) ?? "", x, ReportText.Label.Baseline, ReportText.Label);
+                for (var line = 0; line < lines[i].Length; line++)
+                {
+                    pages.Text(lines[i][line], x, Top + (line * ReportText.Value.LineHeight) + ReportText.Value.Baseline, ReportText.Value);
+                }
+            }
+        }
+    }
 }
 
 /// <summary>The picture, as wide as the page allows.</summary>
@@ -95,7 +93,7 @@ internal sealed class SignatureBlock : IReportBlock
     private static readonly string[] Roles = ["Tested by, date", "Checked by, date", "Approved by, date"];
     private const double Gap = 24;
 
-    public double Height(double width) => 58;
+    public double Height(double width) => 40 + ReportText.Label.LineHeight;
 
     public void Draw(ReportPages pages)
     {
@@ -104,7 +102,7 @@ internal sealed class SignatureBlock : IReportBlock
         {
             var x = ReportPages.Left + (i * (width + Gap));
             pages.Rule(x, x + width, 38, ColorRole.Ink);
-            pages.Text(Roles[i], x, 51, ReportText.Label);
+            pages.Text(Roles[i], x, 40 + ReportText.Label.Baseline, ReportText.Label);
         }
     }
 }
@@ -121,11 +119,11 @@ internal sealed class AddressBlock(string? address) : IReportBlock
         var step = ReportText.Small.LineHeight;
         pages.Text(
             address is null ? "The request is too long for an address: to have this report again, post it again." : "This report again, at the address of the service:",
-            ReportPages.Left, 8 + step - 3, ReportText.Small, link: address);
+            ReportPages.Left, 8 + ReportText.Small.Baseline, ReportText.Small, link: address);
         var lines = Lines(pages.Width);
         for (var i = 0; i < lines.Count; i++)
         {
-            pages.Text(lines[i], ReportPages.Left, 8 + ((i + 2) * step) - 3, ReportText.Small, link: address);
+            pages.Text(lines[i], ReportPages.Left, 8 + ((i + 1) * step) + ReportText.Small.Baseline, ReportText.Small, link: address);
         }
     }
 

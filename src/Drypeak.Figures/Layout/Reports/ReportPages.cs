@@ -143,7 +143,11 @@ internal readonly record struct ReportText(double Size, FontFace Face, ColorRole
 
     public static ReportText Small => new(9.5, EmbeddedFont.Regular, ColorRole.Quiet);
 
-    public double LineHeight => Math.Ceiling(Size * 1.32);
+    /// <summary>From the font's ascent to its descent, so that no two lines share room.</summary>
+    public double LineHeight => Math.Ceiling((Face.Ascent + Face.Descent) * Size);
+
+    /// <summary>From the top of a line to where its letters stand.</summary>
+    public double Baseline => Face.Ascent * Size;
 
     /// <summary>The text in lines no wider than so many px.</summary>
     public IReadOnlyList<string> Wrapped(string text, double width) => PlainText.Wrap(PlainText.Clean(text), Face, Size, width);

@@ -36,6 +36,7 @@ internal static class LiftWaterPage
             new("Water content", [Present, Target]),
             new("Evaporation until it is rolled", [Allowance, Rate, Hours]) { Columns = 3 },
             new("Tanker", [Tanker]),
+            new("Present water content in other ways", [WaterFields.Tins("/tins"), .. WaterFields.OtherWays("")]) { UnderMore = true },
             new("Standard uncertainties", [PresentUncertainty, TargetUncertainty, DensityUncertainty]) { UnderMore = true, Columns = 3 },
             new("Water temperature", [SiteFields.WaterTemperature]) { UnderMore = true },
         ],
@@ -50,15 +51,15 @@ internal static class LiftWaterPage
         View = typeof(LiftWaterView),
         Check = new LiftWaterRules(limits).Check,
         Compute = FormAnswer.Of<LiftWaterRequest, LiftWaterAnswer>(LiftWaterJob.Compute),
-        Headline = Headline,
+        Headline = answer => Sentence(answer).ToString(),
     };
 
     /// <summary>The answer in a few words.</summary>
-    public static string Headline(LiftWaterAnswer answer) => answer.Total.Mass switch
+    public static SiteSentence Sentence(LiftWaterAnswer answer) => answer.Total.Mass switch
     {
-        < 0 => $"{SiteNumbers.Text(-answer.Total.Liquid, answer.Units.Liquid!)} of water to lose",
-        0 => "No water to add",
-        _ => $"{SiteNumbers.Text(answer.Total.Liquid, answer.Units.Liquid!)} of water to add",
+        < 0 => new SiteSentence("", SiteNumbers.Text(-answer.Total.Liquid, answer.Units.Liquid!), "of water to lose"),
+        0 => new SiteSentence("", "No water", "to add"),
+        _ => new SiteSentence("", SiteNumbers.Text(answer.Total.Liquid, answer.Units.Liquid!), "of water to add"),
     };
 
     /// <summary>What a form rests on, for the printed sheet.</summary>

@@ -15,7 +15,8 @@ internal static class QuantitiesPage
     private static readonly NumberField BankWet = new("bank-wet", "or wet density", "/borrow/wetDensity") { UnitOf = FormFields.DensityUnit };
     private static readonly NumberField BankWater = new("bank-water", "Water content", "/borrow/waterContent") { Unit = "%" };
 
-    private static readonly TableField Areas = new("borrow-areas", "Borrow areas, a row each", "/borrowAreas",
+    /// <summary>The borrow areas as they are pasted; the printed sheet repeats them.</summary>
+    public static readonly TableField Areas = new("borrow-areas", "Borrow areas, a row each", "/borrowAreas",
     [
         new ColumnKind("Borrow area", Measure.Text, "label"), ColumnKind.WetDensity, ColumnKind.DryDensity, ColumnKind.WaterContent,
         new ColumnKind("Capacity", Measure.Ratio, "capacity"), new ColumnKind("Haul distance", Measure.Ratio, "haulDistance"), new ColumnKind("Share", Measure.Percent, "share"),
@@ -71,11 +72,11 @@ internal static class QuantitiesPage
         View = typeof(QuantitiesView),
         Check = new QuantitiesRules(limits).Check,
         Compute = FormAnswer.Of<QuantitiesRequest, QuantitiesAnswer>(QuantitiesJob.Compute),
-        Headline = Headline,
+        Headline = answer => Sentence(answer).ToString(),
     };
 
     /// <summary>The answer in a few words.</summary>
-    public static string Headline(QuantitiesAnswer answer) => $"{SiteNumbers.Text(answer.Borrow.Volume, answer.Units.BulkVolume!)} in the bank";
+    public static SiteSentence Sentence(QuantitiesAnswer answer) => new("", SiteNumbers.Text(answer.Borrow.Volume, answer.Units.BulkVolume!), "in the bank");
 
     /// <summary>What a form rests on, for the printed sheet.</summary>
     public static IEnumerable<(string Name, string Text)> Given(FormTexts texts) => SiteSheet.Given(texts,

@@ -35,11 +35,11 @@ internal static class RollerOutputPage
         View = typeof(RollerOutputView),
         Check = new RollerOutputRules(limits).Check,
         Compute = FormAnswer.Of<RollerOutputRequest, RollerOutputAnswer>(RollerOutputJob.Compute),
-        Headline = Headline,
+        Headline = answer => Sentence(answer).ToString(),
     };
 
     /// <summary>The answer in a few words.</summary>
-    public static string Headline(RollerOutputAnswer answer) => $"{SiteNumbers.Text(answer.VolumePerHour, answer.Units.BulkVolume!)} an hour";
+    public static SiteSentence Sentence(RollerOutputAnswer answer) => new("", SiteNumbers.Text(answer.VolumePerHour, answer.Units.BulkVolume!), "an hour");
 
     /// <summary>What a form rests on, for the printed sheet.</summary>
     public static IEnumerable<(string Name, string Text)> Given(FormTexts texts) => SiteSheet.Given(texts, Width, Overlap, Speed, Passes, Thickness, Efficiency);

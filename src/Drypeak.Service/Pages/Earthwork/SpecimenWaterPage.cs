@@ -40,6 +40,7 @@ internal static class SpecimenWaterPage
             new("Portions, each its own", [Portions]) { Columns = 1, Note = "Leave the targets out where an optimum is expected below." },
             new("or portions that are alike", [WetMass, Present, Targets]),
             new("or an optimum that is expected, in place of targets", [Optimum, PlasticLimit, Number, Spacing]),
+            new("Present water content of all in other ways", [WaterFields.Tins("/tins"), .. WaterFields.OtherWays("")]) { UnderMore = true },
             new("Water temperature", [SiteFields.WaterTemperature]) { UnderMore = true },
         ],
         Demonstrations =
@@ -55,15 +56,15 @@ internal static class SpecimenWaterPage
         View = typeof(SpecimenWaterView),
         Check = new SpecimenWaterRules(limits).Check,
         Compute = FormAnswer.Of<SpecimenWaterRequest, SpecimenWaterAnswer>(SpecimenWaterJob.Compute),
-        Headline = Headline,
+        Headline = answer => Sentence(answer).ToString(),
     };
 
     /// <summary>The answer in a few words.</summary>
-    public static string Headline(SpecimenWaterAnswer answer)
+    public static SiteSentence Sentence(SpecimenWaterAnswer answer)
     {
         var most = answer.Portions.MaxBy(portion => portion.WaterToAdd.Mass)!;
         return most.WaterToAdd.Mass > 0
-            ? $"Up to {SiteNumbers.Text(most.WaterToAdd.Mass, answer.Units.Mass!)} of water to a portion"
-            : "Every portion is dried back";
+            ? new SiteSentence("Up to", SiteNumbers.Text(most.WaterToAdd.Mass, answer.Units.Mass!), "of water to a portion")
+            : new SiteSentence("", "No water", "to add to any portion");
     }
 }

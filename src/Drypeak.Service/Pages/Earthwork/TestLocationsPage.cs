@@ -62,7 +62,7 @@ internal static class TestLocationsPage
         View = typeof(TestLocationsView),
         Check = job.Check,
         Compute = FormAnswer.Of<TestLocationsRequest, TestLocationsAnswer, Figures.PlotChart>(job.Compute, job.Chart),
-        Headline = Headline,
+        Headline = answer => Sentence(answer).ToString(),
         MoreFiles =
         [
             new Forms.FormFile("locations.csv", "Locations as CSV", submission => Encoding.UTF8.GetBytes(TestLocationsTable.Text((TestLocationsAnswer)submission.Answer!)), "text/csv; charset=utf-8"),
@@ -70,6 +70,6 @@ internal static class TestLocationsPage
     };
 
     /// <summary>The answer in a few words.</summary>
-    public static string Headline(TestLocationsAnswer answer) =>
-        $"{answer.Count} {(answer.Count == 1 ? "test" : "tests")}: {answer.PerLift} in each of {answer.LiftsTested} {(answer.LiftsTested == 1 ? "lift" : "lifts")}";
+    public static SiteSentence Sentence(TestLocationsAnswer answer) => new(
+        "", answer.Count == 1 ? "1 test:" : $"{answer.Count} tests:", answer.LiftsTested == 1 ? $"{answer.PerLift} in one lift" : $"{answer.PerLift} in each of {answer.LiftsTested} lifts");
 }

@@ -43,14 +43,14 @@ internal static class TestStripPage
         View = typeof(TestStripView),
         Check = job.Check,
         Compute = FormAnswer.Of<TestStripRequest, TestStripAnswer, Figures.PlotChart>(job.Compute, job.Chart),
-        Headline = Headline,
+        Headline = answer => Sentence(answer).ToString(),
     };
 
     /// <summary>The answer in a few words.</summary>
-    public static string Headline(TestStripAnswer answer) => answer switch
+    public static SiteSentence Sentence(TestStripAnswer answer) => answer switch
     {
-        { Passes: { } passes } => passes == 1 ? "1 pass" : $"{passes} passes",
-        { Curve: { } } => $"More than {answer.Stages[^1].Passes} passes",
-        _ => "No growth curve",
+        { Passes: { } passes } => new SiteSentence("", passes == 1 ? "1 pass" : $"{passes} passes", answer.Target is { } target ? $"to {SiteNumbers.Text(target.DryDensity, answer.Units.Density!)}" : ""),
+        { Curve: { } } => new SiteSentence("More than", $"{answer.Stages.Last(stage => stage.Fitted is { }).Passes} passes", ""),
+        _ => new SiteSentence("", "No growth curve", "from these readings"),
     };
 }

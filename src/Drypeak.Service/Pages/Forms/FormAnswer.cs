@@ -7,7 +7,11 @@ namespace Drypeak.Service.Pages.Forms;
 /// <typeparam name="TAnswer">The job's answer.</typeparam>
 /// <param name="Answer">The answer.</param>
 /// <param name="Draw">Draws its figure in a size; null where it has none.</param>
-public readonly record struct FormAnswer<TAnswer>(TAnswer Answer, Func<FigureSize, Figure>? Draw);
+public readonly record struct FormAnswer<TAnswer>(TAnswer Answer, Func<FigureSize, Figure>? Draw)
+{
+    /// <summary>Further figures of the same answer, each with its name; null: none.</summary>
+    public IReadOnlyList<(string Name, Func<FigureSize, Figure> Draw)>? Further { get; init; }
+}
 
 /// <summary>How a job answers a page.</summary>
 internal static class FormAnswer

@@ -58,7 +58,11 @@ public sealed record NumbersField(string Name, string Label, string Place) : For
 /// <param name="Value">As in the request; empty: the member is left out.</param>
 /// <param name="Text">As on the page.</param>
 /// <param name="Group">Heading that it stands under, or null.</param>
-public sealed record Choice(string Value, string Text, string? Group = null);
+public sealed record Choice(string Value, string Text, string? Group = null)
+{
+    /// <summary>What the member is where it is true or false and no text; null: the value.</summary>
+    public bool? Flag { get; init; }
+}
 
 /// <summary>A choice among few. The first is chosen where <see cref="FormField.Otherwise"/> names none.</summary>
 public sealed record ChoiceField : FormField

@@ -51,6 +51,9 @@ public abstract class FormPage
     /// <summary>The component that shows the answer: it has a parameter <c>Answer</c> of the answer's type and a parameter <c>Submission</c>, and is an <see cref="AnswerLayout"/> with what is particular put in.</summary>
     public required Type View { get; init; }
 
+    /// <summary>A component below the form that helps to fill it; null: none.</summary>
+    public Type? Help { get; init; }
+
     /// <summary>Files that an answer can be taken away in beside those of every page.</summary>
     internal IReadOnlyList<FormFile> MoreFiles { get; init; } = [];
 
@@ -101,11 +104,13 @@ public sealed class FormPage<TRequest, TAnswer> : FormPage
             };
         }
 
-        var (answer, draw) = Compute(read.Value!);
+        var computed = Compute(read.Value!);
+        var (answer, draw) = computed;
         return new FormSubmission(this, texts, reading)
         {
             Answer = answer,
             Draw = draw,
+            Further = computed.Further ?? [],
             Headline = Headline(answer),
             RequestFile = request,
             AnswerFile = JsonSerializer.SerializeToUtf8Bytes(answer, ServiceJson.Of<TAnswer>()),

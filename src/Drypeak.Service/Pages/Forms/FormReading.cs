@@ -100,6 +100,9 @@ public sealed class FormReading
             case CheckField check when text == CheckField.Ticked:
                 Put(check, check.Place.EndsWith(']') ? null : true);
                 break;
+            case ChoiceField choice when choice.Choices.FirstOrDefault(known => known.Value == text)?.Flag is { } flag:
+                Put(choice, flag);
+                break;
             case TextField or ChoiceField:
                 Put(field, text);
                 break;

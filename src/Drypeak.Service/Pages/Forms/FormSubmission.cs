@@ -17,6 +17,9 @@ public sealed record FormSubmission(FormPage Page, FormTexts Texts, FormReading?
     /// <summary>Draws the answer's figure in a size; null where there is none.</summary>
     public Func<FigureSize, Figure>? Draw { get; init; }
 
+    /// <summary>Further figures of the answer, each with its name.</summary>
+    public IReadOnlyList<(string Name, Func<FigureSize, Figure> Draw)> Further { get; init; } = [];
+
     /// <summary>The answer in a few words, or null.</summary>
     public string? Headline { get; init; }
 

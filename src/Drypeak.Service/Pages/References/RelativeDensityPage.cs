@@ -25,6 +25,7 @@ internal static class RelativeDensityPage
         WhatComesOut = "Relative density and relative compaction side by side, with the dry density and the void ratio that go with them.",
         Parts =
         [
+            new("", [FormFields.Reference]) { Columns = 1 },
             new("Units", [FormFields.DensityUnit, FormFields.TinUnit, FormFields.DecimalMark]) { Columns = 3 },
             new("The soil, by one measure", [Dry, VoidRatio, Wet, Water, Compaction, Relative]),
             new("Its loosest and its densest state", [Least, Most, LeastVoids, MostVoids]),
@@ -33,7 +34,7 @@ internal static class RelativeDensityPage
         ],
         Demonstrations =
         [
-            new("drain", "the sand of a drainage blanket", (Dry, "1.68"), (Least, "1.49"), (Most, "1.78"), (FormFields.SpecificGravity, "2.66"), (FormFields.Determined, "measured")),
+            new("drain", "the sand of a drainage blanket", (FormFields.Reference, "Ternmarsh, drainage blanket, 0+450"), (Dry, "1.68"), (Least, "1.49"), (Most, "1.78"), (FormFields.SpecificGravity, "2.66"), (FormFields.Determined, "measured")),
             new("required", "which density is 70 % relative density", (Relative, "70"), (Least, "1.49"), (Most, "1.78")),
             new("loose", "a test looser than the loosest state", (Wet, "1.52"), (Water, "4.5"), (Least, "1.49"), (Most, "1.78")),
         ],

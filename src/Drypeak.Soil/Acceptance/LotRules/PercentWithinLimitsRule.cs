@@ -1,5 +1,6 @@
 using Drypeak.Soil.Acceptance.Statistics;
 using Drypeak.Soil.Quantities;
+using MathNet.Numerics.RootFinding;
 
 namespace Drypeak.Soil.Acceptance.LotRules;
 
@@ -95,13 +96,6 @@ public sealed record PercentWithinLimitsRule(Requirement Limits, double Required
     {
         double Excess(double off) => PercentWithinLimits.Of((half - off) / deviation, (half + off) / deviation, count) - Required;
         var far = half + (deviation * (count - 1) / Math.Sqrt(count));
-        var (inside, outside) = (0.0, far);
-        for (var i = 0; i < 60; i++)
-        {
-            var middle = (inside + outside) / 2;
-            (inside, outside) = Excess(middle) >= 0 ? (middle, outside) : (inside, middle);
-        }
-
-        return inside;
+        return Excess(0) < 0 ? 0 : Brent.FindRoot(Excess, 0, far, 1e-12 * far, 200);
     }
 }

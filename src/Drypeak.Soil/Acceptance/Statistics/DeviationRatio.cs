@@ -11,7 +11,7 @@ internal static class DeviationRatio
     /// <summary>Beyond this many standard deviations of y on either side less than 1e-16 is left.</summary>
     private const double Tails = 9;
 
-    private const int Panels = 24;
+    private const int Panels = 10;
 
     /// <summary>Mean of a function over y, for a function between 0 and 1.</summary>
     /// <param name="degreesOfFreedom">ν, 1 or more.</param>

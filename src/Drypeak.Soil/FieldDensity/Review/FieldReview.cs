@@ -112,7 +112,7 @@ internal static class FieldReview
             };
             if (kind is not null)
             {
-                yield return kind.At($"/specification/requirements/{i}", JudgementWords.Of(judged, result, test.Units));
+                yield return kind.At($"/specification/requirements/{i}", JudgementWords.Of(judged, result.Judged, test.Units));
             }
         }
     }

@@ -7,12 +7,12 @@ namespace Drypeak.Soil.FieldDensity.Review;
 public static class JudgementWords
 {
     /// <summary>The sentence, and the next step where one is needed.</summary>
-    public static string Of(Judgement judged, FieldResult result, UnitSet units)
+    public static string Of(Judgement judged, JudgedSoil soil, UnitSet units)
     {
         var (quantity, requirement) = (judged.Requirement.Quantity, judged.Requirement);
         if (judged.Value is not { } value)
         {
-            return $"The {quantity.Words()} could not be computed: {WhatIsMissing(quantity, result)}";
+            return $"The {quantity.Words()} could not be computed: {WhatIsMissing(quantity, soil)}";
         }
 
         var start = $"The {quantity.Words()} {(quantity == AcceptedQuantity.AirVoids ? "are" : "is")} {Standing(requirement, value, units)}";
@@ -55,20 +55,19 @@ public static class JudgementWords
             : $"{Amount(quantity, amount, units)} {(margin > 0 == lower ? "above" : "below")} the {name} of {Text(quantity, limit, units)}";
     }
 
-    private static string WhatIsMissing(AcceptedQuantity quantity, FieldResult result)
+    private static string WhatIsMissing(AcceptedQuantity quantity, JudgedSoil soil)
     {
-        var (soil, judged) = (result.Soil, result.Judged);
         var needsReference = quantity is AcceptedQuantity.RelativeCompaction or AcceptedQuantity.RelativeDensity;
         var needsPhases = quantity is AcceptedQuantity.Saturation or AcceptedQuantity.AirVoids or AcceptedQuantity.VoidRatio;
         var needsDensity = needsReference || needsPhases || quantity is AcceptedQuantity.DryDensity or AcceptedQuantity.WetDensity;
         var needsWater = quantity is AcceptedQuantity.WaterContent or AcceptedQuantity.WaterContentFromOptimum or AcceptedQuantity.Saturation or AcceptedQuantity.AirVoids
-            || (needsReference && judged is { OnFines: true, Oversize: { } });
-        return needsDensity && soil is { WetDensity: null, DryDensity: null } ? "the readings give no density. Correct them, or test again."
+            || (needsReference && soil is { OnFines: true, Oversize: { } });
+        return needsDensity && soil is { WetDensityAlone: null, DryDensity: null } ? "the readings give no density. Correct them, or test again."
             : (needsWater || needsDensity) && soil.WaterContent is null && (needsWater || soil.DryDensity is null) ? "there is no water content. Give waterContent, tins, wetBasis or carbide."
-            : needsReference && judged.MaximumDryDensity is null ? "there is no maximum dry density. Give laboratory.maximumDryDensity, or a laboratory test with an optimum."
+            : needsReference && soil.MaximumDryDensity is null ? "there is no maximum dry density. Give laboratory.maximumDryDensity, or a laboratory test with an optimum."
             : quantity == AcceptedQuantity.RelativeDensity ? "there is no minimum dry density. Give laboratory.minimumDryDensity."
             : quantity == AcceptedQuantity.WaterContentFromOptimum ? "there is no optimum water content. Give laboratory.optimumWaterContent, or a laboratory test with an optimum."
-            : judged.SpecificGravity is null ? "there is no specific gravity. Give it, marked as assumed if it was not measured."
+            : soil.SpecificGravity is null ? "there is no specific gravity. Give it, marked as assumed if it was not measured."
             : "the density leaves no voids. Check volume, masses and specific gravity.";
     }
 }
