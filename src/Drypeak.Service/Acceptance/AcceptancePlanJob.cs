@@ -21,7 +21,7 @@ internal sealed class AcceptancePlanJob(Limits limits)
     private const int UsualMostTests = 1_000;
     private const int UsualSeed = 1;
 
-    private readonly AcceptancePlanRules _rules = new(limits);
+    private readonly Lazy<AcceptancePlanRules> _rules = new(() => new(limits));
 
     /// <summary>The kind of its chart.</summary>
     public ChartKind<PlotChart> Chart { get; } = ChartKind.Plot("acceptance-plan", "The operating characteristic of a plan", limits);
@@ -37,7 +37,7 @@ internal sealed class AcceptancePlanJob(Limits limits)
     }
 
     /// <summary>Every broken rule; empty where the request can be computed.</summary>
-    public IReadOnlyList<Fault> Check(AcceptancePlanRequest request) => _rules.Validate(request).ToFaults();
+    public IReadOnlyList<Fault> Check(AcceptancePlanRequest request) => _rules.Value.Validate(request).ToFaults();
 
     /// <summary>Computes a request that passed <see cref="Check"/>.</summary>
     public Charted<AcceptancePlanAnswer, PlotChart> Compute(AcceptancePlanRequest request)

@@ -19,7 +19,7 @@ internal sealed class LotAcceptanceJob(MoistureDensityJob laboratory, FieldDensi
     /// <summary>More marks than this never fit an address; larger pictures are to be posted for.</summary>
     private const int MostLinkedTests = 500;
 
-    private readonly LotAcceptanceRules _rules = new(laboratory, field, limits);
+    private readonly Lazy<LotAcceptanceRules> _rules = new(() => new(laboratory, field, limits));
 
     /// <summary>The kind of its charts.</summary>
     public ChartKind<PlotChart> Chart { get; } = ChartKind.Plot("lot-acceptance", "A picture of a lot: results in order, histogram, window or map", limits);
@@ -37,7 +37,7 @@ internal sealed class LotAcceptanceJob(MoistureDensityJob laboratory, FieldDensi
     }
 
     /// <summary>Every broken rule; empty where the request can be computed.</summary>
-    public IReadOnlyList<Fault> Check(LotAcceptanceRequest request) => _rules.Check(request);
+    public IReadOnlyList<Fault> Check(LotAcceptanceRequest request) => _rules.Value.Check(request);
 
     /// <summary>Computes a request that passed <see cref="Check"/>.</summary>
     public Charted<LotAcceptanceAnswer, PlotChart> Compute(LotAcceptanceRequest request)
