@@ -30,7 +30,9 @@ internal static class FieldDensityPage
     private static readonly TableField OvenPairs = new("oven-pairs", "Gauge and oven on the same soil", "/nuclearGauge/ovenPairs",
         [new ColumnKind("Gauge", Measure.Percent, "gauge"), new ColumnKind("Oven", Measure.Percent, "oven")])
     {
-        Lines = 3, Row = "Pair", Hint = "Water contents in %, a pair a line. They give the gauge's moisture offset.",
+        Lines = 3,
+        Row = "Pair",
+        Hint = "Water contents in %, a pair a line. They give the gauge's moisture offset.",
     };
 
     private static readonly NumberField SoilWet = new("soil-wet", "Wet soil out of the hole", "/soil/wet") { UnitOf = FormFields.MassUnit, Hint = "alone, or with its container below" };
