@@ -12,7 +12,7 @@ internal static class RapidMethodChart
     {
         var title = result.DensityRatio is { } ratio ? $"Density ratio {ReaderText.Percent(ratio)}" : "No peak between the specimens";
         var subtitle = result is { PeakDensity: { } most, PeakWaterAdded: { } z }
-            ? $"peak {ReaderText.Of(most, unit)} at {ReaderText.Percent(z)} water {(z < 0 ? "taken off" : "added")}" : null;
+            ? $"peak {ReaderText.Of(most, unit)} at {ReaderText.Percent(Math.Abs(z))} water {(z < 0 ? "taken off" : "added")}" : null;
         return new PlotChart
         {
             Reference = request.Reference,

@@ -1,6 +1,5 @@
 using System.Globalization;
 using System.Text;
-using System.Text.Json;
 using Drypeak.Service.Tests.Laboratory;
 using Xunit;
 

@@ -1,5 +1,4 @@
 using System.Net.Http.Headers;
-using System.Text.Json;
 using System.Xml.Linq;
 using Drypeak.Service.Tests.Charts;
 using Drypeak.Service.Tests.Laboratory;

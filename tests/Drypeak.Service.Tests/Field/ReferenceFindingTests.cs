@@ -1,4 +1,3 @@
-using System.Text.Json;
 using Drypeak.Service.Tests.Laboratory;
 using Drypeak.Soil.References;
 using Xunit;

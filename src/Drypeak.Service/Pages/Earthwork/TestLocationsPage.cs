@@ -16,7 +16,11 @@ internal static class TestLocationsPage
     private static readonly NumberField Start = new("start-station", "From station", "/area/startStation") { UnitOf = SiteFields.Length };
 
     private static readonly TableField Outline = new("outline", "or corners in order, a row each", "/area/outline",
-        [new ColumnKind("Station", Measure.Ratio, "0"), new ColumnKind("Offset", Measure.Ratio, "1")]) { Row = "Corner", Lines = 5 };
+        [new ColumnKind("Station", Measure.Ratio, "0"), new ColumnKind("Offset", Measure.Ratio, "1")])
+    {
+        Row = "Corner",
+        Lines = 5,
+    };
 
     private static readonly ColumnKind Zone = new("Zone", Measure.Text, "label");
 

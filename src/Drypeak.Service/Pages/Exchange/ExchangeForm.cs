@@ -53,6 +53,9 @@ public sealed record ExchangeResult(
 /// <summary>A form with its answer, or with what is wrong.</summary>
 public sealed record ExchangeSubmission(ExchangeForm Form)
 {
+    /// <summary>The outcomes of field tests, in the order in which they are counted.</summary>
+    private static readonly string[] Outcomes = ["accepted", "rejected", "undecided"];
+
     public ExchangeResult? Result { get; init; }
 
     /// <summary>What is wrong with the file, at its lines.</summary>
@@ -119,7 +122,7 @@ public sealed record ExchangeSubmission(ExchangeForm Form)
 
     private static string SentenceOfField(IReadOnlyList<FieldDensityAnswer> tests)
     {
-        var decided = new[] { "accepted", "rejected", "undecided" }
+        var decided = Outcomes
             .Select(outcome => (Outcome: outcome, Count: tests.Count(test => test.Outcome == outcome))).Where(each => each.Count > 0).Select(each => $"{each.Count} {each.Outcome}").ToList();
         return decided.Count == 0 ? Sentence(tests.Count, "field density test") : $"{Counted(tests.Count, "field density test")} computed: {string.Join(", ", decided)}.";
     }

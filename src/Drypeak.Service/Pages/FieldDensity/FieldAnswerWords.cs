@@ -34,7 +34,7 @@ internal static class FieldAnswerWords
             { } => "Dry the lift, roll it again, and test again.",
             null => "Roll the lift again, and test again.",
         },
-        { Outcome: "undecided" } => "Make another test on the same lift before it is covered, or give what is missing.",
+        { Outcome: "undecided" } => "Leave the lift open until that is done and has decided.",
         _ => null,
     };
 
