@@ -78,9 +78,9 @@ public sealed record Limits
     [Range(1, 100_000)]
     public int RequestsAtOnce { get; init; } = 64;
 
-    /// <summary>Requests that wait to be computed; beyond them the answer is 503 at once. Default 1,024.</summary>
+    /// <summary>Requests that wait to be computed; beyond them the answer is 503 at once. Default 512.</summary>
     [Range(0, 1_000_000)]
-    public int RequestsWaiting { get; init; } = 1024;
+    public int RequestsWaiting { get; init; } = 512;
 
     /// <summary>Batches that are streamed at once, beside the other requests; as many again wait. Default 256.</summary>
     [Range(1, 100_000)]
