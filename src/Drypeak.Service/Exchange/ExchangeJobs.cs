@@ -28,5 +28,5 @@ internal sealed class ExchangeJobs(MoistureDensityJob laboratory, FieldDensityJo
     /// <summary>A job done line by line.</summary>
     public LineJob ByLine(string name) => name == MoistureDensity
         ? LineJob.Of<MoistureDensityRequest, MoistureDensityAnswer>(laboratory.Check, request => laboratory.Compute(request).Answer, answer => answer.Findings)
-        : LineJob.Of<FieldDensityRequest, FieldDensityAnswer>(inPlace.Check, FieldDensityJob.Compute, answer => answer.Findings);
+        : LineJob.Of<FieldDensityRequest, FieldDensityAnswer>(inPlace.Check, request => inPlace.ComputeWithChart(request).Answer, answer => answer.Findings);
 }

@@ -238,7 +238,8 @@ public sealed class BatchTests(RunningService service)
         Assert.Equal(400, problem.Number("/status"));
         Assert.Equal(answers.Count - 1, problem.Number("/line"));
         Assert.False(answers[^1].At("/summary/complete").GetBoolean());
-        Assert.InRange(answers.Count, 10, 2000);
+        // Brotli gives nothing of a block that is damaged further on.
+        Assert.InRange(answers.Count, cutShort ? 10 : 2, 2000);
     }
 
     [Theory]
@@ -252,7 +253,7 @@ public sealed class BatchTests(RunningService service)
             packer.Write(Encoding.UTF8.GetBytes(Line + "\n"));
             var blanks = new byte[1 << 20];
             Array.Fill(blanks, (byte)'\n');
-            for (var i = 0; i < 100; i++)
+            for (var i = 0; i < 28; i++)
             {
                 packer.Write(blanks);
             }

@@ -13,8 +13,8 @@ internal static class BodyCoding
     /// <summary>How many bytes a byte of a compressed body may become. Tests that differ in their numbers compress about tenfold, the same test over and over two hundredfold.</summary>
     public const int LargestExpansion = 250;
 
-    /// <summary>Bytes that any body may become, however well it compresses: 64 MiB. They are read line by line and never held.</summary>
-    private const long AlwaysAllowed = 64L << 20;
+    /// <summary>Bytes that any body may become, however well it compresses: 16 MiB. They are read line by line and never held.</summary>
+    private const long AlwaysAllowed = 16L << 20;
 
     /// <summary>Without it the framework takes a compressed body that is cut short for one that ends there.</summary>
     private const string StrictValidation = "System.IO.Compression.UseStrictValidation";

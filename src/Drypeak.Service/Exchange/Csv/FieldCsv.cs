@@ -83,7 +83,7 @@ internal static class FieldCsv
             return CsvOutcome<FieldDensityAnswer>.Refused(ofForm, ofValues);
         }
 
-        var answers = tests.ConvertAll(FieldDensityJob.Compute);
+        var answers = tests.ConvertAll(test => job.ComputeWithChart(test).Answer);
         var replaced = table.Rows.Zip(answers).SelectMany(test => new[]
         {
             table.Replaced(test.First, RelativeCompaction, test.Second.RelativeCompaction),
