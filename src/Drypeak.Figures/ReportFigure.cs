@@ -21,7 +21,7 @@ public static class ReportFigure
         var pages = new ReportPages(report, paper, theme);
         List<IReportBlock> before =
         [
-            new HeadBlock(report),
+            .. HeadBlocks.Of(report, pages.Width),
             .. FactBlocks.Of("Identification", report.Identification, pages.Width),
             .. FactBlocks.Of("Method", report.Method, pages.Width),
             .. TableBlocks.Of(report.Table, pages.Width),

@@ -2,27 +2,18 @@ using Drypeak.Figures.Drawing;
 
 namespace Drypeak.Figures.Layout.Reports;
 
-/// <summary>What was tested, the result, how sure it is, and the name.</summary>
-internal sealed class HeadBlock(Report report) : IReportBlock
+/// <summary>What was tested, the result, how sure it is, and the name: a block a line.</summary>
+internal static class HeadBlocks
 {
-    public double Height(double width) => Lines(width).Sum(line => line.Style.LineHeight) + 6;
+    public static IEnumerable<IReportBlock> Of(Report report, double width) =>
+    [
+        .. Lines(report.Kind, ReportText.Label, width),
+        .. Lines(report.Result, ReportText.Result, width),
+        .. Lines(report.Support, ReportText.Value with { Color = ColorRole.Quiet }, width),
+        .. Lines(report.Reference, ReportText.Section, width),
+    ];
 
-    public void Draw(ReportPages pages)
-    {
-        var down = 0.0;
-        foreach (var (text, style) in Lines(pages.Width))
-        {
-            pages.Text(text, ReportPages.Left, down + style.Baseline, style);
-            down += style.LineHeight;
-        }
-    }
-
-    private IEnumerable<(string Text, ReportText Style)> Lines(double width)
-    {
-        IEnumerable<(string, ReportText)> Of(string? text, ReportText style) =>
-            string.IsNullOrWhiteSpace(text) ? [] : style.Wrapped(text, width).Select(line => (line, style));
-        return [.. Of(report.Kind, ReportText.Label), .. Of(report.Result, ReportText.Result), .. Of(report.Support, ReportText.Value with { Color = ColorRole.Quiet }), .. Of(report.Reference, ReportText.Section)];
-    }
+    private static IEnumerable<IReportBlock> Lines(string? text, ReportText style, double width) => NoteBlocks.Of(text ?? "", style, width);
 }
 
 /// <summary>Labels with their texts, in columns: a block a row, and more than one where a text is long.</summary>
