@@ -28,7 +28,8 @@ public sealed record MovingMeanRule(Requirement Limits, int Span, double? Floor)
         if (WorstMean(known.Values, out var at) is not { } worst)
         {
             return new LotJudgement(this, null, Limits.Minimum ?? Limits.Maximum, below.Count > 0 ? Conformance.NotMet : Conformance.Undecided,
-                $"A mean of {Span} consecutive tests needs as many; there {(known.Count == 1 ? "is 1" : $"are {known.Count}")}.{floor}") { TooFew = true };
+                $"A mean of {Span} consecutive tests needs as many; there {(known.Count == 1 ? "is 1" : $"are {known.Count}")}.{floor}")
+            { TooFew = true };
         }
 
         return new LotJudgement(this, worst, DecidingLimit(worst), IsWithin(worst) && below.Count == 0 ? Conformance.Met : Conformance.NotMet,

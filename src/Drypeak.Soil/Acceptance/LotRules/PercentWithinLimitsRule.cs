@@ -30,7 +30,8 @@ public sealed record PercentWithinLimitsRule(Requirement Limits, double Required
         {
             var inside = IsWithin(summary.Mean);
             return Judged(inside ? 1 : 0, $"All {known.Count} values are equal, {Standing(summary.Mean, units)}, so that {(inside ? "all" : "none")} of the lot counts as within the limits.")
-                with { NoSpread = true };
+                with
+            { NoSpread = true };
         }
 
         var (lower, upper) = QualityIndices(summary);

@@ -23,14 +23,16 @@ public sealed record WetOfOptimumsRule(double Required) : LotRule
         if (ShareOf(sample.Tests) is not { } share)
         {
             return new LotJudgement(this, null, Required, Conformance.Undecided,
-                "No test can be held against the line of optimums. Give water contents, densities, the specific gravity, and the laboratory's optimum and maximum.") { Missing = missing };
+                "No test can be held against the line of optimums. Give water contents, densities, the specific gravity, and the laboratory's optimum and maximum.")
+            { Missing = missing };
         }
 
         var sentence = $"{known.Count(test => test.IsWetOfOptimums is true)} of {known.Count} tests lie on the line of optimums or wet of it: {ReaderText.Percent(share)}, where {ReaderText.Percent(Required)} is required.";
         return missing.Count == 0
             ? new LotJudgement(this, share, Required, share >= Required * (1 - 1e-9) ? Conformance.Met : Conformance.NotMet, sentence)
             : new LotJudgement(this, share, Required, Conformance.Undecided,
-                $"{sentence} {Labels.Listed(missing, "test")} cannot be held against it, so that the rule stays undecided.") { Missing = missing };
+                $"{sentence} {Labels.Listed(missing, "test")} cannot be held against it, so that the rule stays undecided.")
+            { Missing = missing };
     }
 
     /// <summary>The share among the tests that can be held against the line; null where none can.</summary>
