@@ -1,4 +1,5 @@
 using System.Diagnostics;
+using System.Net;
 using System.Net.Http.Headers;
 using System.Text;
 using System.Text.Json;
@@ -93,6 +94,11 @@ public sealed class PrometheusTests : IAsyncLifetime
     private async Task<JsonElement> AskAsync(string query)
     {
         using var answer = await _client.GetAsync(new Uri($"/api/v1/query?query={Uri.EscapeDataString(query)}", UriKind.Relative), Stop);
+        if (answer.StatusCode == HttpStatusCode.ServiceUnavailable)
+        {
+            throw new HttpRequestException("Prometheus listens, and is not ready yet.");
+        }
+
         return JsonSerializer.Deserialize<JsonElement>(await answer.Content.ReadAsStringAsync(Stop));
     }
 
@@ -116,7 +122,7 @@ public sealed class PrometheusTests : IAsyncLifetime
             }
             catch (HttpRequestException)
             {
-                // Prometheus does not listen yet.
+                // Prometheus does not listen yet, or is still starting.
             }
         }
 
