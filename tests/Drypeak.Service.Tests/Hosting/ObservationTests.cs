@@ -47,16 +47,6 @@ public sealed partial class ObservationTests(RunningService service)
     }
 
     [Fact]
-    public async Task The_framework_s_own_counts_stand_beside_ours()
-    {
-        // A request is counted when it is answered.
-        await ScrapeAsync();
-        var metrics = await ScrapeAsync();
-        string[] names = ["http_server_request_duration_seconds_bucket", "http_server_active_requests", "kestrel_active_connections", "dotnet_gc_collections_total", "dotnet_process_memory_working_set_bytes"];
-        Assert.All(names, name => Assert.Contains("\n" + name, metrics, StringComparison.Ordinal));
-    }
-
-    [Fact]
     public async Task OpenMetrics_is_given_where_it_is_asked_for()
     {
         using var request = new HttpRequestMessage(HttpMethod.Get, "/metrics");
